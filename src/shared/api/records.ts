@@ -1,0 +1,32 @@
+import { z } from 'zod';
+import { stripPointsSchema } from './note-rows.ts';
+
+export const MAX_RECORD_BYTES = 10 * 1024 * 1024;
+export const MAX_RECORD_ROWS = 200_000;
+
+/**
+ * A stored record and how far its reading has come. The file is kept whole by content hash; reading
+ * happens off the request path.
+ */
+export const recordSchema = z.object({
+  id: z.number(),
+  status: z.enum(['reading', 'ready', 'failed']),
+  fileName: z.string(),
+  source: z.enum(['file', 'pasted', 'typed']),
+  count: z.number().nullable(),
+  unit: z.enum(['C', 'F', 'K']).nullable(),
+  assumed: z.array(z.string()),
+  skipped: z.array(z.object({ line: z.number(), reason: z.string() })),
+  skippedCount: z.number(),
+  strip: stripPointsSchema.nullable(),
+  error: z.object({ message: z.string(), line: z.number().nullable() }).nullable(),
+});
+export type FiringRecord = z.infer<typeof recordSchema>;
+
+/** Points for the chart: downsampled without losing extremes. */
+export const recordPointsSchema = z.object({
+  points: stripPointsSchema,
+  secondProbe: stripPointsSchema.nullable(),
+  count: z.number(),
+});
+export type RecordPoints = z.infer<typeof recordPointsSchema>;
