@@ -1,0 +1,31 @@
+import { accountRoutes } from './accounts/account-routes.ts';
+import { sessionRoutes } from './accounts/session-routes.ts';
+import { memberRoutes } from './accounts/member-routes.ts';
+import { adminRoutes } from './admin/admin-routes.ts';
+import { deskRoutes } from './desk/desk-routes.ts';
+import { figureRoutes } from './figures/figure-routes.ts';
+import type { Route } from './http/define-route.ts';
+import { reportRoutes } from './http/report-routes.ts';
+import { kilnRoutes } from './kilns/kiln-routes.ts';
+import { draftRoutes } from './notes/draft-routes.ts';
+import { noteRoutes } from './notes/note-routes.ts';
+import { pictureRoutes } from './pictures/picture-routes.ts';
+import { recordRoutes } from './records/record-routes.ts';
+import { searchRoutes } from './search/search-routes.ts';
+
+/** Every route of the API, feature by feature; a test compares this with the table of rights. */
+export const ROUTES: readonly Route[] = [
+  ...reportRoutes,
+  ...sessionRoutes,
+  ...accountRoutes,
+  ...memberRoutes,
+  ...kilnRoutes,
+  ...noteRoutes,
+  ...draftRoutes,
+  ...recordRoutes,
+  ...pictureRoutes,
+  ...deskRoutes,
+  ...searchRoutes,
+  ...figureRoutes,
+  ...adminRoutes,
+];
