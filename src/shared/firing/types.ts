@@ -73,6 +73,13 @@ export interface LevellingOff {
   readonly celsius: number;
   readonly lowCelsius: number;
   readonly highCelsius: number;
+  /** Minutes from the last reading to the aim, when both ends of the interval reach it. */
+  readonly reachesAim: { readonly lowMinutes: number; readonly highMinutes: number } | null;
+}
+/** From the end of the firing to the first piece drawn. */
+export interface CoolingToDraw {
+  readonly minutes: number;
+  readonly dropCelsius: number;
 }
 export interface ProbeSpread {
   readonly fromMinute: number;
@@ -84,6 +91,8 @@ export interface ProbeSpread {
 export interface FiringReading {
   readonly count: number;
   readonly spanMinutes: number;
+  /** Minute of the last usable reading. */
+  readonly lastMinute: number;
   readonly start: { readonly minute: number; readonly inferred: boolean };
   readonly shutOff: { readonly minute: number; readonly inferred: boolean };
   readonly aimCelsius: number | null;
@@ -112,6 +121,17 @@ export interface FiringReading {
   /** Rapid swings: the residual scatter about the curve, °C, when it is more than a probe's. */
   readonly waveringCelsius: number | null;
   readonly probeToleranceCelsius: number | null;
+  readonly coolingToDraw: CoolingToDraw | null;
+  /** Level of the curve at the end of the firing. */
+  readonly celsiusAtShutOff: number;
+  /** Steepest °C/min between 450 and 700 °C on the way up; null when the climb misses that span. */
+  readonly steepest450To700: number | null;
+  /** Fastest change over any 30 s, °C/min, of the readings left after wild ones are set aside. */
+  readonly fastestPerMinute: number;
+  /** Longest time without a reading between start and end of the firing. */
+  readonly longestGapMinutes: number;
+  /** Readings outside −40 to 1400 °C, or wild against both neighbours: not used. */
+  readonly setAsideCount: number;
   /** What had to be assumed, in plain words. */
   readonly assumed: readonly string[];
 }
