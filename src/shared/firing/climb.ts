@@ -1,6 +1,6 @@
 import { indexAtOrAfter } from './course.ts';
 import type { Course } from './course.ts';
-import { firstAtOrAbove, valueAt } from './curve.ts';
+import { firstAtOrAbove, stepAt, valueAt } from './curve.ts';
 import { quantile } from '../statistics/quantile.ts';
 import { WAVERING_CELSIUS } from './constants.ts';
 import type { ClimbShape, FiringReading, LevelStretch } from './types.ts';
@@ -65,15 +65,23 @@ export function steepestBetween(
   return steepest;
 }
 
+/** Where the rate turns by more than this within the window, distance from the line is curvature, °C/min. */
+const STRAIGHT_ENOUGH = 4;
+
 /**
  * Rapid swings during the firing: 1.4826 × the median distance of readings from the ±2.5 min
- * curve, °C. Null when it is no more than a steady probe shows, or there are too few readings.
+ * curve where that runs straight, °C. Null when it is no more than a steady probe shows, or there are too few readings.
  */
 export function waveringOf(course: Course): number | null {
   const { minutes, celsius } = course.record;
   const distances: number[] = [];
+  const { wide } = course;
+  const half = Math.round(wide.halfMinutes / wide.stepMinutes);
   for (let i = course.from; i < course.to; i += 1) {
-    distances.push(Math.abs((celsius[i] ?? 0) - valueAt(course.wide, minutes[i] ?? 0)));
+    const step = stepAt(wide, minutes[i] ?? 0);
+    const turn = Math.abs((wide.rates[step + half] ?? Infinity) - (wide.rates[step - half] ?? 0));
+    if (turn > STRAIGHT_ENOUGH) continue;
+    distances.push(Math.abs((celsius[i] ?? 0) - valueAt(wide, minutes[i] ?? 0)));
   }
   const scatter = 1.4826 * (quantile(distances, 0.5) ?? 0);
   return distances.length >= 20 && scatter > WAVERING_CELSIUS ? scatter : null;

@@ -16,7 +16,7 @@ const LONGEST_WINDOW = 60;
 /** Time constants tried, evenly in the logarithm. */
 const TRIED = 240;
 /** A meter that shows whole degrees: the fit is never trusted further than this, °C. */
-const LEAST_SD = 0.3;
+const LEAST_SD = 0.5;
 const FURTHEST = 400;
 
 /**

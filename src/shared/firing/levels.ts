@@ -113,7 +113,7 @@ function adjusted(course: Course, run: Run, limit: number): Run {
     if (to === run.to) while (to < last && to < run.to + most && isLevel(to)) to += 1;
     return { from, to };
   }
-  const near = Math.max(1, 2.5 * course.fineError);
+  const near = Math.max(1, 4 * course.fineError);
   const start = fine.celsius[run.from] ?? 0;
   const slope = run.to > run.from ? ((fine.celsius[run.to] ?? 0) - start) / (run.to - run.from) : 0;
   const isNear = (i: number) =>
