@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import express, { type Request, type RequestHandler, type Response, type Router } from 'express';
 import type { Knex } from 'knex';
 import type { z } from 'zod';
-import type { Actor } from '../authorization/actor.ts';
+import type { Actor, SignedIn } from '../authorization/actor.ts';
 import type { Deps } from '../deps.ts';
 import { inTransaction } from '../database/transaction.ts';
 import { checkOwnOrigin } from './own-origin.ts';
@@ -82,6 +82,12 @@ export function requireAccess(actor: Actor, access: Access): void {
   if (access === 'anyone') return;
   if (actor.kind === 'visitor') throw new AppError('sign-in-needed');
   if (RANK[actor.role] < RANK[access]) throw new AppError('not-allowed');
+}
+
+/** The signed-in member behind a request that has passed an access check above `anyone`. */
+export function memberOf(actor: Actor): SignedIn {
+  if (actor.kind === 'visitor') throw new AppError('sign-in-needed');
+  return actor;
 }
 
 /** Zod's issues as JSON pointers into the body. */

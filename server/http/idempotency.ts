@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import { isDuplicate } from '../database/constraint-errors.ts';
-import { readJson } from '../database/json.ts';
+import { readJson } from '../database/read-json.ts';
 import type { Reply } from './define-route.ts';
 import { AppError } from './problem.ts';
 
@@ -46,7 +46,7 @@ export async function recallOrRemember(
     }
     return {
       status: first.status ?? 200,
-      body: readJson<object | null>(first.answer),
+      body: readJson(first.answer) as object | null,
       headers: { 'Idempotent-Replay': 'true' },
       isReply: true,
     };

@@ -20,7 +20,11 @@ export const checkSchema = z.object({
   text: z.string(),
   forModerators: z.boolean().optional(),
   offer: z
-    .object({ pointer: z.string(), value: z.union([z.number(), z.string()]), label: z.string() })
+    .object({
+      pointer: z.string(),
+      value: z.union([z.number(), z.string(), z.boolean(), z.null(), z.array(z.string())]),
+      label: z.string(),
+    })
     .optional(),
   answer: z.string().optional(),
 });

@@ -1,0 +1,141 @@
+import { randomUUID } from 'node:crypto';
+import type { Knex } from 'knex';
+import type { FollowOn } from '#shared/api/note-rows.ts';
+import { storyTexts } from '#shared/note/story.ts';
+import type { Trouble } from '#shared/vocabulary/troubles.ts';
+import { outcomesBetween } from '../figures/outcomes-between.ts';
+import { enqueue } from '../outbox/outbox.ts';
+import { factsOfKiln, type StoredRow } from './published-repository.ts';
+import { findRevision, type Revision } from './revision-repository.ts';
+import { slugOf } from './slug.ts';
+
+/**
+ * Keeps `published_firings` and `firing_troubles` in step with what is published, inside the
+ * transaction that publishes, corrects or takes down, and promises the index its change.
+ */
+export async function projectNote(trx: Knex, noteId: number): Promise<void> {
+  const note = await trx('notes').where('notes.id', noteId).first<
+    | {
+        published_revision_id: number | null;
+        published_at: Date | null;
+        author_id: number | null;
+        removed_at: Date | null;
+      }
+    | undefined
+  >('notes.published_revision_id', 'notes.published_at', 'notes.author_id', 'notes.removed_at');
+  const before = await trx('published_firings')
+    .where('published_firings.note_id', noteId)
+    .first<{ kiln_id: number } | undefined>('published_firings.kiln_id');
+  const revision =
+    note?.published_revision_id && note.removed_at === null
+      ? await findRevision(trx, note.published_revision_id)
+      : null;
+
+  // One at a time per kiln: what follows what depends on all its firings.
+  const kilnIds = [...new Set([before?.kiln_id, revision?.kilnId])].filter(
+    (id) => id !== undefined,
+  );
+  await trx('kilns')
+    .whereIn('kilns.id', kilnIds)
+    .orderBy('kilns.id')
+    .forUpdate()
+    .select('kilns.id');
+
+  await trx('published_firings').where({ note_id: noteId }).delete();
+  if (revision && note) {
+    await insertFiring(trx, revision, note.author_id, note.published_at ?? new Date());
+  }
+  for (const kilnId of kilnIds) await relinkKiln(trx, kilnId);
+  await promiseIndex(trx, noteId);
+}
+
+async function promiseIndex(trx: Knex, noteId: number): Promise<void> {
+  await enqueue(trx, 'index-note', `${String(noteId)}:${randomUUID()}`, { noteId });
+}
+
+async function insertFiring(
+  trx: Knex,
+  revision: Revision,
+  authorId: number | null,
+  publishedAt: Date,
+): Promise<void> {
+  const { fields, facts } = revision;
+  const measured = new Set<Trouble>(facts.measuredTroubles);
+  const named = new Set<Trouble>(facts.namedTroubles);
+  const troubles = [...new Set([...measured, ...named])];
+  await trx('published_firings').insert({
+    note_id: revision.noteId,
+    revision_id: revision.id,
+    kiln_id: revision.kilnId,
+    author_id: authorId,
+    fired_on: fields.when.date,
+    fired_at_time: fields.when.startTime,
+    tried_note_id: fields.triedNoteId,
+    slug: slugOf(fields.title),
+    title: fields.title,
+    facts: JSON.stringify(facts),
+    note_row: JSON.stringify(storedRow(revision, troubles)),
+    story_text: storyTexts(fields.story)
+      .map((part) => part.text)
+      .join('\n'),
+    published_at: publishedAt,
+  });
+  if (troubles.length > 0) {
+    await trx('firing_troubles').insert(
+      troubles.map((trouble) => ({
+        note_id: revision.noteId,
+        trouble,
+        measured: measured.has(trouble),
+        named: named.has(trouble),
+      })),
+    );
+  }
+}
+
+/** The row of a revision, without what is joined in when it is read. */
+export function storedRow(revision: Revision, troubles: readonly Trouble[]): StoredRow {
+  const { facts, fields } = revision;
+  return {
+    id: revision.noteId,
+    slug: slugOf(fields.title),
+    title: fields.title,
+    strip: revision.strip,
+    stripWords: revision.stripWords,
+    troubles: [...troubles],
+    measuredTroubles: [...facts.measuredTroubles],
+    targetCelsius: fields.plan.targetCelsius,
+    peakCelsius: facts.peakCelsius,
+    timeToTemperatureMinutes: facts.timeToTemperatureMinutes,
+    holdMinutes: facts.holdMinutes,
+    stallCelsius: facts.stalls.map((stall) => stall.levelCelsius),
+    crackedPieces: facts.crackedPieces,
+    pieces: facts.pieceCount,
+    changes: fields.changes.map((row) => row.change),
+    followOn: null,
+    volumeLitres: facts.volumeLitres,
+  };
+}
+
+/** Tells every firing of the kiln what came after it; only rows that change are written. */
+async function relinkKiln(trx: Knex, kilnId: number): Promise<void> {
+  const firings = await factsOfKiln(trx, kilnId);
+  for (const [index, firing] of firings.entries()) {
+    const next = firings[index + 1];
+    const followOn: FollowOn | null = next
+      ? {
+          noteId: next.noteId,
+          title: next.title,
+          firedOn: next.firedOn,
+          changes: next.row.changes,
+          peakCelsius: next.facts.peakCelsius,
+          timeToTemperatureMinutes: next.facts.timeToTemperatureMinutes,
+          outcomes: outcomesBetween(firing.facts, next.facts),
+        }
+      : null;
+    if (JSON.stringify(firing.row.followOn) === JSON.stringify(followOn)) continue;
+    await trx('published_firings')
+      .where({ note_id: firing.noteId })
+      .update({ note_row: JSON.stringify({ ...firing.row, followOn }) });
+    await promiseIndex(trx, firing.noteId);
+  }
+}
