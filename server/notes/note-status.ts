@@ -23,7 +23,10 @@ const TRANSITIONS: Readonly<Record<NoteAct, { from: readonly NoteStatus[]; to: N
   publish: { from: ['on-the-desk'], to: 'published' },
   'send-back': { from: ['on-the-desk'], to: 'sent-back' },
   decline: { from: ['on-the-desk'], to: 'declined' },
-  'take-down': { from: ['published', 'draft', 'sent-back', 'declined'], to: 'taken-down' },
+  'take-down': {
+    from: ['published', 'draft', 'sent-back', 'declined', 'handed-in', 'on-the-desk'],
+    to: 'taken-down',
+  },
   revise: { from: ['published', 'declined', 'taken-down'], to: 'draft' },
 };
 
