@@ -1,0 +1,75 @@
+import type { Knex } from 'knex';
+import type { MemberPage } from '#shared/api/accounts.ts';
+import { noteRowSchema } from '#shared/api/note-rows.ts';
+import type { Role } from '#shared/vocabulary/statuses.ts';
+import { dayOf } from '../database/day.ts';
+import { readJson } from '../database/read-json.ts';
+
+const NOTES_SHOWN = 100;
+const KILNS_SHOWN = 100;
+
+interface MemberRow {
+  id: number;
+  name: string;
+  place: string;
+  about: string;
+  role: Role;
+  joinedAt: Date;
+}
+
+/**
+ * What everybody may see of a member: their published notes, newest first, and those of their kilns
+ * that somebody has published a firing of. Null for an unknown or suspended member, or one who has
+ * never confirmed their address.
+ */
+export async function findMemberPage(db: Knex, memberId: number): Promise<MemberPage | null> {
+  const member = await db('members')
+    .where('members.id', memberId)
+    .whereNull('members.suspended_at')
+    .whereNotNull('members.email_verified_at')
+    .first<MemberRow | undefined>(
+      'members.id',
+      'members.name',
+      'members.place',
+      'members.about',
+      'members.role',
+      'members.created_at AS joinedAt',
+    );
+  if (!member) return null;
+  const { joinedAt, ...shown } = member;
+  const [kilns, noteRows] = await Promise.all([
+    findPublicKilns(db, memberId),
+    db('published_firings')
+      .where('published_firings.author_id', memberId)
+      .orderBy('published_firings.published_at', 'desc')
+      .orderBy('published_firings.note_id', 'desc')
+      .limit(NOTES_SHOWN)
+      .select<{ noteRow: unknown }[]>('published_firings.note_row AS noteRow'),
+  ]);
+  return {
+    ...shown,
+    joinedOn: dayOf(joinedAt),
+    kilns,
+    notes: noteRows.map((row) => noteRowSchema.parse(readJson(row.noteRow))),
+  };
+}
+
+async function findPublicKilns(db: Knex, keeperId: number): Promise<MemberPage['kilns']> {
+  return db('kilns')
+    .join('kiln_versions', (on) =>
+      on
+        .on('kiln_versions.kiln_id', 'kilns.id')
+        .andOn('kiln_versions.version', 'kilns.current_version'),
+    )
+    .where('kilns.keeper_id', keeperId)
+    .whereExists(
+      db('published_firings').select(db.raw('1')).whereRaw('published_firings.kiln_id = kilns.id'),
+    )
+    .orderBy('kilns.name')
+    .limit(KILNS_SHOWN)
+    .select<MemberPage['kilns']>(
+      'kilns.id',
+      'kilns.name',
+      'kiln_versions.volume_litres AS volumeLitres',
+    );
+}
