@@ -9,7 +9,8 @@ import type { DrawnMark } from './drawn-mark.ts';
 import { HeatGradient } from './HeatGradient.tsx';
 import { estimateTextWidth, placeLabels } from './label-lanes.ts';
 import type { LabelWish } from './label-lanes.ts';
-import { LABEL_SIZE, LANE_HEIGHT, LabelLanes } from './LabelLanes.tsx';
+import { LabelLanes } from './LabelLanes.tsx';
+import { LABEL_SIZE, LANE_HEIGHT } from './lane-size.ts';
 import { MarkList } from './MarkList.tsx';
 import { MinuteRuler } from './MinuteRuler.tsx';
 import { ReadAlong } from './ReadAlong.tsx';
@@ -114,7 +115,7 @@ export function GlowStrip({ points, alt, targetCelsius, hold, marks = [], unit =
           {shownMarks.map((mark, index) => (
             <path
               key={index}
-              d={`M${xOf(mark.minute) - 5} ${top}h10l-5 8z`}
+              d={notch(xOf(mark.minute), top, width)}
               fill={textOnHeat(celsiusAt(points, mark.minute) ?? 0)}
             />
           ))}
@@ -147,4 +148,11 @@ export function GlowStrip({ points, alt, targetCelsius, hold, marks = [], unit =
       {numbered && <MarkList marks={shownMarks} />}
     </figure>
   );
+}
+
+/** A mark's notch in the upper edge; at either end of the strip only its inner half. */
+function notch(x: number, top: number, width: number): string {
+  const left = Math.max(1, x - 5);
+  const right = Math.min(width - 1, x + 5);
+  return `M${left} ${top}H${right}L${x} ${top + 8}Z`;
 }

@@ -7,7 +7,7 @@ const LOW = 400;
 const HIGH = 1200;
 const WIDTH = 200;
 const STEP = 25;
-const TICKS = { C: [500, 700, 900, 1100], F: [900, 1300, 1700, 2100] } as const;
+const TICKS = { C: [500, 700, 900, 1100], F: [900, 1300, 1700, 2000] } as const;
 
 interface Props {
   readonly unit?: TemperatureUnit;
@@ -59,10 +59,15 @@ export function HeatLegend({ unit = 'C', withSentence = false }: Props) {
           {ticks.map((degrees, index) => (
             <g key={degrees}>
               <path className="stroke-soot-2" d={`M${xOf(degrees)} 11v4`} />
-              <text x={xOf(degrees)} y="26">
-                {degrees}
-                {index === ticks.length - 1 ? `\u00a0°${unit}` : ''}
-              </text>
+              {index === ticks.length - 1 ? (
+                <text x={WIDTH} y="26" textAnchor="end">
+                  {degrees}&nbsp;°{unit}
+                </text>
+              ) : (
+                <text x={xOf(degrees)} y="26">
+                  {degrees}
+                </text>
+              )}
             </g>
           ))}
         </g>

@@ -1,7 +1,5 @@
 import type { PlacedLabel } from './label-lanes.ts';
-
-export const LANE_HEIGHT = 19;
-export const LABEL_SIZE = 13;
+import { LABEL_SIZE, LANE_HEIGHT } from './lane-size.ts';
 
 interface Props {
   readonly placed: readonly PlacedLabel[];

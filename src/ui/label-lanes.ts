@@ -22,11 +22,14 @@ const BESIDE_LEADER = 5;
 const BETWEEN_TEXTS = 10;
 const CROSSING_COST = 4;
 
-interface Taken {
+interface Place {
   readonly lane: number;
+  /** What the text and its bracket take up of the lane. */
   readonly from: number;
   readonly to: number;
   readonly leaderX: number | null;
+  readonly textX: number;
+  readonly cost: number;
 }
 
 /** Bricolage Grotesque's average advance is about 0.54 em; a little more keeps labels apart. */
@@ -34,76 +37,78 @@ export function estimateTextWidth(text: string, fontSize: number): number {
   return Math.ceil(text.length * fontSize * 0.56);
 }
 
+/** Rounds in which each label may look for a better place, once the others have theirs. */
+const ROUNDS = 3;
+
 /**
  * Finds each label a lane and a side so that no text leaves the drawing or touches another text;
- * a leader passes through a text only where nothing else fits. Brackets choose first, then points
- * from right to left, so that a text standing to the right of its leader blocks nobody.
+ * a leader passes through a text only where nothing else fits. Short labels and brackets choose
+ * first, then the rest from right to left (a text standing to the right of its leader blocks
+ * nobody), then each in turn looks again.
  */
 export function placeLabels(
   wishes: readonly LabelWish[],
   width: number,
 ): { readonly placed: readonly PlacedLabel[]; readonly lanes: number } {
-  const taken: Taken[] = [];
-  const placed: PlacedLabel[] = [];
-  const ordered = [...wishes].sort(
-    (one, other) =>
-      Number(other.spanToX !== undefined) - Number(one.spanToX !== undefined) || other.x - one.x,
-  );
-  for (const wish of ordered) {
-    const best = bestPlace(wish, taken, width);
-    taken.push(best);
-    placed.push({
+  const rank = (wish: LabelWish) => (wish.textWidth < 24 ? 0 : wish.spanToX !== undefined ? 1 : 2);
+  const ordered = [...wishes].sort((one, other) => rank(one) - rank(other) || other.x - one.x);
+  const places = new Map<string, Place>();
+  for (let round = 0; round <= ROUNDS; round += 1) {
+    for (const wish of ordered) {
+      places.delete(wish.id);
+      places.set(wish.id, bestPlace(wish, [...places.values()], width));
+    }
+  }
+  const placed = ordered.map((wish): PlacedLabel => {
+    const place = places.get(wish.id);
+    return {
       id: wish.id,
       x: wish.x,
       spanToX: wish.spanToX ?? null,
-      textX: best.textX,
-      lane: best.lane,
-    });
-  }
+      textX: place?.textX ?? 0,
+      lane: place?.lane ?? 0,
+    };
+  });
   return { placed, lanes: placed.reduce((most, label) => Math.max(most, label.lane + 1), 0) };
 }
 
-function bestPlace(wish: LabelWish, taken: readonly Taken[], width: number) {
-  const rightEdge = wish.spanToX ?? wish.x;
-  const fitted = (textX: number) => Math.max(0, Math.min(textX, width - wish.textWidth));
-  const sides = [
-    rightEdge + BESIDE_LEADER,
-    wish.x - BESIDE_LEADER - wish.textWidth,
-    fitted(wish.x - wish.textWidth / 2),
-  ].filter((textX) => textX >= 0 && textX + wish.textWidth <= width);
-  if (sides.length === 0) sides.push(fitted(wish.x));
-
-  let best: (Taken & { textX: number; cost: number }) | null = null;
-  const highest = taken.reduce((most, one) => Math.max(most, one.lane), -1) + 1;
-  for (let lane = 0; lane <= highest; lane += 1) {
-    for (const [order, textX] of sides.entries()) {
-      const isSpan = wish.spanToX !== undefined;
-      // A centred text would lie on its own bracket.
-      if (isSpan && textX < rightEdge && textX + wish.textWidth > wish.x && sides.length > 1)
-        continue;
-      const from = isSpan ? Math.min(wish.x, textX) : textX;
-      const to = Math.max(isSpan ? rightEdge : 0, textX + wish.textWidth);
-      if (overlaps(taken, lane, from, to)) continue;
-      const crossings = taken.filter(
-        (one) =>
-          (!isSpan && one.lane < lane && one.from - 2 < wish.x && wish.x < one.to + 2) ||
-          (one.leaderX !== null &&
-            one.lane > lane &&
-            from - 2 < one.leaderX &&
-            one.leaderX < to + 2),
-      ).length;
-      const cost = lane + crossings * CROSSING_COST + order * 0.1;
-      if (!best || cost < best.cost) {
-        best = { lane, from, to, leaderX: isSpan ? null : wish.x, textX, cost };
-      }
-    }
-  }
-  // The lane above all others is empty, so something was found.
-  return best ?? { lane: highest, from: 0, to: width, leaderX: wish.x, textX: 0, cost: 0 };
+/** Where a label's text stands to its leader or bracket, tried in this order. */
+function textPositions(wish: LabelWish, width: number): readonly number[] {
+  const { x, textWidth, spanToX = x } = wish;
+  const fits = (textX: number) => textX >= 0 && textX + textWidth <= width;
+  const beside = [spanToX + BESIDE_LEADER, x - BESIDE_LEADER - textWidth].filter(fits);
+  const over = Math.max(0, Math.min(x - textWidth / 2, width - textWidth));
+  // A text over its own bracket would hide it: only where there is no room beside.
+  return wish.spanToX !== undefined && beside.length > 0 ? beside : [...beside, over];
 }
 
-function overlaps(taken: readonly Taken[], lane: number, from: number, to: number): boolean {
-  return taken.some(
-    (one) => one.lane === lane && from < one.to + BETWEEN_TEXTS && one.from < to + BETWEEN_TEXTS,
-  );
+function bestPlace(wish: LabelWish, taken: readonly Place[], width: number): Place {
+  const isSpan = wish.spanToX !== undefined;
+  const highest = taken.reduce((most, one) => Math.max(most, one.lane), -1) + 1;
+  let best: Place | null = null;
+  for (let lane = 0; lane <= highest; lane += 1) {
+    for (const [order, textX] of textPositions(wish, width).entries()) {
+      const from = isSpan ? Math.min(wish.x, textX) : textX;
+      const to = Math.max(isSpan ? (wish.spanToX ?? 0) : 0, textX + wish.textWidth);
+      const touches = taken.some(
+        (one) =>
+          one.lane === lane && from < one.to + BETWEEN_TEXTS && one.from < to + BETWEEN_TEXTS,
+      );
+      if (touches) continue;
+      const leaderX = isSpan ? null : wish.x;
+      const crossings = taken.filter(
+        (one) =>
+          (lane > one.lane && passes(leaderX, one)) ||
+          (one.lane > lane && passes(one.leaderX, { from, to })),
+      ).length;
+      const cost = lane + crossings * CROSSING_COST + order * 0.1;
+      if (!best || cost < best.cost) best = { lane, from, to, leaderX, textX, cost };
+    }
+  }
+  if (!best) throw new Error('The lane above all others is empty, yet no place was found.');
+  return best;
+}
+
+function passes(leaderX: number | null, text: { from: number; to: number }): boolean {
+  return leaderX !== null && text.from - 2 < leaderX && leaderX < text.to + 2;
 }
