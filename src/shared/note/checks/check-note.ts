@@ -5,6 +5,8 @@ import { requiredFieldChecks } from './required-fields.ts';
 import { storyChecks, unsafePracticeChecks } from './story-checks.ts';
 import { troubleChecks } from './trouble-checks.ts';
 
+export type { Check, CheckContext };
+
 const NOTE_ORDER = [
   'when',
   'kilnId',

@@ -70,6 +70,7 @@ export function aReading(over: Partial<FiringReading> = {}): FiringReading {
   return {
     count: 100,
     spanMinutes: 60,
+    lastMinute: 60,
     start: { minute: 0, inferred: false },
     shutOff: { minute: 45, inferred: false },
     aimCelsius: 1000,
