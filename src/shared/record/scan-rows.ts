@@ -1,0 +1,141 @@
+import { RecordError } from './record-error.ts';
+import { RECORD_LIMITS } from './record-limits.ts';
+
+/** Between cells; a space stands for any run of spaces and tabs. */
+export type Delimiter = ',' | ';' | '\t' | ' ';
+
+/**
+ * Walks the rows of a text once, character by character: cells trimmed, quotes as in RFC 4180 (a
+ * quote opens only at a cell's beginning, two inside are one), lines ended by CR, LF or both. Blank
+ * lines give one empty cell.
+ * @param onRow gets the cells and the line the row begins on; false stops
+ * @throws RecordError for more than 50 columns or a cell over 1 kB
+ */
+export function scanRows(
+  text: string,
+  delimiter: Delimiter,
+  onRow: (cells: string[], line: number) => boolean,
+): void {
+  let line = 1;
+  let at = text.charCodeAt(0) === 0xfeff ? 1 : 0;
+  while (at < text.length) {
+    const rowLine = line;
+    const cells: string[] = [];
+    for (;;) {
+      const cell = readCell(text, at, delimiter, rowLine, cells.length + 1);
+      line += cell.newlines;
+      at = cell.next;
+      cells.push(cell.value);
+      if (cells.length > RECORD_LIMITS.columns) {
+        const most = RECORD_LIMITS.columns;
+        throw new RecordError(
+          `Line ${rowLine} has more than ${most} columns, the most a record may have.`,
+          rowLine,
+        );
+      }
+      if (at >= text.length || isLineEnd(text.charCodeAt(at))) break;
+      at += 1;
+      if (delimiter === ' ') {
+        at = skipBlanks(text, at);
+        if (at >= text.length || isLineEnd(text.charCodeAt(at))) break;
+      }
+    }
+    if (text.charCodeAt(at) === 13 && text.charCodeAt(at + 1) === 10) at += 1;
+    at += 1;
+    line += 1;
+    if (!onRow(cells, rowLine)) return;
+  }
+}
+
+interface Cell {
+  readonly value: string;
+  /** Index of the delimiter, line end or end of text behind the cell. */
+  readonly next: number;
+  readonly newlines: number;
+}
+
+function isLineEnd(code: number): boolean {
+  return code === 10 || code === 13;
+}
+function isBlank(code: number): boolean {
+  return code === 32 || code === 9 || code === 0xa0;
+}
+function isDelimiter(code: number, delimiter: Delimiter): boolean {
+  return delimiter === ' ' ? code === 32 || code === 9 : code === delimiter.charCodeAt(0);
+}
+
+function skipBlanks(text: string, at: number): number {
+  let i = at;
+  while (i < text.length && isBlank(text.charCodeAt(i))) i += 1;
+  return i;
+}
+
+function readCell(
+  text: string,
+  from: number,
+  delimiter: Delimiter,
+  line: number,
+  column: number,
+): Cell {
+  let at = from;
+  while (
+    at < text.length &&
+    isBlank(text.charCodeAt(at)) &&
+    (delimiter === ' ' || !isDelimiter(text.charCodeAt(at), delimiter))
+  ) {
+    at += 1;
+  }
+  if (text.charCodeAt(at) === 34) return readQuoted(text, at + 1, delimiter, line, column);
+  const start = at;
+  while (at < text.length) {
+    const code = text.charCodeAt(at);
+    if (isLineEnd(code) || isDelimiter(code, delimiter)) break;
+    at += 1;
+    if (at - start > RECORD_LIMITS.cellCharacters) throw tooLong(line, column);
+  }
+  return { value: text.slice(start, at).trim(), next: at, newlines: 0 };
+}
+
+function readQuoted(
+  text: string,
+  from: number,
+  delimiter: Delimiter,
+  line: number,
+  column: number,
+): Cell {
+  const parts: string[] = [];
+  let at = from;
+  let start = from;
+  let newlines = 0;
+  for (; at < text.length; at += 1) {
+    if (at - from > RECORD_LIMITS.cellCharacters) throw tooLong(line, column);
+    const code = text.charCodeAt(at);
+    if (code === 10 || (code === 13 && text.charCodeAt(at + 1) !== 10)) newlines += 1;
+    if (code !== 34) continue;
+    parts.push(text.slice(start, at));
+    if (text.charCodeAt(at + 1) !== 34) break;
+    parts.push('"');
+    at += 1;
+    start = at + 1;
+  }
+  if (at >= text.length) {
+    throw new RecordError(`A quotation mark opened on line ${line} is never closed.`, line, column);
+  }
+  at += 1;
+  const rest = at;
+  while (at < text.length) {
+    const code = text.charCodeAt(at);
+    if (isLineEnd(code) || isDelimiter(code, delimiter)) break;
+    at += 1;
+    if (at - rest > RECORD_LIMITS.cellCharacters) throw tooLong(line, column);
+  }
+  return { value: (parts.join('') + text.slice(rest, at)).trim(), next: at, newlines };
+}
+
+function tooLong(line: number, column: number): RecordError {
+  return new RecordError(
+    `Line ${line}, column ${column}: a cell is longer than 1 kB, the most a record may have (is a quotation mark missing?).`,
+    line,
+    column,
+  );
+}
