@@ -81,6 +81,8 @@ function layoutBy(
     !header.cells[0]?.startsWith('#') &&
     header.cells.length >= Math.min(2, width);
   const layout = { delimiter, decimal, header: isName ? header : null, units, data };
+  // A space also parts a date from its time and a number from its unit: it is believed less.
+  const weight = delimiter === ' ' ? 0.5 : 1;
   return { layout, score: weight * data.reduce((sum, row) => sum + rowScore(row, decimal), 0) };
 }
 
