@@ -112,9 +112,8 @@ export async function openRemarkCounts(
     .whereNotNull('remarks.sent_at')
     .whereNull('remarks.mended_at')
     .groupBy('remarks.note_id')
-    .select<{ note_id: number; count: number }[]>('remarks.note_id')
-    .count('remarks.id as count');
-  return new Map(rows.map((row) => [row.note_id, Number(row.count)]));
+    .select<{ note_id: number; n: number }[]>('remarks.note_id', db.raw('COUNT(*) AS n'));
+  return new Map(rows.map((row) => [row.note_id, row.n]));
 }
 
 const DECISIONS = ['sent-back', 'declined', 'taken-down'];

@@ -78,7 +78,13 @@ export async function handInNote(
         const answer = answerTo(check, fields.checkAnswers);
         return answer === null ? check : { ...check, answer };
       }),
-      facts: firingFacts({ fields, kiln: kiln.fields, reading: read.reading }),
+      facts: firingFacts({
+        fields,
+        kiln: kiln.fields,
+        reading: read.reading,
+        readings: read.stored?.readings ?? readings,
+        hasSecondProbe: read.stored?.secondProbe != null,
+      }),
       strip: readings.length > 0 ? stripSignature(readings, STRIP_POINTS) : null,
       stripWords: read.reading ? stripWords(read.reading, METRIC_UNITS) : '',
       pictureNames: picturesIn(fields.story),

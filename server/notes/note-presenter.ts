@@ -51,7 +51,7 @@ export async function presentNotePage(
     rowsThatTried(db, note.id),
   ]);
   const { volumeLitres, ...row } = storedRow(revision, [
-    ...new Set([...facts.measured, ...facts.named]),
+    ...new Set([...facts.measuredTroubles, ...facts.namedTroubles]),
   ]);
   const { story: _story, checkAnswers: _answers, record, ...shown } = fields;
   const volume = volumeLitres ?? insideVolumeLitres(kiln.fields);

@@ -60,8 +60,8 @@ async function insertFiring(
   publishedAt: Date,
 ): Promise<void> {
   const { fields, facts } = revision;
-  const measured = new Set<Trouble>(facts.measured);
-  const named = new Set<Trouble>(facts.named);
+  const measured = new Set<Trouble>(facts.measuredTroubles);
+  const named = new Set<Trouble>(facts.namedTroubles);
   const troubles = [...new Set([...measured, ...named])];
   await trx('published_firings').insert({
     note_id: revision.noteId,
@@ -92,9 +92,6 @@ async function insertFiring(
   }
 }
 
-const countPieces = (rows: readonly { count: number }[]): number =>
-  rows.reduce((sum, row) => sum + row.count, 0);
-
 /** The row of a revision, without what is joined in when it is read. */
 export function storedRow(revision: Revision, troubles: readonly Trouble[]): StoredRow {
   const { facts, fields } = revision;
@@ -105,16 +102,14 @@ export function storedRow(revision: Revision, troubles: readonly Trouble[]): Sto
     strip: revision.strip,
     stripWords: revision.stripWords,
     troubles: [...troubles],
-    measuredTroubles: [...facts.measured],
+    measuredTroubles: [...facts.measuredTroubles],
     targetCelsius: fields.plan.targetCelsius,
     peakCelsius: facts.peakCelsius,
     timeToTemperatureMinutes: facts.timeToTemperatureMinutes,
     holdMinutes: facts.holdMinutes,
     stallCelsius: facts.stalls.map((stall) => stall.levelCelsius),
-    crackedPieces: countPieces(
-      facts.pieces.filter((piece) => piece.crackedInFiring || piece.crackedAfterDraw),
-    ),
-    pieces: countPieces(facts.pieces),
+    crackedPieces: facts.crackedPieces,
+    pieces: facts.pieceCount,
     changes: fields.changes.map((row) => row.change),
     followOn: null,
     volumeLitres: facts.volumeLitres,

@@ -73,8 +73,10 @@ export async function newestRows(db: Knex, limit: number, offset = 0): Promise<N
 
 export async function countPublished(db: Knex): Promise<{ notes: number; members: number }> {
   const row = await db('published_firings')
-    .count<{ notes: number; members: number }[]>('published_firings.note_id as notes')
-    .countDistinct('published_firings.author_id as members')
+    .select<{ notes: number; members: number }[]>(
+      db.raw('COUNT(*) AS notes'),
+      db.raw('COUNT(DISTINCT published_firings.author_id) AS members'),
+    )
     .first();
   return { notes: row?.notes ?? 0, members: row?.members ?? 0 };
 }

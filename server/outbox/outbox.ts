@@ -8,6 +8,8 @@ import type { Knex } from 'knex';
 export interface OutboxJobs {
   /** Bring one note's document in the index up to date, or remove it. */
   'index-note': { noteId: number };
+  /** Read an uploaded record into readings. */
+  'read-record': { recordId: number };
   /** Send one mail. */
   mail: MailJob;
 }

@@ -22,7 +22,13 @@ export const checkSchema = z.object({
   offer: z
     .object({
       pointer: z.string(),
-      value: z.union([z.number(), z.string(), z.boolean(), z.null(), z.array(z.string())]),
+      value: z.union([
+        z.number(),
+        z.string(),
+        z.boolean(),
+        z.null(),
+        z.array(z.string()).readonly(),
+      ]),
       label: z.string(),
     })
     .optional(),

@@ -1,0 +1,112 @@
+import { z } from 'zod';
+import { MAX_RECORD_BYTES } from '#shared/api/records.ts';
+import { recordChoiceSchema } from '#shared/record/record-choice.ts';
+import { defineRoute, pointersOf, reply, type Route } from '../http/define-route.ts';
+import { idParams, idSchema } from '../http/ids.ts';
+import { AppError } from '../http/problem.ts';
+import { readSingleUpload, uploadOf } from '../http/single-upload.ts';
+import { ownNote } from '../notes/draft-service.ts';
+import { requireEditableNote } from '../pictures/picture-service.ts';
+import { presentRecord } from './record-presenter.ts';
+import {
+  addRecord,
+  presentPoints,
+  readAgain,
+  readingsFor,
+  recordCsv,
+  requireRecord,
+} from './record-service.ts';
+
+const recordParams = z.object({ id: idSchema, recordId: idSchema });
+const ofQuery = z.strictObject({
+  of: z.enum(['published', 'handed-in', 'draft']).default('published'),
+});
+
+/** The choice of columns arrives as a JSON field beside the file. */
+function choiceOf(field: string | undefined) {
+  let value: unknown;
+  try {
+    value = JSON.parse(field ?? '');
+  } catch {
+    throw new AppError('bad-request', 'Say which columns hold the time and the temperature.');
+  }
+  const choice = recordChoiceSchema.safeParse(value);
+  if (!choice.success) throw new AppError('bad-input', { errors: pointersOf(choice.error) });
+  return choice.data;
+}
+
+export const recordRoutes: readonly Route[] = [
+  defineRoute({
+    method: 'post',
+    path: '/api/notes/:id/records',
+    access: 'member',
+    params: idParams,
+    before: (deps) => [
+      async (request, _response, next) => {
+        const params = idParams.safeParse(request.params);
+        if (!params.success) throw new AppError('not-found');
+        await requireEditableNote(deps.db, request.actor, params.data.id);
+        next();
+      },
+      readSingleUpload(MAX_RECORD_BYTES, 'A record'),
+    ],
+    async handle({ db, deps, params, request }) {
+      const { bytes, fileName, fields } = uploadOf(request);
+      const id = await addRecord(
+        db,
+        deps.store,
+        params.id,
+        { bytes, fileName, source: fields['source'] === 'pasted' ? 'pasted' : 'file' },
+        choiceOf(fields['choice']),
+      );
+      return reply(201, presentRecord(await requireRecord(db, params.id, id)));
+    },
+  }),
+  defineRoute({
+    method: 'get',
+    path: '/api/notes/:id/records/:recordId',
+    access: 'member',
+    params: recordParams,
+    async handle({ db, actor, params }) {
+      await ownNote(db, actor, params.id);
+      return presentRecord(await requireRecord(db, params.id, params.recordId));
+    },
+  }),
+  defineRoute({
+    method: 'put',
+    path: '/api/notes/:id/records/:recordId',
+    access: 'member',
+    params: recordParams,
+    body: z.strictObject({ choice: recordChoiceSchema }),
+    async handle({ db, actor, params, body }) {
+      await requireEditableNote(db, actor, params.id);
+      await readAgain(db, params.id, params.recordId, body.choice);
+      return presentRecord(await requireRecord(db, params.id, params.recordId));
+    },
+  }),
+  defineRoute({
+    method: 'get',
+    path: '/api/notes/:id/record',
+    access: 'anyone',
+    params: idParams,
+    query: ofQuery,
+    async handle({ db, actor, params, query }) {
+      return presentPoints(await readingsFor(db, actor, params.id, query.of));
+    },
+  }),
+  defineRoute({
+    method: 'get',
+    path: '/api/notes/:id/record.csv',
+    access: 'anyone',
+    params: idParams,
+    query: ofQuery,
+    async handle({ db, actor, params, query, response }) {
+      const content = await readingsFor(db, actor, params.id, query.of);
+      response
+        .attachment(`firing-${String(params.id)}.csv`)
+        .type('text/csv; charset=utf-8')
+        .send(recordCsv(content));
+      return undefined;
+    },
+  }),
+];
