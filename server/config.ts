@@ -13,7 +13,7 @@ export interface Config {
   /** True when people reach the site over https: cookies are then marked secure. */
   isHttps: boolean;
   /** How many reverse proxies stand before the server; 0 = believe no forwarded address. */
-  trustedProxies: number;
+  trustProxy: number;
   databaseUrl: string;
   search: { url: string; key: string };
   mail: {
@@ -35,7 +35,9 @@ export class ConfigError extends Error {
   readonly exitCode = 78;
 
   constructor(faults: string[]) {
-    super(`Some settings are wrong:\n${faults.map((fault) => `  ${fault}`).join('\n')}`);
+    super(
+      `Some settings are wrong:\n${[...new Set(faults)].map((fault) => `  ${fault}`).join('\n')}`,
+    );
     this.name = 'ConfigError';
   }
 }
@@ -125,7 +127,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     port: settings.PORT,
     publicUrl,
     isHttps: publicUrl.startsWith('https:'),
-    trustedProxies: settings.TRUST_PROXY,
+    trustProxy: settings.TRUST_PROXY,
     databaseUrl: settings.DATABASE_URL,
     search: { url: settings.MEILI_URL, key: settings.MEILI_KEY },
     mail: {

@@ -57,6 +57,7 @@ function initialSql(share: string, credentials: DatabaseCredentials, grantAll: b
     'SET @auth_root_socket=NULL;',
     ...SYSTEM_SQL.map((name) => readSystemSql(share, name)),
     "DELETE FROM mysql.global_priv WHERE User='' OR (User='root' AND Host<>'localhost');",
+    'DELETE FROM mysql.proxies_priv;',
     'FLUSH PRIVILEGES;',
     `ALTER USER 'root'@'localhost' IDENTIFIED BY '${credentials.rootPassword}';`,
     `CREATE DATABASE ${DATABASE_NAME} CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci;`,

@@ -1,6 +1,6 @@
 import { join } from 'node:path';
 import { readJsonFile } from './private-files.ts';
-import { commandLineOf } from './processes.ts';
+import { isSame } from './run-lock.ts';
 
 /** The project's folder. */
 export const ROOT = join(import.meta.dirname, '../..');
@@ -25,6 +25,6 @@ export function withLocalSettings(env: NodeJS.ProcessEnv): NodeJS.ProcessEnv {
 }
 
 function isRunningHere(): boolean {
-  const lock = readJsonFile(RUN_LOCK_PATH) as { pid?: number } | null;
-  return commandLineOf(lock?.pid ?? -1)?.includes('start.mjs') === true;
+  const lock = readJsonFile(RUN_LOCK_PATH) as { pid: number; identity: string | null } | null;
+  return lock !== null && isSame(lock);
 }

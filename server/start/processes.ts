@@ -47,14 +47,33 @@ export function commandLineOf(pid: number): string | null {
   try {
     return readFileSync(`/proc/${pid}/cmdline`, 'utf8').replaceAll('\0', ' ').trim();
   } catch {
-    try {
-      return execFileSync('ps', ['-ww', '-o', 'command=', '-p', String(pid)], {
-        encoding: 'utf8',
-        stdio: ['ignore', 'pipe', 'ignore'],
-      }).trim();
-    } catch {
-      return null;
-    }
+    return askPs(pid, 'command=');
+  }
+}
+
+/**
+ * When a living process began, in the system's own words; null when it does not live. Together with
+ * its number this tells one process from any other that later gets the same number.
+ */
+export function identityOf(pid: number): string | null {
+  if (!isAlive(pid)) return null;
+  try {
+    // Field 22 is the start time in ticks; the name in brackets before it may hold spaces.
+    const stat = readFileSync(`/proc/${pid}/stat`, 'utf8');
+    return stat.slice(stat.lastIndexOf(')') + 2).split(' ')[19] ?? null;
+  } catch {
+    return askPs(pid, 'lstart=');
+  }
+}
+
+function askPs(pid: number, column: string): string | null {
+  try {
+    return execFileSync('ps', ['-ww', '-o', column, '-p', String(pid)], {
+      encoding: 'utf8',
+      stdio: ['ignore', 'pipe', 'ignore'],
+    }).trim();
+  } catch {
+    return null;
   }
 }
 

@@ -1,3 +1,5 @@
+import { dirname } from 'node:path';
+
 /** A reason why Spyhole cannot start, told in one clear sentence; the process ends with `exitCode`. */
 export class StartFailure extends Error {
   /**
@@ -31,7 +33,7 @@ export function explainSystemError(error) {
   const { code, path } = /** @type {NodeJS.ErrnoException} */ (error);
   const sentence = code === undefined ? undefined : SENTENCES[code];
   if (sentence === undefined) return error;
-  return new StartFailure(`${sentence}${path === undefined ? '' : ` (${path})`}.`);
+  return new StartFailure(`${sentence}${path === undefined ? '' : ` (${dirname(path)})`}.`);
 }
 
 /**
