@@ -47,7 +47,11 @@ export function Button({ ref, ...props }: Props) {
         else props.onClick?.(event);
       }}
     >
-      {busy ? <SpyholeMark busy className="-ml-1 size-5" /> : icon && <Icon name={icon} />}
+      {busy ? (
+        <SpyholeMark busy plain={kind === 'main'} className="-ml-1 size-5" />
+      ) : (
+        icon && <Icon name={icon} />
+      )}
       {props.children}
     </button>
   );

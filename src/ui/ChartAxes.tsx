@@ -28,7 +28,8 @@ export function ChartAxes({ frame, unit }: Props) {
             x={plot.left - 7}
             y={y(degrees) + 4}
           >
-            {index === ticks.length - 1 ? `°${unit}` : degrees}
+            {degrees}
+            {index === ticks.length - 1 ? `\u00a0°${unit}` : ''}
           </text>
         </g>
       ))}

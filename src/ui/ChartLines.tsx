@@ -58,7 +58,7 @@ export function ChartLines({ id, frame, props }: Props) {
             x={plot.left + 6}
             y={yOf(QUARTZ_INVERSION_CELSIUS) - 6}
           >
-            quartz {formatTemperature(QUARTZ_INVERSION_CELSIUS, unit)}
+            {formatTemperature(QUARTZ_INVERSION_CELSIUS, unit)}
           </text>
         </>
       )}
@@ -79,7 +79,7 @@ function Compared({
   const path = linePath(simplifyPoints(points, 1.5), frame.xOf, frame.yOf);
   return (
     <>
-      <path className="stroke-ash" strokeWidth="4.5" d={path} />
+      <path className="stroke-ash" strokeWidth="4" d={path} />
       <path className="stroke-soot" strokeWidth="2" strokeDasharray={dash} d={path} />
     </>
   );

@@ -38,7 +38,7 @@ function Table<Row>({ caption, captionHidden, columns, rows, rowKey }: Props<Row
             <th
               key={column.key}
               scope="col"
-              className={`py-2 pr-4 align-bottom font-[550] text-soot-2 last:pr-0 ${column.figures ? 'text-right' : 'text-left'}`}
+              className={`px-3 py-2 align-bottom font-[550] text-soot-2 first:pl-0 last:pr-0 ${column.figures ? 'text-right' : 'text-left'}`}
             >
               {column.heading}
             </th>
@@ -54,7 +54,7 @@ function Table<Row>({ caption, captionHidden, columns, rows, rowKey }: Props<Row
                 <Cell
                   key={column.key}
                   scope={index === 0 ? 'row' : undefined}
-                  className={`py-2 pr-4 align-baseline last:pr-0 ${index === 0 ? 'font-[600]' : 'font-[400]'} ${column.figures ? 'text-right' : 'text-left'}`}
+                  className={`px-3 py-2 align-baseline first:pl-0 last:pr-0 ${index === 0 ? 'font-[600]' : 'font-[400]'} ${column.figures ? 'text-right' : 'text-left'}`}
                 >
                   {column.figures ? (
                     <span className="reading">{column.cell(row)}</span>

@@ -17,10 +17,17 @@ export function DimensionLine({ from, to, words }: Props) {
         fill="none"
         d={`M${from.x} ${from.y}L${to.x} ${to.y}M${from.x - 4} ${from.y + 4}l8-8M${to.x - 4} ${to.y + 4}l8-8`}
       />
+      {!upright && (
+        <rect
+          className="fill-ash"
+          x={middle.x - words.length * 3.8}
+          y={middle.y - 7}
+          width={words.length * 7.6}
+          height="14"
+        />
+      )}
       <text
-        className="fill-soot stroke-ash font-reading"
-        paintOrder="stroke"
-        strokeWidth="6"
+        className="fill-soot font-reading"
         fontSize="12"
         letterSpacing="-0.3"
         textAnchor={upright ? 'start' : 'middle'}

@@ -1,3 +1,5 @@
+import { SHARE_COLUMNS } from './share-columns.ts';
+
 interface Props {
   /** What the share is of: "floor insulated". */
   readonly label: string;
@@ -22,7 +24,9 @@ export function IntervalBar({ label, count, of, interval, against, aside }: Prop
     : 'too few to say';
   const at = (value: number) => `${(value * 100).toFixed(2)}%`;
   return (
-    <div className="grid items-center gap-x-6 gap-y-1 border-b border-line py-2.5 text-small sm:grid-cols-[minmax(9rem,2fr)_minmax(12rem,4fr)_minmax(11rem,2fr)]">
+    <div
+      className={`grid items-center gap-x-6 gap-y-1 border-b border-line py-2.5 text-small ${SHARE_COLUMNS}`}
+    >
       <p className="font-[550]">{label}</p>
       <div className="px-1">
         <svg
@@ -37,7 +41,7 @@ export function IntervalBar({ label, count, of, interval, against, aside }: Prop
               className="stroke-soot-2"
               x1={at(tick)}
               x2={at(tick)}
-              y1={tick % 0.5 === 0 ? 15 : 18}
+              y1="16"
               y2="20"
             />
           ))}
@@ -73,8 +77,8 @@ export function IntervalBar({ label, count, of, interval, against, aside }: Prop
           )}
         </svg>
       </div>
-      <p aria-hidden="true" className="flex flex-wrap gap-x-3">
-        <span className="reading text-body">{figures}</span>
+      <p aria-hidden="true" className="flex flex-wrap items-baseline gap-x-3">
+        <span className="reading font-[500]">{figures}</span>
         <span className={interval ? 'reading text-soot-2' : 'text-soot-2'}>{words}</span>
         {aside && <span className="text-soot-2">{aside}</span>}
       </p>

@@ -6,12 +6,13 @@ const BURNER_MM = 170;
 const BOX = { width: 320, height: 260 } as const;
 
 interface Props {
+  readonly id: string;
   readonly kiln: KilnDimensions;
   readonly hatch: string;
 }
 
 /** The kiln from above without its lid: wall, port, burner at its angle, the way of the flame. */
-export function KilnPlanDrawing({ kiln, hatch }: Props) {
+export function KilnPlanDrawing({ id, kiln, hatch }: Props) {
   const halves = outsideHalves(kiln);
   const burner = burnerPlan(kiln);
   const count = Math.min(4, Math.max(1, kiln.burner?.count ?? 1));
@@ -25,8 +26,8 @@ export function KilnPlanDrawing({ kiln, hatch }: Props) {
   };
   const at = (spot: Spot) =>
     `${(centre.x + spot.x * scale).toFixed(1)} ${(centre.y + spot.y * scale).toFixed(1)}`;
-  const ring = (halfWidth: number, halfDepth: number) => {
-    const [w, d] = [halfWidth * scale, halfDepth * scale];
+  const ring = (halfWidth: number, halfDepth: number, outBy = 0) => {
+    const [w, d] = [halfWidth * scale + outBy, halfDepth * scale + outBy];
     return kiln.shape === 'round'
       ? `M${centre.x - w} ${centre.y}a${w} ${w} 0 1 0 ${2 * w} 0a${w} ${w} 0 1 0 ${-2 * w} 0Z`
       : `M${centre.x - w} ${centre.y - d}h${2 * w}v${2 * d}h${-2 * w}Z`;
@@ -37,6 +38,16 @@ export function KilnPlanDrawing({ kiln, hatch }: Props) {
       className="ink-drawing block h-auto w-full"
       aria-hidden="true"
     >
+      <defs>
+        <clipPath id={`${id}-wall`}>
+          <path
+            clipRule="evenodd"
+            d={
+              ring(halves.width, halves.depth, 1) + ring(halves.insideWidth, halves.insideDepth, -1)
+            }
+          />
+        </clipPath>
+      </defs>
       <path
         className="stroke-soot"
         strokeWidth="1.5"
@@ -48,6 +59,7 @@ export function KilnPlanDrawing({ kiln, hatch }: Props) {
         Array.from({ length: count }, (_, index) => (
           <g key={index} transform={`rotate(${(360 / count) * index} ${centre.x} ${centre.y})`}>
             <BurnerFromAbove
+              wallClip={`url(#${id}-wall)`}
               burner={burner}
               portMm={kiln.port?.openingMm ?? 60}
               wallMm={kiln.wallMm}
@@ -56,24 +68,13 @@ export function KilnPlanDrawing({ kiln, hatch }: Props) {
             />
           </g>
         ))}
-      {kiln.burner && (
-        <text
-          className="fill-soot font-reading stroke-ash"
-          paintOrder="stroke"
-          strokeWidth="5"
-          fontSize="13"
-          x={centre.x}
-          y={centre.y + 5}
-          textAnchor="middle"
-        >
-          {kiln.burner.angleDegrees}° to the wall
-        </text>
-      )}
     </svg>
   );
 }
 
 interface BurnerProps {
+  /** The wall seen from above: the port is cut out of it and nowhere else. */
+  readonly wallClip: string;
   readonly burner: BurnerPlan;
   readonly portMm: number;
   readonly wallMm: number;
@@ -81,7 +82,7 @@ interface BurnerProps {
   readonly at: (spot: Spot) => string;
 }
 
-function BurnerFromAbove({ burner, portMm, wallMm, scale, at }: BurnerProps) {
+function BurnerFromAbove({ wallClip, burner, portMm, wallMm, scale, at }: BurnerProps) {
   const { aim, port, tip, meets } = burner;
   const side = { x: -aim.y, y: aim.x };
   const along = (from: Spot, forward: number, aside: number): Spot => ({
@@ -90,17 +91,19 @@ function BurnerFromAbove({ burner, portMm, wallMm, scale, at }: BurnerProps) {
   });
   const bar = (from: Spot, back: number, front: number, half: number) =>
     `M${at(along(from, back, -half))}L${at(along(from, front, -half))}L${at(along(from, front, half))}L${at(along(from, back, half))}Z`;
-  const through = (wallMm / Math.max(0.2, aim.x)) * 1.15;
+  const through = (wallMm / Math.max(0.2, aim.x)) * 1.6 + portMm;
   const head = (lengthMm: number) => lengthMm / scale;
   return (
     <>
-      <path className="fill-ash" d={bar(port, -portMm * 0.35, through, portMm / 2)} />
-      <path
-        className="stroke-soot"
-        strokeWidth="1.25"
-        fill="none"
-        d={`M${at(along(port, 0, -portMm / 2))}L${at(along(port, through, -portMm / 2))}M${at(along(port, 0, portMm / 2))}L${at(along(port, through, portMm / 2))}`}
-      />
+      <g clipPath={wallClip}>
+        <path className="fill-ash" d={bar(port, -portMm, through, portMm / 2)} />
+        <path
+          className="stroke-soot"
+          strokeWidth="1.25"
+          fill="none"
+          d={`M${at(along(port, -portMm, -portMm / 2))}L${at(along(port, through, -portMm / 2))}M${at(along(port, -portMm, portMm / 2))}L${at(along(port, through, portMm / 2))}`}
+        />
+      </g>
       <path
         className="fill-ash stroke-soot"
         strokeWidth="1.5"

@@ -28,9 +28,9 @@ export function KilnSection({ kiln, alt = kilnInWords(kiln) }: Props) {
           </p>
         </div>
         <div className="w-full max-w-[20rem]">
-          <KilnPlanDrawing kiln={kiln} hatch={`url(#${id}-${kiln.wall})`} />
+          <KilnPlanDrawing id={id} kiln={kiln} hatch={`url(#${id}-${kiln.wall})`} />
           <p aria-hidden="true" className="pt-1 text-note text-soot-2">
-            From above
+            From above{kiln.burner ? `, burner at ${kiln.burner.angleDegrees}° to the wall` : ''}
           </p>
         </div>
       </div>

@@ -5,6 +5,7 @@ import { ChartAxes } from './ChartAxes.tsx';
 import { chartFrame, chartLabels, linePath } from './chart-frame.ts';
 import { ChartKey } from './ChartKey.tsx';
 import { ChartLines } from './ChartLines.tsx';
+import { ChartStretches } from './ChartStretches.tsx';
 import { LabelLanes } from './LabelLanes.tsx';
 import { MarkList } from './MarkList.tsx';
 import { ReadAlong } from './ReadAlong.tsx';
@@ -49,25 +50,12 @@ export function RecordChart(props: RecordChartProps) {
           className="ink-drawing block h-auto w-full"
         >
           <ChartAxes frame={frame} unit={unit} />
-          <g className="shaded" aria-hidden="true">
-            {frame.shaded.map(({ fromMinute, toMinute }) => (
-              <g key={fromMinute}>
-                <rect
-                  className="fill-line"
-                  opacity="0.55"
-                  x={xOf(fromMinute)}
-                  y={plot.top}
-                  width={Math.max(1, xOf(toMinute) - xOf(fromMinute))}
-                  height={plot.bottom - plot.top}
-                />
-                <path
-                  className="stroke-soot-2"
-                  strokeDasharray="1 3"
-                  d={`M${xOf(fromMinute)} ${plot.top}V${plot.bottom}M${xOf(toMinute)} ${plot.top}V${plot.bottom}`}
-                />
-              </g>
-            ))}
-          </g>
+          <ChartStretches
+            id={id}
+            frame={frame}
+            stretches={props.stretches ?? []}
+            hold={props.hold ?? null}
+          />
           <ChartLines id={id} frame={frame} props={props} />
           {shownMarks.map((mark, index) => {
             const celsius = celsiusAt(points, mark.minute);
@@ -128,7 +116,7 @@ export function RecordChart(props: RecordChartProps) {
             </>
           )}
         </svg>
-        <div className="pointer-events-none absolute inset-y-0 right-[8px] left-[46px] *:pointer-events-auto">
+        <div className="pointer-events-none absolute inset-y-0 right-[8px] left-[58px] *:pointer-events-auto">
           <ReadAlong
             label="Read along the curve"
             fromMinute={frame.startMinute}

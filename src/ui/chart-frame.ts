@@ -6,7 +6,7 @@ import { LABEL_SIZE, LANE_HEIGHT } from './lane-size.ts';
 import type { RecordChartProps } from './record-chart-props.ts';
 
 /** Room for figures left of the plot and for half a figure right of it, px. */
-export const CHART_MARGIN = { left: 46, right: 8, bottom: 26 } as const;
+export const CHART_MARGIN = { left: 58, right: 8, bottom: 26 } as const;
 const NARROW_PX = 560;
 const MOST_NAMED_ON_NARROW = 3;
 
@@ -20,7 +20,6 @@ export interface ChartFrame {
   readonly highDegrees: number;
   readonly xOf: (minute: number) => number;
   readonly yOf: (celsius: number) => number;
-  readonly shaded: readonly { readonly fromMinute: number; readonly toMinute: number }[];
 }
 
 function minuteRange({ points, secondProbe, overlay }: RecordChartProps) {
@@ -67,7 +66,6 @@ export function chartFrame(props: RecordChartProps, width: number, lanes: number
     yOf: (celsius) =>
       bottom -
       ((fromCelsius(celsius, unit) - lowDegrees) / (highDegrees - lowDegrees)) * plotHeight,
-    shaded: props.stretches ?? [],
   };
 }
 

@@ -37,8 +37,8 @@ export function estimateTextWidth(text: string, fontSize: number): number {
   return Math.ceil(text.length * fontSize * 0.56);
 }
 
-/** Rounds in which each label may look for a better place, once the others have theirs. */
-const ROUNDS = 3;
+/** Most rounds in which each label may look for a better place, once the others have theirs. */
+const MOST_ROUNDS = 10;
 
 /**
  * Finds each label a lane and a side so that no text leaves the drawing or touches another text;
@@ -53,11 +53,16 @@ export function placeLabels(
   const rank = (wish: LabelWish) => (wish.textWidth < 24 ? 0 : wish.spanToX !== undefined ? 1 : 2);
   const ordered = [...wishes].sort((one, other) => rank(one) - rank(other) || other.x - one.x);
   const places = new Map<string, Place>();
-  for (let round = 0; round <= ROUNDS; round += 1) {
+  for (let round = 0; round <= MOST_ROUNDS; round += 1) {
+    let moved = false;
     for (const wish of ordered) {
+      const before = places.get(wish.id);
       places.delete(wish.id);
-      places.set(wish.id, bestPlace(wish, [...places.values()], width));
+      const now = bestPlace(wish, [...places.values()], width);
+      places.set(wish.id, now);
+      moved ||= before?.lane !== now.lane || before.textX !== now.textX;
     }
+    if (!moved) break;
   }
   const placed = ordered.map((wish): PlacedLabel => {
     const place = places.get(wish.id);

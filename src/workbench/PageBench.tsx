@@ -12,6 +12,7 @@ import { LinkButton } from '../ui/LinkButton.tsx';
 import { Notice } from '../ui/Notice.tsx';
 import { Pager } from '../ui/Pager.tsx';
 import { ProgressBar } from '../ui/ProgressBar.tsx';
+import { ShareScale } from '../ui/ShareScale.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
 import { useMessages } from '../ui/useMessages.ts';
 import { Bench } from './Bench.tsx';
@@ -167,6 +168,7 @@ export function PageBench() {
         />
         <Pager page={2} pageSize={20} total={183} what="notes" toPage={(page) => `?page=${page}`} />
         <div className="border-t-2 border-soot">
+          <ShareScale heading="Stall gone in the next firing" />
           <IntervalBar
             label="No change named"
             count={2}
