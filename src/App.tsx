@@ -1,10 +1,13 @@
-import { BrowserRouter } from 'react-router-dom';
-import { WorkbenchPage } from './workbench/WorkbenchPage.tsx';
+import { useState } from 'react';
+import { RouterProvider } from 'react-router-dom';
+import { Providers } from './app/Providers.tsx';
+import { createRouter } from './app/router.tsx';
 
 export function App() {
+  const [router] = useState(createRouter);
   return (
-    <BrowserRouter>
-      <WorkbenchPage />
-    </BrowserRouter>
+    <Providers>
+      <RouterProvider router={router} />
+    </Providers>
   );
 }

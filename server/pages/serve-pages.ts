@@ -15,12 +15,11 @@ const NOTHING_HERE: PageHead = {
   type: 'website',
   jsonLd: null,
 };
-/** Pages whose reader may see more than a visitor does: the client asks again with its session. */
-const MAY_BE_PRIVATE = new Set(['/notes/:id', '/notes/:id/:slug', '/kilns/:id']);
 
 /**
  * Serves the client's one document for every page, with the title, description and preview tags of
- * that page as a visitor would see it. The same for everybody: no session is read.
+ * that page as a visitor would see it. The same for everybody: no session is read. What a visitor
+ * does not find is a 404; its author's browser gets the document with it and asks the API.
  */
 export function servePages(deps: Deps, dist: string): Router {
   const router = Router();
@@ -32,9 +31,8 @@ export function servePages(deps: Deps, dist: string): Router {
     }
     const match = matchPage(request.path);
     const head = match ? await headOf(deps.db, match.pattern, match.parts) : null;
-    const status = head || (match && MAY_BE_PRIVATE.has(match.pattern)) ? 200 : 404;
     response
-      .status(status)
+      .status(head ? 200 : 404)
       .set('Cache-Control', 'no-cache')
       .type('html')
       .send(

@@ -1,0 +1,3 @@
+export function ConfirmAddressPage() {
+  return null;
+}

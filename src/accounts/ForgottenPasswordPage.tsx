@@ -1,0 +1,3 @@
+export function ForgottenPasswordPage() {
+  return null;
+}

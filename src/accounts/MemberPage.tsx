@@ -1,0 +1,3 @@
+export function MemberPage() {
+  return null;
+}

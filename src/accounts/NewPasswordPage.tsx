@@ -1,0 +1,3 @@
+export function NewPasswordPage() {
+  return null;
+}

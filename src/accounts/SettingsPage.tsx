@@ -1,0 +1,3 @@
+export function SettingsPage() {
+  return null;
+}

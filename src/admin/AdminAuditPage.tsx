@@ -1,0 +1,3 @@
+export function AdminAuditPage() {
+  return null;
+}

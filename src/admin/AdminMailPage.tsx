@@ -1,0 +1,3 @@
+export function AdminMailPage() {
+  return null;
+}

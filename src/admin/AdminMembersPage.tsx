@@ -1,0 +1,3 @@
+export function AdminMembersPage() {
+  return null;
+}

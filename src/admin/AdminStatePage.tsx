@@ -1,0 +1,3 @@
+export function AdminStatePage() {
+  return null;
+}

@@ -1,0 +1,3 @@
+export function FrontPage() {
+  return null;
+}

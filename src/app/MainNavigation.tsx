@@ -1,0 +1,61 @@
+import { NavLink, useLocation } from 'react-router-dom';
+import { paths } from '#shared/paths.ts';
+import { useSession } from '../accounts/useSession.ts';
+
+interface Way {
+  readonly to: string;
+  readonly label: string;
+}
+
+/** Where one can go; the ways shown are those the server says this reader has. */
+export function MainNavigation() {
+  const { me, abilities, known } = useSession();
+  const { pathname, search } = useLocation();
+  const ways: Way[] = [
+    { to: paths.find(), label: 'Find' },
+    { to: paths.whatHelped, label: 'What helped' },
+    ...(abilities.write
+      ? [
+          { to: paths.notebook, label: 'Notebook' },
+          { to: paths.newNote(), label: 'Write' },
+        ]
+      : []),
+    ...(abilities.moderate ? [{ to: paths.desk, label: 'Desk' }] : []),
+    ...(abilities.administer ? [{ to: paths.adminMembers, label: 'Admin' }] : []),
+  ];
+  const here = pathname === '/sign-in' ? '' : `${pathname}${search}`;
+  return (
+    <nav aria-label="Main" className="ml-auto">
+      <ul className="flex flex-wrap items-center justify-end gap-x-5 text-small">
+        {ways.map((way) => (
+          <Item key={way.label} {...way} />
+        ))}
+        {known &&
+          (me ? (
+            <Item to={paths.settings} label={me.name} />
+          ) : (
+            <Item to={paths.signIn(here === '/' ? '' : here)} label="Sign in" />
+          ))}
+      </ul>
+    </nav>
+  );
+}
+
+function Item({ to, label }: Way) {
+  return (
+    <li>
+      <NavLink
+        to={to}
+        className={({ isActive }) =>
+          `inline-flex min-h-11 items-center border-b-2 no-underline ${
+            isActive
+              ? 'border-verdigris font-[600] text-verdigris'
+              : 'border-transparent text-soot-2 hover:text-soot'
+          }`
+        }
+      >
+        {label}
+      </NavLink>
+    </li>
+  );
+}

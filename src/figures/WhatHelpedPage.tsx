@@ -1,0 +1,3 @@
+export function WhatHelpedPage() {
+  return null;
+}

@@ -1,0 +1,3 @@
+export function WhatHelpedTroublePage() {
+  return null;
+}

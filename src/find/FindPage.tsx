@@ -1,0 +1,3 @@
+export function FindPage() {
+  return null;
+}

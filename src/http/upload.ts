@@ -1,0 +1,54 @@
+import type { z } from 'zod';
+import { problemSchema } from '#shared/api/problem.ts';
+import { changeHeaders, OfflineError, ProblemError } from './client.ts';
+
+export interface UploadOptions<Schema extends z.ZodType> {
+  readonly path: string;
+  readonly file: Blob;
+  readonly fileName: string;
+  readonly fields?: Readonly<Record<string, string>>;
+  readonly answer: Schema;
+  /** 0..1 of the bytes sent. */
+  readonly onProgress?: (share: number) => void;
+  readonly signal?: AbortSignal;
+}
+
+/** Sends one file with progress and a way to cancel, which fetch cannot tell of yet. */
+export async function upload<Schema extends z.ZodType>(
+  options: UploadOptions<Schema>,
+): Promise<z.output<Schema>> {
+  const headers = await changeHeaders();
+  const form = new FormData();
+  for (const [name, value] of Object.entries(options.fields ?? {})) form.append(name, value);
+  form.append('file', options.file, options.fileName);
+  return new Promise((resolve, reject) => {
+    const request = new XMLHttpRequest();
+    request.open('POST', options.path);
+    request.responseType = 'json';
+    for (const [name, value] of Object.entries(headers)) request.setRequestHeader(name, value);
+    request.upload.onprogress = (event) => {
+      if (event.lengthComputable) options.onProgress?.(event.loaded / event.total);
+    };
+    request.onerror = () => {
+      reject(new OfflineError());
+    };
+    request.onabort = () => {
+      reject(new DOMException('Cancelled', 'AbortError'));
+    };
+    request.onload = () => {
+      const body: unknown = request.response;
+      if (request.status >= 200 && request.status < 300) {
+        const parsed = options.answer.safeParse(body);
+        if (parsed.success) resolve(parsed.data);
+        else reject(parsed.error);
+        return;
+      }
+      const problem = problemSchema.safeParse(body);
+      reject(problem.success ? new ProblemError(problem.data) : new OfflineError());
+    };
+    options.signal?.addEventListener('abort', () => {
+      request.abort();
+    });
+    request.send(form);
+  });
+}

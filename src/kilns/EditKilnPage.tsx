@@ -1,0 +1,3 @@
+export function EditKilnPage() {
+  return null;
+}

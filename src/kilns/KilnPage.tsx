@@ -1,0 +1,3 @@
+export function KilnPage() {
+  return null;
+}

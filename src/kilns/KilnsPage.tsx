@@ -1,0 +1,3 @@
+export function KilnsPage() {
+  return null;
+}

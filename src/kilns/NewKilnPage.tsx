@@ -1,0 +1,3 @@
+export function NewKilnPage() {
+  return null;
+}

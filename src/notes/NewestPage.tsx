@@ -1,0 +1,3 @@
+export function NewestPage() {
+  return null;
+}

@@ -1,0 +1,3 @@
+export function NewNotePage() {
+  return null;
+}

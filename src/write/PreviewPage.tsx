@@ -1,0 +1,3 @@
+export function PreviewPage() {
+  return null;
+}
