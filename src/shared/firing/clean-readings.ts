@@ -1,6 +1,8 @@
 import {
+  FARTHEST_MINUTE,
   HIGHEST_CELSIUS,
   LOWEST_CELSIUS,
+  SAME_MOMENT,
   WILD_CELSIUS,
   WILD_MINUTES,
   WILD_RATE,
@@ -29,7 +31,7 @@ export function cleanReadings(readings: readonly Reading[]): CleanReadings {
   let last = -Infinity;
   for (const reading of readings) {
     const usable =
-      Number.isFinite(reading.minute) &&
+      Math.abs(reading.minute) <= FARTHEST_MINUTE &&
       reading.celsius >= LOWEST_CELSIUS &&
       reading.celsius <= HIGHEST_CELSIUS;
     if (!usable) {
@@ -49,7 +51,7 @@ export function cleanReadings(readings: readonly Reading[]): CleanReadings {
     const minute = inside[from]?.minute ?? 0;
     let to = from;
     let sum = 0;
-    while (to < inside.length && inside[to]?.minute === minute) {
+    while (to < inside.length && (inside[to]?.minute ?? Infinity) - minute < SAME_MOMENT) {
       sum += inside[to]?.celsius ?? 0;
       to += 1;
     }

@@ -8,6 +8,11 @@
 export const LOWEST_CELSIUS = -40;
 export const HIGHEST_CELSIUS = 1400;
 
+/** Minutes further from the record's zero than this (190 years) are no times of a firing (our definition). */
+export const FARTHEST_MINUTE = 1e8;
+/** Readings closer together than this, minutes, are of one moment: a sixth of a millisecond (our definition). */
+export const SAME_MOMENT = 1e-6;
+
 /** Fewer readings than this show no course at all (our definition). */
 export const FEWEST_READINGS = 3;
 

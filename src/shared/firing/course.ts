@@ -1,6 +1,11 @@
 import type { CleanReadings } from './clean-readings.ts';
 import { cleanReadings } from './clean-readings.ts';
-import { FEWEST_READINGS, FINE_HALF_MINUTES, WIDE_HALF_MINUTES } from './constants.ts';
+import {
+  FARTHEST_MINUTE,
+  FEWEST_READINGS,
+  FINE_HALF_MINUTES,
+  WIDE_HALF_MINUTES,
+} from './constants.ts';
 import type { Curve } from './curve.ts';
 import { curveOf, errorOf, halfWidthFor, stepFor } from './curve.ts';
 import type { Scatter } from './scatter.ts';
@@ -42,7 +47,7 @@ export function courseOf(input: FiringInput): Course | null {
   const record = cleanReadings(input.readings);
   const n = record.minutes.length;
   if (n < FEWEST_READINGS) return null;
-  const marks = (input.marks ?? []).filter((mark) => Number.isFinite(mark.minute));
+  const marks = (input.marks ?? []).filter((mark) => Math.abs(mark.minute) <= FARTHEST_MINUTE);
   const span = (record.minutes[n - 1] ?? 0) - (record.minutes[0] ?? 0);
   const step = stepFor(span);
   const scatter = scatterOf(record.minutes, record.celsius);
@@ -52,7 +57,7 @@ export function courseOf(input: FiringInput): Course | null {
   const wholeFine = curveOf(record, levelHalf, step);
   const levelError = errorOf('level', levelHalf, scatter.noiseCelsius, scatter.readingsPerMinute);
   const start = startOf(curveOf(record, rateHalf, step), wholeFine, levelError, marks);
-  const shutOff = shutOffOf(wholeFine, record.minutes, start.minute, marks);
+  const shutOff = shutOffOf(wholeFine, levelError, record.minutes, start.minute, marks);
 
   let from = indexAtOrAfter(record.minutes, start.minute - 1e-9);
   let to = indexAtOrAfter(record.minutes, shutOff.minute + 1e-9);

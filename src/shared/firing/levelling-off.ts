@@ -103,15 +103,21 @@ function forecast(means: Means, aim: number | null, nowX: number): LevellingOff 
   const fitAt = (end: number): Fit => {
     let best: Fit = { rss: Infinity, k: 1, fall: 0 };
     const spread = n * end * end - 2 * end * sumY + sumYY;
-    for (const { k, e, ee, ye } of tried) {
+    const left: number[] = [];
+    let at = 0;
+    for (const [i, { k, e, ee, ye }] of tried.entries()) {
       const along = end * e - ye;
       const rss = spread - (along * along) / ee;
-      if (rss < best.rss) best = { rss, k, fall: along / ee };
+      left.push(rss);
+      if (rss >= best.rss) continue;
+      at = i;
+      best = { rss, k, fall: along / ee };
     }
-    return best;
+    return { ...best, rss: lowestBetween(left, at) };
   };
-  const end = bestEnd(tried, n, sumY);
-  if (end === null) return null;
+  const roughEnd = bestEnd(tried, n, sumY);
+  if (roughEnd === null) return null;
+  const end = lowestNear(roughEnd, (value) => fitAt(value).rss);
   const best = fitAt(end);
   const sd2 = Math.max(best.rss / Math.max(1, n - 3), LEAST_SD ** 2);
   const rho = lagOne(means.x.map((x, i) => (y[i] ?? 0) - end + best.fall * Math.exp(-best.k * x)));
@@ -163,6 +169,28 @@ function bestEnd(tried: readonly Tried[], n: number, sumY: number): number | nul
     }
   }
   return best;
+}
+
+/** The least of a smooth curve known at even steps, by the parabola through its lowest three. */
+function lowestBetween(values: readonly number[], at: number): number {
+  const middle = values[at] ?? Infinity;
+  const before = values[at - 1];
+  const after = values[at + 1];
+  if (before === undefined || after === undefined) return middle;
+  const bend = before - 2 * middle + after;
+  return bend > 0 ? Math.max(0, middle - (before - after) ** 2 / (8 * bend)) : middle;
+}
+
+/** The end within 30 °C of a rough one that leaves least, by thirds. */
+function lowestNear(rough: number, left: (end: number) => number): number {
+  let low = rough - 30;
+  let high = rough + 30;
+  while (high - low > 0.1) {
+    const third = (high - low) / 3;
+    if (left(low + third) <= left(high - third)) high -= third;
+    else low += third;
+  }
+  return (low + high) / 2;
 }
 
 /** Farthest value from `from` that is still allowed, by halving; null when even the farthest is. */

@@ -16,6 +16,7 @@ const SLOW_FALL_RATE = 2;
  */
 export function shutOffOf(
   fine: Curve,
+  fineError: number,
   readingMinutes: Float64Array,
   startMinute: number,
   marks: readonly Mark[],
@@ -27,7 +28,11 @@ export function shutOffOf(
     return { minute: off, inferred: false };
   }
   const from = off !== null && relit !== null && relit >= off ? relit : startMinute;
-  const knee = kneeOf(fine, Math.max(from, fine.minutes[0] ?? 0));
+  const knee = kneeOf(
+    fine,
+    Math.max(from, fine.minutes[0] ?? 0),
+    Math.min(3, Math.max(0.25, 3 * fineError)),
+  );
   return { minute: knee === null ? last : readingBefore(readingMinutes, knee), inferred: true };
 }
 
@@ -49,7 +54,7 @@ function readingBefore(minutes: Float64Array, minute: number): number {
 }
 
 /** Where the lasting fall after the peak begins; null where the record has none. */
-function kneeOf(fine: Curve, fromMinute: number): number | null {
+function kneeOf(fine: Curve, fromMinute: number, near: number): number | null {
   const v = fine.celsius;
   const n = v.length;
   const peak = highest(v, stepAt(fine, fromMinute), n);
@@ -65,26 +70,26 @@ function kneeOf(fine: Curve, fromMinute: number): number | null {
     if (minutes < 1) break;
     const drop = (v[i] ?? 0) - (v[to] ?? 0);
     if (drop < Math.max(STAYS_BELOW, STEEP_RATE * minutes)) continue;
-    const knee = lastNearTop(v, i, to);
+    const knee = lastNearTop(v, i, to, near);
     if ((highestAfter[to] ?? 0) <= (v[knee] ?? 0) - STAYS_BELOW) return fine.minutes[knee] ?? null;
   }
-  return slowFall(fine, Math.max(peak, climbsAgain));
+  return slowFall(fine, Math.max(peak, climbsAgain), near);
 }
 
 /** The last step near the highest of a span: where a level ends and the fall begins. */
-function lastNearTop(v: Float64Array, from: number, to: number): number {
+function lastNearTop(v: Float64Array, from: number, to: number, near: number): number {
   const top = v[highest(v, from, to + 1)] ?? 0;
   let knee = from;
-  for (let i = from; i <= to; i += 1) if ((v[i] ?? 0) >= top - 2) knee = i;
+  for (let i = from; i <= to; i += 1) if ((v[i] ?? 0) >= top - near) knee = i;
   return knee;
 }
 
 /** A kiln that cools slowly to the record's end without ever turning was shut off at its peak. */
-function slowFall(fine: Curve, from: number): number | null {
+function slowFall(fine: Curve, from: number, near: number): number | null {
   const v = fine.celsius;
   const n = v.length;
   const top = highest(v, from, n);
-  const knee = lastNearTop(v, top, n - 1);
+  const knee = lastNearTop(v, top, n - 1, near);
   const drop = (v[knee] ?? 0) - (v[n - 1] ?? 0);
   const minutes = (n - 1 - knee) * fine.stepMinutes;
   return drop >= COOLED_BY && drop >= SLOW_FALL_RATE * minutes
