@@ -62,7 +62,6 @@ export function KilnPlanDrawing({ id, kiln, hatch }: Props) {
               wallClip={`url(#${id}-wall)`}
               burner={burner}
               portMm={kiln.port?.openingMm ?? 60}
-              wallMm={kiln.wallMm}
               scale={scale}
               at={at}
             />
@@ -77,12 +76,11 @@ interface BurnerProps {
   readonly wallClip: string;
   readonly burner: BurnerPlan;
   readonly portMm: number;
-  readonly wallMm: number;
   readonly scale: number;
   readonly at: (spot: Spot) => string;
 }
 
-function BurnerFromAbove({ wallClip, burner, portMm, wallMm, scale, at }: BurnerProps) {
+function BurnerFromAbove({ wallClip, burner, portMm, scale, at }: BurnerProps) {
   const { aim, port, tip, meets } = burner;
   const side = { x: -aim.y, y: aim.x };
   const along = (from: Spot, forward: number, aside: number): Spot => ({
@@ -91,7 +89,8 @@ function BurnerFromAbove({ wallClip, burner, portMm, wallMm, scale, at }: Burner
   });
   const bar = (from: Spot, back: number, front: number, half: number) =>
     `M${at(along(from, back, -half))}L${at(along(from, front, -half))}L${at(along(from, front, half))}L${at(along(from, back, half))}Z`;
-  const through = (wallMm / Math.max(0.2, aim.x)) * 1.6 + portMm;
+  // The nearer edge of a slanting port reaches the chamber later than its axis.
+  const through = burner.throughWallMm + (portMm / 2) * (-aim.y / aim.x);
   const head = (lengthMm: number) => lengthMm / scale;
   return (
     <>

@@ -35,7 +35,7 @@ export function LabelLanes({ placed, texts, baseY }: Props) {
         fontSize={LABEL_SIZE}
       >
         {placed.map((label) => (
-          <text key={label.id} x={label.textX} y={laneY(label.lane)}>
+          <text key={label.id} x={label.textX} y={laneY(label.lane)} textAnchor={label.anchor}>
             {texts.get(label.id)}
           </text>
         ))}

@@ -9,7 +9,8 @@ function stepFor(steps: readonly number[], span: number, width: number, room: nu
 
 function multiplesBetween(from: number, to: number, step: number): readonly number[] {
   const ticks: number[] = [];
-  for (let tick = Math.ceil(from / step) * step; tick <= to + 1e-9; tick += step) ticks.push(tick);
+  for (let tick = Math.ceil(from / step) * step; tick <= to + 1e-9; tick += step)
+    ticks.push(tick === 0 ? 0 : tick);
   return ticks;
 }
 

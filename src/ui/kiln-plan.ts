@@ -12,6 +12,8 @@ export interface BurnerPlan {
   /** Unit vector of the flame. */
   readonly aim: Spot;
   readonly tip: Spot;
+  /** Along the axis, from the outside of the wall to where the chamber begins. */
+  readonly throughWallMm: number;
   /** Where the straight flame meets the far inside of the wall. */
   readonly meets: Spot;
 }
@@ -42,11 +44,28 @@ export function burnerPlan(kiln: KilnDimensions): BurnerPlan | null {
     x: port.x - aim.x * kiln.burner.setbackMm,
     y: port.y - aim.y * kiln.burner.setbackMm,
   };
+  const throughWallMm =
+    kiln.shape === 'round'
+      ? roundEntry(port, aim, halves.insideWidth)
+      : (halves.width - halves.insideWidth) / aim.x;
   const reach =
     kiln.shape === 'round'
       ? roundReach(port, aim, halves.insideWidth)
       : boxReach(port, aim, halves);
-  return { port, aim, tip, meets: { x: port.x + aim.x * reach, y: port.y + aim.y * reach } };
+  return {
+    port,
+    aim,
+    tip,
+    throughWallMm,
+    meets: { x: port.x + aim.x * reach, y: port.y + aim.y * reach },
+  };
+}
+
+/** Distance along the aim to the near side of the circle; to its nearest point if it misses. */
+function roundEntry(from: Spot, aim: Spot, radius: number): number {
+  const along = from.x * aim.x + from.y * aim.y;
+  const rest = along * along - (from.x * from.x + from.y * from.y - radius * radius);
+  return -along - Math.sqrt(Math.max(0, rest));
 }
 
 /** Distance along the aim to the far side of a circle about the middle; to the port if it misses. */

@@ -12,8 +12,9 @@ export interface PlacedLabel {
   readonly id: string;
   readonly x: number;
   readonly spanToX: number | null;
-  /** Left end of the text. */
+  /** Where the text begins, or ends if it stands to the left of its leader. */
   readonly textX: number;
+  readonly anchor: 'start' | 'end';
   /** 0 is the lane next to the drawing. */
   readonly lane: number;
 }
@@ -70,7 +71,7 @@ export function placeLabels(
       id: wish.id,
       x: wish.x,
       spanToX: wish.spanToX ?? null,
-      textX: place?.textX ?? 0,
+      ...anchored(wish, place?.textX ?? 0),
       lane: place?.lane ?? 0,
     };
   });
@@ -85,6 +86,12 @@ function textPositions(wish: LabelWish, width: number): readonly number[] {
   const over = Math.max(0, Math.min(x - textWidth / 2, width - textWidth));
   // A text over its own bracket would hide it: only where there is no room beside.
   return wish.spanToX !== undefined && beside.length > 0 ? beside : [...beside, over];
+}
+
+/** A text left of its leader is set against it, because its width is only an estimate. */
+function anchored(wish: LabelWish, textX: number): Pick<PlacedLabel, 'textX' | 'anchor'> {
+  const end = textX + wish.textWidth;
+  return end <= wish.x ? { textX: end, anchor: 'end' } : { textX, anchor: 'start' };
 }
 
 function bestPlace(wish: LabelWish, taken: readonly Place[], width: number): Place {

@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { FORMS } from '#shared/vocabulary/ware.ts';
 import type { Form } from '#shared/vocabulary/ware.ts';
+import { FieldRow } from '../ui/FieldRow.tsx';
 import { NumberField } from '../ui/NumberField.tsx';
 import { optionsOf } from '../ui/options.ts';
 import { RowsEditor } from '../ui/RowsEditor.tsx';
@@ -30,7 +31,7 @@ export function RowsExample() {
       least={1}
       most={30}
       renderRow={(row, change) => (
-        <>
+        <FieldRow>
           <SelectField
             label="Form"
             value={row.form}
@@ -47,7 +48,7 @@ export function RowsExample() {
             decimals={0}
             required
           />
-        </>
+        </FieldRow>
       )}
     />
   );

@@ -13,7 +13,7 @@ export function WorkbenchPage() {
     <MessagesProvider>
       <SkipLink to="#bench">To the components</SkipLink>
       <div className="mx-auto max-w-page px-4 pb-24 sm:px-8">
-        <header className="flex items-center justify-between border-b border-line py-4">
+        <header className="flex flex-wrap items-center justify-between gap-3 border-b border-line py-4">
           <p className="flex items-center gap-2.5 text-lead font-[700] tracking-[-0.02em]">
             <SpyholeMark />
             Spyhole
