@@ -12,6 +12,7 @@ import { noteSubject } from '../notes/note-subject.ts';
 import { statusAfter, type NoteAct } from '../notes/note-status.ts';
 import { projectNote } from '../notes/projection.ts';
 import { findRevision } from '../notes/revision-repository.ts';
+import { nudgeOutbox } from '../outbox/nudge.ts';
 import { enqueue, type MailJob } from '../outbox/outbox.ts';
 import { decisionsOf, sendRemarks } from './remark-repository.ts';
 
@@ -168,6 +169,7 @@ export async function decide(
       });
     }
   });
+  nudgeOutbox();
 }
 
 function changeFor(trx: Knex, decision: Decision['decision'], note: HandedIn): NoteChange {
@@ -240,4 +242,5 @@ export async function takeDown(
       });
     }
   });
+  nudgeOutbox();
 }

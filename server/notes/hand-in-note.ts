@@ -11,6 +11,7 @@ import type { SignedIn } from '../authorization/actor.ts';
 import { canOnNote } from '../authorization/rules.ts';
 import { inTransaction } from '../database/transaction.ts';
 import { AppError } from '../http/problem.ts';
+import { nudgeOutbox } from '../outbox/nudge.ts';
 import { enqueue } from '../outbox/outbox.ts';
 import { picturesOfNote } from '../pictures/picture-repository.ts';
 import { storeContent } from '../records/record-content.ts';
@@ -109,6 +110,7 @@ export async function handInNote(
     });
     await tellTheDesk(trx, noteId, revisionId, actor.id);
   });
+  nudgeOutbox();
 }
 
 function staleHandIn(): AppError {

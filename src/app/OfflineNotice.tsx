@@ -20,8 +20,8 @@ export function OfflineNotice() {
   if (online) return null;
   return (
     <div className="pt-4">
-      <Notice kind="info">
-        No network. What you write stays in this browser and is sent when the network is back.
+      <Notice kind="info" heading="No network">
+        What you write stays in this browser and is sent when the network is back.
       </Notice>
     </div>
   );

@@ -39,7 +39,17 @@ export const whatHelpedSchema = z.object({
     }),
   ),
   duringTheFiring: z.array(
-    z.object({ change: z.string(), firings: z.number(), members: z.number(), wentOn: z.number() }),
+    z.object({
+      change: z.string(),
+      startClass: z.enum(['cold', 'hot']),
+      firings: z.number(),
+      members: z.number(),
+      wentOn: z.number(),
+      share: z.number().nullable(),
+      interval: interval.nullable(),
+      caution: z.string().nullable(),
+      noteIds: z.array(z.number()),
+    }),
   ),
   notes: z.record(z.string(), z.object({ id: z.number(), slug: z.string(), title: z.string() })),
 });

@@ -61,13 +61,17 @@ export const partSchema = z.object({
 
 export const pooledAnswerSchema = z.object({
   trouble: z.enum(TROUBLE_IDS),
-  notes: z.number(),
+  startClass: z.enum(['cold', 'hot']),
+  source: z.enum(['measured', 'named']),
+  pairs: z.number(),
   rows: z.array(
     z.object({
       change: z.enum(CHANGE_IDS).nullable(),
       gone: z.number(),
       firings: z.number(),
       members: z.number(),
+      verdict: z.enum(['better', 'worse', 'cannot-be-told', 'too-few', 'reference']),
+      caution: z.string().nullable(),
     }),
   ),
 });

@@ -1,0 +1,74 @@
+import type { Knex } from 'knex';
+import type { FiringFacts } from '#shared/note/facts.ts';
+import type { Trouble } from '#shared/vocabulary/troubles.ts';
+import { dayOf } from '../database/day.ts';
+import { readJson } from '../database/read-json.ts';
+import type { PublishedFiring } from './pairs.ts';
+
+/** A firing whose author's account is gone still counts, as one unknown member of its own. */
+const unknownMember = (noteId: number): number => -noteId;
+
+interface RawFiring {
+  note_id: number;
+  kiln_id: number;
+  author_id: number | null;
+  fired_on: Date;
+  facts: unknown;
+}
+
+/**
+ * Every firing of the kilns in which a trouble ever occurred, in order of firing: what its pairs
+ * are made from. A season is a calendar year: gas kilns outdoors rest in winter.
+ */
+export async function firingsAround(db: Knex, trouble: Trouble): Promise<PublishedFiring[]> {
+  const rows = await db('published_firings')
+    .whereIn(
+      'published_firings.kiln_id',
+      db('firing_troubles')
+        .join('published_firings as struck', 'struck.note_id', 'firing_troubles.note_id')
+        .where('firing_troubles.trouble', trouble)
+        .select('struck.kiln_id'),
+    )
+    .orderBy([
+      'published_firings.fired_on',
+      'published_firings.fired_at_time',
+      'published_firings.note_id',
+    ])
+    .select<RawFiring[]>(
+      'published_firings.note_id',
+      'published_firings.kiln_id',
+      'published_firings.author_id',
+      'published_firings.fired_on',
+      'published_firings.facts',
+    );
+  return rows.map((row) => ({
+    ...(readJson(row.facts) as FiringFacts),
+    noteId: row.note_id,
+    kilnId: row.kiln_id,
+    memberId: row.author_id ?? unknownMember(row.note_id),
+    season: dayOf(row.fired_on).slice(0, 4),
+  }));
+}
+
+/** How many published notes had each trouble, measured or named. */
+export async function troubleCounts(db: Knex): Promise<{ trouble: Trouble; notes: number }[]> {
+  return db('firing_troubles')
+    .groupBy('firing_troubles.trouble')
+    .orderBy([{ column: 'notes', order: 'desc' }, { column: 'firing_troubles.trouble' }])
+    .select<{ trouble: Trouble; notes: number }[]>(
+      'firing_troubles.trouble',
+      db.raw('COUNT(*) AS notes'),
+    );
+}
+
+/** When anything that figures read last changed, as a short text; equal texts mean equal figures. */
+export async function figuresVersion(db: Knex): Promise<string> {
+  const row = await db('published_firings')
+    .select<{ n: number; latest: number | null; last: Date | null }[]>(
+      db.raw('COUNT(*) AS n'),
+      db.raw('SUM(published_firings.revision_id) AS latest'),
+      db.raw('MAX(published_firings.published_at) AS last'),
+    )
+    .first();
+  return `${String(row?.n ?? 0)}:${String(row?.latest ?? 0)}:${row?.last?.toISOString() ?? ''}`;
+}

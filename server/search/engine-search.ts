@@ -1,0 +1,176 @@
+import type { MultiSearchQuery } from 'meilisearch';
+import { bothFilters, filterText } from '../../search/filters.ts';
+import { NOTES_INDEX, type NoteDocument } from '../../search/note-document.ts';
+import type { FindFacet, FindQuery } from '#shared/api/search.ts';
+import { FIND_FACETS } from '#shared/api/search.ts';
+import type { OrderableHit } from '#shared/question/order-hits.ts';
+import type { QuestionReading } from '#shared/question/reading-types.ts';
+import {
+  tiersFor,
+  type Filter,
+  type Tier,
+  type TierRequest,
+} from '#shared/question/search-request.ts';
+import type { Config } from '../config.ts';
+import { HIT_BEGINS, HIT_ENDS } from './passage.ts';
+import { searchingClient } from './search-client.ts';
+
+/** Hits asked for per query: pages are made from the joined list. */
+const MOST_PER_QUERY = 200;
+const PASSAGE_WORDS = 28;
+
+export interface EngineHit extends OrderableHit {
+  readonly tier: Tier;
+  readonly document: NoteDocument;
+  readonly marked: string | undefined;
+}
+export interface EngineAnswer {
+  readonly hits: EngineHit[];
+  readonly facets: Record<string, { value: string; count: number }[]>;
+}
+
+export type ChosenFacets = Partial<Record<FindFacet, string[]>>;
+
+/** What the reader has ticked beside the question. */
+export function chosenFacets(query: FindQuery): ChosenFacets {
+  const chosen: ChosenFacets = {};
+  for (const facet of FIND_FACETS) {
+    const values = (query[facet] ?? '').split(',').filter((value) => value !== '');
+    if (values.length > 0) chosen[facet] = values.slice(0, 20);
+  }
+  return chosen;
+}
+
+function facetFilter(chosen: ChosenFacets, without?: FindFacet): Filter | null {
+  const of = FIND_FACETS.flatMap((facet): Filter[] => {
+    const values = chosen[facet];
+    return values && facet !== without ? [{ kind: 'in', field: facet, values }] : [];
+  });
+  return of.length === 0 ? null : { kind: 'all', of };
+}
+
+/** Where the temperature asked about stands in a note, for nearness. */
+function levelsFor(reading: QuestionReading, document: NoteDocument): number[] {
+  const levels = [
+    ...(reading.trouble.includes('stall') ? document.stallC : []),
+    ...(reading.trouble.includes('sag') ? document.sagC : []),
+  ];
+  if (levels.length > 0) return levels;
+  return document.peakC === null ? [] : [document.peakC];
+}
+
+interface Asked {
+  readonly tier: Tier;
+  readonly foundBy: number;
+  readonly query: MultiSearchQuery;
+}
+
+function queriesOf(request: TierRequest | null, ticked: Filter | null): Asked[] {
+  if (!request) return [];
+  return request.texts.map((q, foundBy) => ({
+    tier: request.tier,
+    foundBy,
+    query: {
+      indexUid: NOTES_INDEX,
+      q,
+      filter: filterText(bothFilters(request.filter, ticked)),
+      matchingStrategy: request.strategy,
+      limit: MOST_PER_QUERY,
+      attributesToHighlight: ['title', 'story'],
+      attributesToCrop: [`story:${String(PASSAGE_WORDS)}`],
+      highlightPreTag: HIT_BEGINS,
+      highlightPostTag: HIT_ENDS,
+    },
+  }));
+}
+
+/** The tiers of a question; without one, everything published, newest first. */
+function tierRequests(reading: QuestionReading): TierRequest[] {
+  const { close, sameTrouble, byWords } = tiersFor(reading);
+  const asked = [close, sameTrouble, byWords].filter((request) => request !== null);
+  return asked.length > 0
+    ? asked
+    : [{ tier: 'by-words', filter: null, texts: [''], strategy: 'last' }];
+}
+
+/**
+ * Asks the engine everything in one request: the tiers of the question with their words, and the
+ * counts of the facets, each without its own ticks so that its other values can be seen.
+ */
+export async function searchEngine(
+  config: Config,
+  reading: QuestionReading,
+  chosen: ChosenFacets,
+): Promise<EngineAnswer> {
+  const client = await searchingClient(config);
+  const ticked = facetFilter(chosen);
+  const requests = tierRequests(reading);
+  const asked = requests.flatMap((request) => queriesOf(request, ticked));
+  // Counts are over everything with the trouble asked about, else over what the widest tier finds.
+  const counted = requests.find((request) => request.tier === 'same-trouble') ?? requests.at(-1);
+  const countQuery = (facets: readonly FindFacet[], without?: FindFacet): MultiSearchQuery => ({
+    indexUid: NOTES_INDEX,
+    q: counted?.filter ? '' : (counted?.texts[0] ?? ''),
+    filter: filterText(bothFilters(counted?.filter ?? null, facetFilter(chosen, without))),
+    matchingStrategy: counted?.strategy ?? 'last',
+    limit: 0,
+    facets: [...facets],
+  });
+  const unticked = FIND_FACETS.filter((facet) => !chosen[facet]);
+  const counts = [
+    { facets: unticked, query: countQuery(unticked) },
+    ...FIND_FACETS.filter((facet) => chosen[facet]).map((facet) => ({
+      facets: [facet],
+      query: countQuery([facet], facet),
+    })),
+  ];
+  const { results } = await client.multiSearch<{ queries: MultiSearchQuery[] }, NoteDocument>({
+    queries: [...asked.map((each) => each.query), ...counts.map((each) => each.query)],
+  });
+  const hits = asked.flatMap(({ tier, foundBy }, index) =>
+    (results[index]?.hits ?? []).map((hit): EngineHit => {
+      const { _formatted, ...document } = hit;
+      return {
+        tier,
+        foundBy,
+        document,
+        marked: typeof _formatted?.story === 'string' ? _formatted.story : undefined,
+        outcome: document.outcome,
+        levelsC: levelsFor(reading, document),
+        firedOn: document.firedOn,
+      };
+    }),
+  );
+  const facets: EngineAnswer['facets'] = {};
+  counts.forEach((count, index) => {
+    const distribution = results[asked.length + index]?.facetDistribution ?? {};
+    for (const facet of count.facets) {
+      facets[facet] = Object.entries(distribution[facet] ?? {})
+        .map(([value, n]) => ({ value, count: n }))
+        .sort((a, b) => b.count - a.count || a.value.localeCompare(b.value));
+    }
+  });
+  return { hits, facets };
+}
+
+/** How many notes each question would find closely: for "loosen this". */
+export async function countClose(
+  config: Config,
+  readings: readonly QuestionReading[],
+): Promise<number[]> {
+  if (readings.length === 0) return [];
+  const client = await searchingClient(config);
+  const { results } = await client.multiSearch<{ queries: MultiSearchQuery[] }, NoteDocument>({
+    queries: readings.map((reading): MultiSearchQuery => {
+      const { close, byWords } = tiersFor(reading);
+      const request = close ?? byWords;
+      return {
+        indexUid: NOTES_INDEX,
+        q: close ? '' : (byWords?.texts[0] ?? ''),
+        filter: filterText(request?.filter ?? null),
+        limit: 0,
+      };
+    }),
+  });
+  return results.map((result) => result.estimatedTotalHits ?? 0);
+}

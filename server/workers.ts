@@ -1,0 +1,39 @@
+import { setTimeout as sleep } from 'node:timers/promises';
+import type { Deps } from './deps.ts';
+import { createHandlers } from './outbox/handlers.ts';
+import { startOutboxWorker } from './outbox/worker.ts';
+import { readRecord } from './records/read-record.ts';
+import { indexNote } from './search/index-note.ts';
+import { catchUpIndex } from './search/reindex.ts';
+
+const TRY_AGAIN_MILLISECONDS = 5000;
+
+export interface Workers {
+  /** Ends after the job under way. */
+  stop: () => Promise<void>;
+}
+
+/** Starts what works beside the requests: the outbox, and one look at whether the index is whole. */
+export function startWorkers(deps: Deps): Workers {
+  const outbox = startOutboxWorker(deps, createHandlers(deps, { indexNote, readRecord }));
+  const stopping = new AbortController();
+  const catchingUp = catchUp(deps, stopping.signal);
+  return {
+    async stop() {
+      stopping.abort();
+      await Promise.all([outbox.stop(), catchingUp]);
+    },
+  };
+}
+
+async function catchUp(deps: Deps, signal: AbortSignal): Promise<void> {
+  while (!signal.aborted) {
+    try {
+      await catchUpIndex(deps);
+      return;
+    } catch (error) {
+      deps.log.warn({ err: error }, 'the index is not caught up yet');
+      await sleep(TRY_AGAIN_MILLISECONDS, undefined, { signal }).catch(() => undefined);
+    }
+  }
+}
