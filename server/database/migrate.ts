@@ -15,6 +15,18 @@ const MIGRATION_NAME = /^\d{8}T\d{4}_[a-z0-9_]+\.ts$/;
 const RUNNER_LOCK = 'spyhole_migrations';
 const RUNNER_LOCK_SECONDS = 60;
 
+/** "It is already so": what the database says to a change that had been made before. */
+const ALREADY_SO = new Set([
+  1050, // the table exists
+  1051, // the table to drop does not
+  1060, // the column exists
+  1061, // the index exists
+  1091, // the column or index to drop does not exist
+  1359, // the trigger exists
+  1360, // the trigger to drop does not
+  1826, // the foreign key exists
+]);
+
 /**
  * The one runner of migrations, used by the start command, `npm run migrate` and the tests.
  *
@@ -82,9 +94,16 @@ async function setCollation(db: Knex): Promise<void> {
 /** What a migration's file exports; Knex reads `config`, but its types do not say so. */
 type MigrationModule = Partial<Knex.Migration> & { config?: { transaction?: boolean } };
 
+function isAlreadySo(error: unknown): boolean {
+  const { errno = 0, message = '' } = error as { errno?: number; message?: string };
+  // A foreign key that exists comes as "cannot create the table" with the storage engine's own number.
+  return ALREADY_SO.has(errno) || (errno === 1005 && message.includes('errno: 121 '));
+}
+
 /** Reads the folder of migrations; anything else in it than migrations and schema.sql is a mistake. */
 class MigrationFiles implements Knex.MigrationSource<string> {
   readonly #folder: string;
+  #isFirst = true;
 
   constructor(folder: string) {
     this.#folder = folder;
@@ -110,6 +129,24 @@ class MigrationFiles implements Knex.MigrationSource<string> {
     if (up === undefined || down === undefined || config?.transaction !== false) {
       throw new Error(`${name} must export up, down and config = { transaction: false }`);
     }
-    return { up, down, config } as Knex.Migration;
+    return {
+      up: (knex: Knex) => this.#resume(knex, up),
+      down: (knex: Knex) => this.#resume(knex, down),
+      config,
+    } as Knex.Migration;
+  }
+
+  /**
+   * A run that is killed between the change and the note that it was made leaves the first migration
+   * of the next run done already. Each one is a single statement, so it was done whole or not at all.
+   */
+  async #resume(knex: Knex, change: (knex: Knex) => PromiseLike<void>): Promise<void> {
+    const isFirst = this.#isFirst;
+    this.#isFirst = false;
+    try {
+      await change(knex);
+    } catch (error) {
+      if (!isFirst || !isAlreadySo(error)) throw error;
+    }
   }
 }
