@@ -55,6 +55,10 @@ export function openDatabase(url: string, options: DatabaseOptions = {}): Knex {
     userParams: {
       statementMilliseconds: statementSeconds === 0 ? 0 : (statementSeconds + 2) * 1_000,
     },
+    // Errors tell the statement with its placeholders: what people typed stays out of every log.
+    compileSqlOnError: false,
+    // Each error is thrown as well; said a second time on the terminal it would miss our own log.
+    log: { error: () => undefined },
     acquireConnectionTimeout: ACQUIRE_MILLISECONDS,
     pool: {
       min: 0,

@@ -7,6 +7,7 @@ import { commandLineOf, isAlive, stopProcess } from './processes.ts';
 /** A database for tests and tools, gone when it is stopped. */
 export interface ThrowawayDatabase {
   url: string;
+  pid: number;
   stop: () => Promise<void>;
 }
 
@@ -23,6 +24,7 @@ export async function startThrowawayDatabase(): Promise<ThrowawayDatabase> {
   const server = await startMariadb({ folder, durable: false });
   return {
     url: server.url,
+    pid: server.pid,
     stop: async () => {
       await server.stop();
       rmSync(folder, { recursive: true, force: true });

@@ -112,6 +112,16 @@ describe('openDatabase', () => {
     await expect(insert).rejects.toMatchObject({ code: 'ER_DATA_TOO_LONG' });
   });
 
+  test('keeps what a person typed out of the words of an error', async ({ pool }) => {
+    await makeScratchTable(pool);
+    const canary = 'a canary of more than twenty letters';
+    const error = await pool(SCRATCH)
+      .insert({ name: canary })
+      .catch((refusal: unknown) => refusal);
+    expect(error).toBeInstanceOf(Error);
+    expect(`${String(error)} ${JSON.stringify(error)}`).not.toContain('canary');
+  });
+
   test('ends a statement that takes too long', async ({ pool }) => {
     const endless = pool.transaction(async (transaction) => {
       await transaction.raw('SET SESSION max_statement_time = 0.2');
