@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import { pictureSchema, type Picture } from '#shared/api/pictures.ts';
 import type { Draft, NotePageData, Remark } from '#shared/api/notes.ts';
 import type { KilnFields } from '#shared/note/kiln-fields.ts';
+import { noteSummary } from '#shared/note/note-summary.ts';
 import { insideVolumeLitres } from '#shared/note/kiln-fields.ts';
 import type { Actor } from '../authorization/actor.ts';
 import { noteAbilities } from '../authorization/rules.ts';
@@ -79,6 +80,7 @@ export async function presentNotePage(
       followOn: ownRows[0]?.followOn ?? null,
     },
     findings: revision.findings,
+    summary: noteSummary(fields, facts, earlier !== null),
     storyHtml: revision.storyHtml,
     pictures,
     hasRecord: revision.recordContentId !== null,

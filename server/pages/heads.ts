@@ -99,7 +99,7 @@ async function noteHead(db: Knex, noteId: number): Promise<PageHead | null> {
   if (!row || !note || note.publishedRevisionId === null) return null;
   const revision = await findRevision(db, note.publishedRevisionId);
   if (!revision) return null;
-  const description = noteInShort(revision.facts).join(' ') || SITE;
+  const description = noteInShort(revision).join(' ') || SITE;
   const [picture] = picturesIn(revision.fields.story);
   const canonical = paths.note(row.id, row.slug);
   const image = picture === undefined ? null : picturePreviewUrl(picture);

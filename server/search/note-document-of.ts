@@ -48,7 +48,7 @@ export function noteDocumentOf(row: NoteRow, revision: Revision): NoteDocument {
     id: String(row.id),
     noteId: row.id,
     title: row.title,
-    inShort: noteInShort(facts).join(' '),
+    inShort: noteInShort(revision).join(' '),
     story: spacedUnits(texts.map((part) => part.text).join('\n')),
     pieceRemarks: fields.pieces
       .map((piece) => piece.remark)

@@ -1,4 +1,7 @@
 import { z } from 'zod';
+import { pieceSchema } from '../note/pieces.ts';
+import { idsOf } from '../vocabulary/terms.ts';
+import { CRACK_PLACES, FORM_IDS } from '../vocabulary/ware.ts';
 import { TROUBLE_IDS } from '../vocabulary/troubles.ts';
 import { CHANGE_IDS } from '../vocabulary/changes.ts';
 
@@ -35,3 +38,36 @@ export const checkSchema = z.object({
   answer: z.string().optional(),
 });
 export const proposedChangeSchema = z.object({ change: z.enum(CHANGE_IDS), text: z.string() });
+
+/** What the sentences "in short" are made of, so that each reader gets them in their own units. */
+export const noteSummarySchema = z.object({
+  peakCelsius: z.number().nullable(),
+  targetCelsius: z.number().nullable(),
+  reached: z.boolean().nullable(),
+  aimCelsius: z.number().nullable(),
+  timeToTemperatureMinutes: z.number().nullable(),
+  holdMinutes: z.number().nullable(),
+  levels: z
+    .array(
+      z.object({
+        levelCelsius: z.number(),
+        atMinute: z.number().nullable(),
+        minutes: z.number(),
+      }),
+    )
+    .readonly(),
+  sags: z.array(z.object({ topCelsius: z.number(), dropCelsius: z.number() })).readonly(),
+  pieces: z
+    .array(
+      z.object({
+        form: z.enum(FORM_IDS).nullable(),
+        count: z.number(),
+        whole: z.boolean().nullable(),
+        melt: pieceSchema.shape.melt.unwrap(),
+        cracked: z.boolean(),
+        crackPlace: z.enum(idsOf(CRACK_PLACES)).nullable(),
+      }),
+    )
+    .readonly(),
+  changes: z.array(z.enum(CHANGE_IDS)).readonly().nullable(),
+});

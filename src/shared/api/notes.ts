@@ -3,7 +3,7 @@ import { noteFieldsSchema } from '../note/note-fields.ts';
 import { kilnFieldsSchema } from '../note/kiln-fields.ts';
 import { CHANGE_IDS } from '../vocabulary/changes.ts';
 import { NOTE_STATUS_IDS } from '../vocabulary/statuses.ts';
-import { checkSchema, findingSchema, proposedChangeSchema } from './findings.ts';
+import { checkSchema, findingSchema, noteSummarySchema, proposedChangeSchema } from './findings.ts';
 import { followOnSchema, noteRowSchema, stripPointsSchema } from './note-rows.ts';
 import { pictureSchema } from './pictures.ts';
 import { recordSchema } from './records.ts';
@@ -54,6 +54,7 @@ export const notePageSchema = z.object({
   marks: noteFieldsSchema.shape.record.unwrap().shape.marks.unwrap(),
   row: noteRowSchema,
   findings: z.array(findingSchema),
+  summary: noteSummarySchema,
   storyHtml: z.string(),
   pictures: z.array(pictureSchema),
   hasRecord: z.boolean(),
