@@ -21,7 +21,7 @@ const MysqlDialect = createRequire(import.meta.url)('knex/lib/dialects/mysql2/in
 ) => Dialect;
 
 /**
- * Knex's own MariaDB client with a time limit on every statement (`userParams.statementMilliseconds`,
+ * Knex's own MariaDB client, with values kept out of its errors and a time limit on every statement (`userParams.statementMilliseconds`,
  * 0 = none). Without it a server that has stopped answering, but keeps its connections open, would
  * hold each request for ever.
  */
@@ -38,6 +38,8 @@ export class LimitedMysqlClient extends MysqlDialect {
         connection.__knex__disposed = error;
         connection.destroy();
       }
+      // The driver adds the statement with all its values; they belong in no log.
+      delete (error as { sql?: string }).sql;
       throw error;
     }
   }

@@ -58,7 +58,7 @@ export function openDatabase(url: string, options: DatabaseOptions = {}): Knex {
     // Errors tell the statement with its placeholders: what people typed stays out of every log.
     compileSqlOnError: false,
     // Each error is thrown as well; said a second time on the terminal it would miss our own log.
-    log: { error: () => undefined },
+    log: { error: () => undefined, warn: () => undefined },
     acquireConnectionTimeout: ACQUIRE_MILLISECONDS,
     pool: {
       min: 0,
