@@ -51,7 +51,13 @@ export function FieldFrame({ field, ids, group = false, children }: Props) {
           </p>
         )}
       </div>
-      <div className={field.labelHidden ? '' : '@2xl:col-start-2 @4xl:col-start-3 @4xl:pt-2'}>
+      <div
+        className={
+          field.labelHidden
+            ? ''
+            : 'mt-1 empty:mt-0 @2xl:col-start-2 @4xl:col-start-3 @4xl:mt-0 @4xl:pt-2'
+        }
+      >
         <IssueList id={ids.issuesId} issues={field.issues ?? []} />
       </div>
     </div>

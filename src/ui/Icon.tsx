@@ -1,6 +1,6 @@
 /** Drawn on a 16 px grid with straight strokes, as with a ruling pen. No circles: that is the mark's. */
 const DRAWINGS = {
-  'must-mend': 'M8 1l7 7-7 7-7-7zM8 4.6v4.2M8 10.4v1.3',
+  'must-mend': 'M8 4.4v4.4M8 10.3v1.5',
   'look-again': 'M8 1l7 7-7 7-7-7zM6.3 6.6l.6-1.2h2.2l.6 1.3L8 8.2v.9M8 10.5v1.2',
   info: 'M2 2h12v12H2zM8 7v4.5M8 4.3v1.4',
   done: 'M2 2h12v12H2zM4.8 8.3l2.3 2.4 4.2-5.2',

@@ -24,7 +24,7 @@ export function Pager({ page, pageSize, total, toPage, what }: Props) {
       aria-label={`Pages of ${what}`}
       className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1 border-t-2 border-soot pt-2 text-small"
     >
-      <span className="min-w-24">
+      <span className="order-2 min-w-20 sm:order-1">
         {page > 1 && (
           <Link to={toPage(page - 1)} rel="prev" className={link}>
             <Icon name="back" className="size-3.5" />
@@ -32,13 +32,13 @@ export function Pager({ page, pageSize, total, toPage, what }: Props) {
           </Link>
         )}
       </span>
-      <span className="text-soot-2">
+      <span className="order-1 w-full text-soot-2 sm:order-2 sm:w-auto">
         <span className="reading">
           {first}–{Math.min(total, page * pageSize)}
         </span>{' '}
         of <span className="reading">{total}</span> {what}
       </span>
-      <span className="min-w-24 text-right">
+      <span className="order-3 min-w-20 text-right">
         {page < pages && (
           <Link to={toPage(page + 1)} rel="next" className={link}>
             On
