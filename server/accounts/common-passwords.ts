@@ -1,8 +1,8 @@
 /**
  * Common passwords of 15 characters and more. Published lists hold hardly any that long, so this one
  * is GENERATED: from what people do when a short password is refused. They double it, walk along
- * the keyboard, add a year, write out a well-known phrase. Compared without case, spaces and signs,
- * so one entry stands for all its spellings. Nothing is looked up over the network.
+ * the keyboard, add a year, write out a well-known phrase. Compared without case and signs, so
+ * one entry stands for many spellings. Nothing is looked up over the network.
  */
 
 const MIN_LENGTH = 15;
@@ -113,7 +113,7 @@ const PHRASES = `
   out of the frying pan
 `
   .split('\n')
-  .map(squash)
+  .map((phrase) => phrase.trim())
   .filter((phrase) => phrase !== '');
 
 /** How passwords are compared: small letters and digits only, common substitutions undone. */
@@ -169,8 +169,13 @@ function generate(): Set<string> {
     }
   }
   for (const phrase of PHRASES) {
-    for (const end of ENDINGS) add(phrase + end);
-    for (const year of YEARS.slice(-20)) add(phrase + year);
+    // With its spaces too: some have 15 characters only with them.
+    for (const written of [phrase, squash(phrase)]) {
+      for (const end of [...ENDINGS, ...YEARS.slice(-20)]) {
+        add(written + end);
+        add(`${written} ${end}`.trim());
+      }
+    }
   }
   return list;
 }
@@ -207,6 +212,7 @@ export interface Person {
 export function passwordFault(password: string, person: Person): string | null {
   const squashed = squash(password);
   if (
+    commonPasswords().has(password.toLowerCase().replace(/[\s_.-]+/g, ' ')) ||
     commonPasswords().has(squashed) ||
     commonPasswords().has(unsubstituted(password)) ||
     isRepeated(password)

@@ -15,17 +15,17 @@ interface MemberRow {
   about: string;
   role: Role;
   joinedAt: Date;
+  suspendedAt: Date | null;
 }
 
 /**
  * What everybody may see of a member: their published notes, newest first, and those of their kilns
- * that somebody has published a firing of. Null for an unknown or suspended member, or one who has
- * never confirmed their address.
+ * that somebody has published a firing of. A suspended member's own words are not shown. Null for an
+ * unknown member and for one who has never confirmed their address.
  */
 export async function findMemberPage(db: Knex, memberId: number): Promise<MemberPage | null> {
   const member = await db('members')
     .where('members.id', memberId)
-    .whereNull('members.suspended_at')
     .whereNotNull('members.email_verified_at')
     .first<MemberRow | undefined>(
       'members.id',
@@ -34,9 +34,10 @@ export async function findMemberPage(db: Knex, memberId: number): Promise<Member
       'members.about',
       'members.role',
       'members.created_at AS joinedAt',
+      'members.suspended_at AS suspendedAt',
     );
   if (!member) return null;
-  const { joinedAt, ...shown } = member;
+  const { joinedAt, suspendedAt, ...shown } = member;
   const [kilns, noteRows] = await Promise.all([
     findPublicKilns(db, memberId),
     db('published_firings')
@@ -48,6 +49,7 @@ export async function findMemberPage(db: Knex, memberId: number): Promise<Member
   ]);
   return {
     ...shown,
+    ...(suspendedAt === null ? {} : { place: '', about: '' }),
     joinedOn: dayOf(joinedAt),
     kilns,
     notes: noteRows.map((row) => noteRowSchema.parse(readJson(row.noteRow))),

@@ -90,7 +90,16 @@ export const adminRoutes: readonly Route[] = [
       const { caughtFolder } = deps.config.mail;
       if (caughtFolder === null) return { catching: false, mails: [] };
       const mails = await listCaughtMails(caughtFolder, CAUGHT_MAILS_SHOWN);
-      return { catching: true, mails };
+      return {
+        catching: true,
+        mails: mails.map(({ id, date, to, subject, text }) => ({
+          id,
+          at: (date ?? new Date(0)).toISOString(),
+          to,
+          subject,
+          text,
+        })),
+      };
     },
   }),
   defineRoute({

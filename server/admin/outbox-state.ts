@@ -3,7 +3,7 @@ import type { OutboxState } from '#shared/api/admin.ts';
 import type { Deps } from '../deps.ts';
 import { AppError } from '../http/problem.ts';
 import { nudgeOutbox } from '../outbox/nudge.ts';
-import { countInIndex } from './index-count.ts';
+import { countInIndex } from '../search/reindex.ts';
 
 const FAILED_SHOWN = 100;
 

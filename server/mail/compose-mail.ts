@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { paths } from '#shared/paths.ts';
 import {
   type Account,
   findAccountByEmail,
@@ -81,29 +82,35 @@ async function writeLetter(
     case 'verify-email':
       return verifyEmailMail(
         name,
-        link(`/confirm-address#${await makeMailToken(db, id, 'verify-email')}`),
+        link(`${paths.confirmAddress}#${await makeMailToken(db, id, 'verify-email')}`),
       );
     case 'already-joined':
-      return alreadyJoinedMail(name, { signIn: link('/sign-in'), forgot: link('/forgot') });
+      return alreadyJoinedMail(name, {
+        signIn: link(paths.signIn()),
+        forgot: link(paths.forgottenPassword),
+      });
     case 'reset-password':
-      return resetPasswordMail(name, link(`/new-password#${await makeMailToken(db, id, 'reset')}`));
+      return resetPasswordMail(
+        name,
+        link(`${paths.newPassword}#${await makeMailToken(db, id, 'reset')}`),
+      );
     case 'password-changed':
-      return passwordChangedMail(name, link('/forgot'));
+      return passwordChangedMail(name, link(paths.forgottenPassword));
     case 'change-email': {
       // Somebody else's by now: nothing is sent, and the asker is not told whose it is.
       if (await findAccountByEmail(db, job.newEmail)) return null;
       const token = await makeMailToken(db, id, 'change-email', job.newEmail);
-      return changeEmailMail(name, link(`/confirm-address#${token}`));
+      return changeEmailMail(name, link(`${paths.confirmAddress}#${token}`));
     }
     case 'email-changed':
-      return emailChangedMail(name, link('/'));
+      return emailChangedMail(name, link(paths.front));
     case 'note-tried': {
       const [own, follow] = await Promise.all([
         findNoteTitle(db, job.noteId),
         findNoteTitle(db, job.byNoteId),
       ]);
       if (own === null || follow === null) return null;
-      const followLink = link(`/notes/${String(job.byNoteId)}`);
+      const followLink = link(paths.note(job.byNoteId, ''));
       return noteTriedMail(name, { title: own }, { title: follow, link: followLink });
     }
     case 'note-handed-in':
@@ -113,12 +120,11 @@ async function writeLetter(
     case 'note-taken-down': {
       const title = await findNoteTitle(db, job.noteId);
       if (title === null) return null;
-      const note = String(job.noteId);
       if (job.kind === 'note-handed-in')
-        return noteHandedInMail(name, title, link(`/desk/${note}`));
+        return noteHandedInMail(name, title, link(paths.deskNote(job.noteId)));
       if (job.kind === 'note-published')
-        return notePublishedMail(name, title, link(`/notes/${note}`));
-      const own = link(`/notes/${note}/edit`);
+        return notePublishedMail(name, title, link(paths.note(job.noteId, '')));
+      const own = link(paths.write(job.noteId));
       const reason = job.auditReason.trim();
       if (job.kind === 'note-sent-back') return noteSentBackMail(name, title, own, reason);
       if (job.kind === 'note-declined') return noteDeclinedMail(name, title, own, reason);
