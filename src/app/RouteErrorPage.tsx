@@ -1,5 +1,5 @@
 import { useRouteError } from 'react-router-dom';
-import { ProblemPage } from './ProblemPage.tsx';
+import { ProblemPage } from '../http/ProblemPage.tsx';
 
 /** What a broken page shows instead of itself. */
 export function RouteErrorPage() {

@@ -2,7 +2,7 @@ import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 import type { ComponentType } from 'react';
 import type { PagePattern } from '#shared/paths.ts';
 import { Layout } from './Layout.tsx';
-import { NotFoundPage } from './NotFoundPage.tsx';
+import { NotFoundPage } from '../http/NotFoundPage.tsx';
 import { RouteErrorPage } from './RouteErrorPage.tsx';
 
 type Page = () => Promise<ComponentType>;

@@ -1,6 +1,6 @@
 import { useLocation } from 'react-router-dom';
 import { paths } from '#shared/paths.ts';
-import { OfflineError, ProblemError } from '../http/client.ts';
+import { OfflineError, ProblemError } from './client.ts';
 import { Button } from '../ui/Button.tsx';
 import { EmptyState } from '../ui/EmptyState.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';

@@ -1,0 +1,26 @@
+import { queryOptions } from '@tanstack/react-query';
+import { frontSchema, troubleSharesSchema, whatHelpedSchema } from '#shared/api/figures.ts';
+import type { Trouble } from '#shared/vocabulary/troubles.ts';
+import { send } from '../http/client.ts';
+
+/** Reads of pooled figures. */
+export const figureQueries = {
+  all: ['figures'] as const,
+  front: () =>
+    queryOptions({
+      queryKey: [...figureQueries.all, 'front'],
+      queryFn: ({ signal }) => send({ path: '/api/front', answer: frontSchema, signal }),
+    }),
+  shares: () =>
+    queryOptions({
+      queryKey: [...figureQueries.all, 'shares'],
+      queryFn: ({ signal }) =>
+        send({ path: '/api/what-helped', answer: troubleSharesSchema, signal }),
+    }),
+  whatHelped: (trouble: Trouble) =>
+    queryOptions({
+      queryKey: [...figureQueries.all, 'what-helped', trouble],
+      queryFn: ({ signal }) =>
+        send({ path: `/api/what-helped/${trouble}`, answer: whatHelpedSchema, signal }),
+    }),
+};
