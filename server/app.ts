@@ -20,7 +20,7 @@ export function createApp(deps: Deps): Express {
   const { config, log } = deps;
   const app = express();
   app.disable('x-powered-by');
-  app.set('trust proxy', config.trustedProxies);
+  app.set('trust proxy', config.trustProxy);
   app.set('etag', 'strong');
   app.use(beginRequest(log));
   app.use(securityHeaders(config.publicUrl), permissionsPolicy);

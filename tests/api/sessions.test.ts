@@ -207,7 +207,7 @@ describe('POST /api/session', () => {
 describe('the cookie', () => {
   test('is a __Host- one, Secure, HttpOnly and Lax where the site is HTTPS', async ({ db }) => {
     const api = await startApi(db, {
-      config: { publicUrl: 'https://notebook.example', isHttps: true, trustedProxies: 1 },
+      config: { publicUrl: 'https://notebook.example', isHttps: true, trustProxy: 1 },
     });
     try {
       const member = await aMember(db);
