@@ -67,6 +67,8 @@ export interface FiringFacts {
   readonly aimCelsius: number | null;
   /** The record's, else the declared one. */
   readonly peakCelsius: number | null;
+  /** Start of the firing by the record's clock; null without a record. */
+  readonly startMinute: number | null;
   readonly reachedMinute: number | null;
   readonly timeToTemperatureMinutes: number | null;
   readonly holdMinutes: number | null;
@@ -190,6 +192,7 @@ export function firingFacts(firing: FiringToReduce): FiringFacts {
     targetCelsius: target,
     aimCelsius: reading?.aimCelsius ?? aimOf(fields, target, peak),
     peakCelsius: peak,
+    startMinute: reading?.start.minute ?? null,
     reachedMinute: reading?.reachedMinute ?? null,
     timeToTemperatureMinutes: reading?.timeToTemperatureMinutes ?? plan.timeToTemperatureMinutes,
     holdMinutes: reading?.hold?.minutes ?? declaredHold,

@@ -16,17 +16,18 @@ export function noteSummary(
   return {
     peakCelsius: peak,
     targetCelsius: facts.targetCelsius,
-    reached: facts.hasRecord
-      ? facts.reachedMinute !== null
-      : aim === null || peak === null
+    reached:
+      aim === null || peak === null
         ? null
-        : peak >= aim - 5,
+        : facts.hasRecord
+          ? facts.reachedMinute !== null
+          : peak >= aim - 5,
     aimCelsius: aim,
     timeToTemperatureMinutes: facts.timeToTemperatureMinutes,
     holdMinutes: facts.holdMinutes,
     levels: facts.stalls.map((stall) => ({
       levelCelsius: stall.levelCelsius,
-      atMinute: stall.fromMinute,
+      atMinute: facts.startMinute === null ? null : stall.fromMinute - facts.startMinute,
       minutes: stall.minutes,
     })),
     sags: facts.sags.map(({ topCelsius, dropCelsius }) => ({ topCelsius, dropCelsius })),
