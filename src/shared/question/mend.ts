@@ -2,14 +2,14 @@ import { KNOWN_WORDS } from './lexicon.ts';
 import { SPELLINGS } from './spellings.ts';
 import type { Token } from './tokenise.ts';
 import { mendWord, splitJoined } from './typos.ts';
-import { EMPTY_WORDS, FILLERS, QUESTION_WORDS } from './word-classes.ts';
+import { EMPTY_WORDS, FILLERS } from './word-classes.ts';
 
 const mainSpelling = new Map<string, string>();
 for (const [main, others] of Object.entries(SPELLINGS)) {
   for (const other of others) mainSpelling.set(other, main);
 }
 
-const SMALL_WORDS: ReadonlySet<string> = new Set([...EMPTY_WORDS, ...QUESTION_WORDS, ...FILLERS]);
+const SMALL_WORDS: ReadonlySet<string> = new Set([...EMPTY_WORDS, ...FILLERS]);
 
 /** Joining two words ("saw dust") is for words of this many letters together. */
 const MIN_JOINED = 7;
@@ -75,8 +75,13 @@ export function mendTokens(tokens: readonly Token[]): Token[] {
       mended.push({ ...token, text: mainSpelling.get(text) ?? text });
     } else {
       const middle = token.from + parted[0].length;
-      mended.push({ ...token, text: parted[0], to: middle });
-      mended.push({ ...token, text: parted[1], from: middle, glued: false });
+      mended.push({ ...token, text: mainSpelling.get(parted[0]) ?? parted[0], to: middle });
+      mended.push({
+        ...token,
+        text: mainSpelling.get(parted[1]) ?? parted[1],
+        from: middle,
+        glued: false,
+      });
     }
   }
   return mended;

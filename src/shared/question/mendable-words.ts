@@ -5,7 +5,7 @@
 const WORDS_AS_THEY_STAND = `
   blisters blistered blistering blocked bottom breeze broken burst bursting carbonised celsius
   centigrade chipped chipping chimney clogged colder colour colourless coloured cooler copper
-  coppermatt crackle crackled crackling crazed crazing creeping crept damper degree degrees dirty
+  crackle crackled crackling crazed crazing creeping crept damper degree degrees dirty
   draughty dropped dropping drops dunted dunting dusty earthenware exploded explodes exploding
   explosion fahrenheit faster flashback freezing frosted frosting frosty frozen glazed glossy greasy
   grease gusty hairline hotspot hotter horsehair hours immature january february december kelvin

@@ -172,7 +172,10 @@ export function readQuestion(text: string, options: ReadOptions = {}): QuestionR
   if (minutes !== null) {
     const { minutes: length, op, of, item } = minutes;
     add('minutes', { kind: 'minutes', value: { minutes: length, op, of } }, [item]);
-    if (took) took.taken.forEach((index) => used.add(index));
+    for (const { means, taken } of said) {
+      const ofTime = means.includes('took') || (of === 'hold' && means.includes('hold'));
+      if (ofTime) taken.forEach((index) => used.add(index));
+    }
   }
   if (rate) add('rate', { kind: 'rate', value: rate.quantity.ratePerMin }, [rate.index]);
   const difference = quantities(items, 'difference')[0];

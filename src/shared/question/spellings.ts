@@ -20,7 +20,6 @@ export const SPELLINGS: Readonly<Record<string, readonly string[]>> = {
   uncarbonised: ['uncarbonized'],
   reoxidise: ['reoxidize'],
   reoxidised: ['reoxidized'],
-  temperature: ['temprature', 'temperture', 'tempature', 'temparature'],
   pyrometer: ['pyro'],
   newspaper: ['newsprint', 'newspapers'],
   teabowl: ['teabowls', 'chawan', 'chawans', 'yunomi'],

@@ -54,7 +54,8 @@ export const NOT_MEANT: readonly VocabularyEntry[] = [
       'no pressure',
       'pop in|over|round|up',
       'pull handle|handles',
-      'steam engine',
+      'steam come out|off',
+      '(carbon|smoke|black|ink) in crack',
     ],
   },
 ];

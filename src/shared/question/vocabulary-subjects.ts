@@ -61,7 +61,7 @@ export const SUBJECT_VOCABULARY: readonly VocabularyEntry[] = [
 
   {
     means: ['glaze:copper-matt'],
-    says: ['copper matt', 'copper matt glaze', 'coppermatt', 'matt copper', 'copper penny? matt'],
+    says: ['copper matt', 'copper matt glaze', 'matt copper', 'copper penny? matt'],
   },
   {
     means: ['glaze:lustre'],
@@ -72,6 +72,8 @@ export const SUBJECT_VOCABULARY: readonly VocabularyEntry[] = [
     says: [
       'crackle',
       'white crackle',
+      'clear crackle',
+      'crack line|lines',
       'crackle glaze',
       'white crackle glaze',
       'craze',

@@ -47,7 +47,8 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
       'slower start|climb|heating|firing|heat|warm|ramp',
       'start slow|slower|slowly|gently',
       'go slow|slower|slowly|gently (to|up|until|through)?',
-      'heat|fire|warm|climb slow|slower|slowly|gently',
+      'heat|fire|warm slow|slower|slowly|gently',
+      'bring|take it? up slow|slowly|gently',
       'more slowly',
       'slow down',
       'slow it? down',
@@ -81,7 +82,7 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
   },
   {
     means: ['change:hold-longer'],
-    says: ['longer hold|soak', 'hold|soak longer|for?', 'hold|soak it? longer', 'add hold|soak'],
+    says: ['longer hold|soak', 'hold|soak longer', 'hold|soak it? longer', 'add hold|soak'],
   },
   {
     means: ['change:hold-shorter'],

@@ -65,6 +65,8 @@ function directedByPhrase(
     if (!match.means.some((meaning) => DIRECTED.has(meaning))) return false;
     const near = index - lastItem(match);
     if (near < -1 || near > REACH_OF_CANNOT) return false;
+    // Whatever ran past a temperature is sought there.
+    if (match.means.includes('trouble:overshoot')) return true;
     return match.taken.some((at) => {
       const text = textOf(items, at);
       return (DIRECTIONS.has(text) && index - at <= 3) || CANNOT.has(text);

@@ -76,5 +76,6 @@ export const QUESTION_WORDS: readonly string[] = (
   'couldnt wouldnt without nor neither none only even still like help please anyone anybody know ' +
   'tell best way best thing things happens happened happening happen wrong problem problems issue ' +
   'because but yet though up down over under off out past above below after before until near ' +
-  'around between and - / ~ + < > ish bit odd enough straight right always sometimes often'
+  'around between and - / ~ + < > ish bit odd than less within more most few ' +
+  'avoid prevent stop fix cure help solve solution solved reason whenever soon time enough straight right always sometimes often'
 ).split(' ');

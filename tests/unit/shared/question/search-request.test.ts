@@ -1,0 +1,116 @@
+import { describe, expect, test } from 'vitest';
+import { readQuestion } from '#shared/question/read-question.ts';
+import { tiersFor } from '#shared/question/search-request.ts';
+import { withoutParts } from '#shared/question/without-parts.ts';
+
+const tiers = (question: string) => tiersFor(readQuestion(question));
+
+describe('tiersFor', () => {
+  test('close asks for the trouble at its own level, never at the peak of a firing that stalled lower', () => {
+    expect(tiers('stalled at 700 °C').close).toEqual({
+      tier: 'close',
+      filter: {
+        kind: 'all',
+        of: [
+          { kind: 'in', field: 'troubles', values: ['stall'] },
+          {
+            kind: 'any',
+            of: [
+              { kind: 'between', field: 'stallC', min: 680, max: 720 },
+              { kind: 'between', field: 'eventC', min: 680, max: 720 },
+              {
+                kind: 'all',
+                of: [
+                  { kind: 'empty', field: 'stallC' },
+                  { kind: 'between', field: 'peakC', min: 680, max: 720 },
+                ],
+              },
+            ],
+          },
+        ],
+      },
+      texts: [''],
+      strategy: 'last',
+    });
+  });
+
+  test('same trouble drops temperature, glaze and size, and keeps the form', () => {
+    const { sameTrouble } = tiers('30 cm plate with clear glaze cracked at 573');
+    expect(sameTrouble?.filter).toEqual({
+      kind: 'all',
+      of: [
+        { kind: 'in', field: 'troubles', values: ['crack-in-firing'] },
+        { kind: 'in', field: 'forms', values: ['plate'] },
+      ],
+    });
+  });
+
+  test('a trouble ruled out is left out of close and of same trouble', () => {
+    const { close, sameTrouble } = tiers('not stalling just slow');
+    const without = { kind: 'not-in', field: 'troubles', values: ['stall'] };
+    expect(JSON.stringify(close?.filter)).toContain(JSON.stringify(without));
+    expect(JSON.stringify(sameTrouble?.filter)).toContain(JSON.stringify(without));
+  });
+
+  test('a piece of about the size asked for is one within 30 percent', () => {
+    expect(JSON.stringify(tiers('30 cm plate cracked').close?.filter)).toContain(
+      '{"kind":"between","field":"widestCm","min":21,"max":39}',
+    );
+  });
+
+  test('a cone steers by its rough target, and never by a number of degrees', () => {
+    const filter = JSON.stringify(tiers('cone 06 raku stalled').close?.filter);
+    expect(filter).toContain('{"kind":"between","field":"aimC","min":983,"max":1013}');
+    expect(filter).not.toContain('stallC');
+  });
+
+  test('minutes bound the time to the peak', () => {
+    expect(JSON.stringify(tiers('took 2 hours to reach temperature').close?.filter)).toContain(
+      '{"kind":"between","field":"minutesToPeak","min":120,"max":null}',
+    );
+    expect(JSON.stringify(tiers('stalled after 40 minutes').close?.filter)).not.toContain(
+      'minutes',
+    );
+    expect(JSON.stringify(tiers('soak for 10 min').close?.filter)).toContain('holdMinutes');
+  });
+
+  test('a question for a faster firing finds the cures of slow climbs second', () => {
+    expect(tiers('how to fire faster than 45 minutes').sameTrouble?.filter).toEqual({
+      kind: 'in',
+      field: 'troubles',
+      values: ['slow-climb'],
+    });
+  });
+
+  test('causes select only where no temperature does, and weather counts as a cause', () => {
+    expect(JSON.stringify(tiers('temperature drops when windy').close?.filter)).toContain(
+      '{"kind":"in","field":"wind","values":["gusty","strong"]}',
+    );
+    expect(JSON.stringify(tiers('stalled at 700 in the wind').close?.filter)).not.toContain(
+      'causes',
+    );
+    expect(tiers('stalled at 700 in the wind').sameTrouble?.texts).toEqual(['wind', '']);
+  });
+
+  test('by words sends the whole question less units and numbers, unfiltered', () => {
+    expect(tiers('12" tile warped in the kiln at 700 -750').byWords).toEqual({
+      tier: 'by-words',
+      filter: null,
+      texts: ['tile warped'],
+      strategy: 'frequency',
+    });
+  });
+
+  test('a part that is switched off is in no filter', () => {
+    const reading = withoutParts(readQuestion('plate stalled at 700'), ['temperature', 'form']);
+    expect(tiersFor(reading).close?.filter).toEqual({
+      kind: 'in',
+      field: 'troubles',
+      values: ['stall'],
+    });
+  });
+
+  test('an empty question asks for nothing', () => {
+    expect(tiers('')).toEqual({ close: null, sameTrouble: null, byWords: null });
+  });
+});
