@@ -89,8 +89,8 @@ function BurnerFromAbove({ wallClip, burner, portMm, scale, at }: BurnerProps) {
   });
   const bar = (from: Spot, back: number, front: number, half: number) =>
     `M${at(along(from, back, -half))}L${at(along(from, front, -half))}L${at(along(from, front, half))}L${at(along(from, back, half))}Z`;
-  // The nearer edge of a slanting port reaches the chamber later than its axis.
-  const through = burner.throughWallMm + (portMm / 2) * (-aim.y / aim.x);
+  // One edge of a slanting port reaches the chamber later than its axis; the wall clips the rest.
+  const through = burner.throughWallMm + portMm * 0.9;
   const head = (lengthMm: number) => lengthMm / scale;
   return (
     <>

@@ -17,7 +17,7 @@ export function LabelLanes({ placed, texts, baseY }: Props) {
         {placed.map((label) => {
           const y = laneY(label.lane) - 4.5;
           return label.spanToX === null ? (
-            <path key={label.id} d={`M${label.x} ${baseY}V${y - 4}`} />
+            <path key={label.id} d={`M${label.x} ${baseY}V${label.over ? y + 8 : y - 4}`} />
           ) : (
             <path
               key={label.id}

@@ -15,6 +15,8 @@ export interface PlacedLabel {
   /** Where the text begins, or ends if it stands to the left of its leader. */
   readonly textX: number;
   readonly anchor: 'start' | 'end';
+  /** The text stands over its own leader, which then ends below it. */
+  readonly over: boolean;
   /** 0 is the lane next to the drawing. */
   readonly lane: number;
 }
@@ -89,9 +91,11 @@ function textPositions(wish: LabelWish, width: number): readonly number[] {
 }
 
 /** A text left of its leader is set against it, because its width is only an estimate. */
-function anchored(wish: LabelWish, textX: number): Pick<PlacedLabel, 'textX' | 'anchor'> {
+function anchored(wish: LabelWish, textX: number): Pick<PlacedLabel, 'textX' | 'anchor' | 'over'> {
   const end = textX + wish.textWidth;
-  return end <= wish.x ? { textX: end, anchor: 'end' } : { textX, anchor: 'start' };
+  return end <= wish.x
+    ? { textX: end, anchor: 'end', over: false }
+    : { textX, anchor: 'start', over: textX <= wish.x };
 }
 
 function bestPlace(wish: LabelWish, taken: readonly Place[], width: number): Place {

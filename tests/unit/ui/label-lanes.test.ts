@@ -20,6 +20,11 @@ describe('placeLabels', () => {
     expect(placed[0]).toMatchObject({ lane: 0, textX: 475, anchor: 'end' });
   });
 
+  it('ends the leader below a text that has to stand over it', () => {
+    const { placed } = placeLabels([{ id: 'a', x: 60, textWidth: 100 }], 120);
+    expect(placed[0]).toMatchObject({ textX: 10, over: true });
+  });
+
   it('stacks labels that share a point and crosses none of them', () => {
     const wishes = ['a', 'b', 'c'].map((id) => ({ id, x: 250, textWidth: 200 }));
     const { placed, lanes } = placeLabels(wishes, 500);
