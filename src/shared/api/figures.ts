@@ -14,7 +14,7 @@ export const whatHelpedRowSchema = z.object({
   /** gone ÷ firings with its 95 % interval (Wilson, effective n). */
   share: z.number().nullable(),
   interval: interval.nullable(),
-  /** Difference from the follow-ons without this change, at level 1 − 0.05/m. */
+  /** Difference from the follow-ons with no change named, at level 1 − 0.05/m. */
   difference: z.object({ share: z.number(), low: z.number(), high: z.number() }).nullable(),
   verdict: z.enum(['better', 'worse', 'cannot-be-told', 'too-few', 'reference']),
   alone: z.object({ gone: z.number(), firings: z.number() }),

@@ -33,7 +33,7 @@ export interface NoteSummary {
     readonly crackPlace: Piece['cracks'][number]['place'];
     readonly cracked: boolean;
   }[];
-  /** Changes since the earlier firing; null when there is no earlier firing of the kiln. */
+  /** Changes since the earlier firing; null when there is none to compare with, or it is not known. */
   readonly changes: readonly Change[] | null;
 }
 
@@ -166,7 +166,7 @@ function climbSentence(summary: NoteSummary, { temperature }: Units): string {
 const SPELT_OUT = 3;
 
 function changeSentence({ changes }: NoteSummary): string {
-  if (changes === null) return 'The first firing of this kiln written up.';
+  if (changes === null) return 'No change named.';
   if (changes.length === 0) return 'No change named since the firing before.';
   const words = changes.map((change) => CHANGE_WORDS[change] ?? lowerFirst(CHANGES[change]));
   const more = words.length - SPELT_OUT;

@@ -126,18 +126,26 @@ const NEGATED_BEFORE =
 const WARNED_AFTER =
   /^[^.!?\n]{0,60}\b(?:is|are|would be|can be|could be)\s+(?:very |really |so |too )?(?:dangerous|unsafe|deadly|not safe|never safe|forbidden|a bad idea)\b/i;
 
+/** Sentences are read this far each way, so that a story without full stops stays quick to read. */
+const SENTENCE_REACH = 300;
+
 function sentenceStart(text: string, at: number): number {
-  for (let index = at - 1; index >= 0; index -= 1) {
+  const furthest = Math.max(0, at - SENTENCE_REACH);
+  for (let index = at - 1; index >= furthest; index -= 1) {
     if ('.!?\n'.includes(text.charAt(index))) return index + 1;
   }
-  return 0;
+  return furthest;
 }
 function sentenceEnd(text: string, at: number): number {
-  for (let index = at; index < text.length; index += 1) {
+  const furthest = Math.min(text.length, at + SENTENCE_REACH);
+  for (let index = at; index < furthest; index += 1) {
     if ('.!?\n'.includes(text.charAt(index))) return index;
   }
-  return text.length;
+  return furthest;
 }
+
+/** The desk needs no more than this of one block to see what it is about. */
+const MOST_PASSAGES = 20;
 
 function passagesOf(text: string, blockIndex: number): UnsafePassage[] {
   const found: UnsafePassage[] = [];
@@ -150,11 +158,11 @@ function passagesOf(text: string, blockIndex: number): UnsafePassage[] {
       const sentence = text.slice(start, sentenceEnd(text, to));
       if (except?.test(sentence)) continue;
       if (NEGATED_BEFORE.test(text.slice(start, from))) continue;
-      if (WARNED_AFTER.test(text.slice(to))) continue;
+      if (WARNED_AFTER.test(text.slice(to, to + SENTENCE_REACH))) continue;
       const told = found.some(
         (other) => other.practice === practice && other.from < to && from < other.to,
       );
-      if (!told) {
+      if (!told && found.length < MOST_PASSAGES) {
         found.push({ blockIndex, from, to, practice, reason: UNSAFE_PRACTICES[practice] });
       }
     }

@@ -117,9 +117,7 @@ describe('a note in short', () => {
     expect(changes('gas-less', 'faster', 'form', 'clay', 'glaze')).toBe(
       'Less gas, faster climb, other form and two more changes since the firing before.',
     );
-    expect(said({ ...REACHED, changes: null })[1]).toBe(
-      'The first firing of this kiln written up.',
-    );
+    expect(said({ ...REACHED, changes: null })[1]).toBe('No change named.');
   });
 
   it('counts like pieces together, in words up to twelve', () => {
@@ -154,9 +152,7 @@ describe('a note in short', () => {
     ]);
     const first = aNote();
     const facts = firingFacts({ fields: first, kiln: aKiln(), reading: null });
-    expect(said(noteSummary(first, facts, false))[1]).toBe(
-      'The first firing of this kiln written up.',
-    );
+    expect(said(noteSummary(first, facts, false))[1]).toBe('No change named.');
   });
 });
 
