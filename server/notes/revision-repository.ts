@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import type { z } from 'zod';
-import type { checkSchema, findingSchema } from '#shared/api/findings.ts';
+import type { checkSchema } from '#shared/api/findings.ts';
+import type { Finding } from '#shared/firing/findings.ts';
 import type { StripPoints } from '#shared/api/note-rows.ts';
 import type { FiringFacts } from '#shared/note/facts.ts';
 import { emptyNoteFields, type NoteFields } from '#shared/note/note-fields.ts';
@@ -16,7 +17,7 @@ export interface Revision {
   readonly kilnId: number;
   readonly kilnVersion: number;
   readonly recordContentId: number | null;
-  readonly findings: z.infer<typeof findingSchema>[];
+  readonly findings: Finding[];
   readonly checks: z.infer<typeof checkSchema>[];
   readonly facts: FiringFacts;
   readonly strip: StripPoints | null;

@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { text } from '../note/field-types.ts';
 import { NOTE_STATUS_IDS } from '../vocabulary/statuses.ts';
-import { checkSchema, findingSchema } from './findings.ts';
+import { findingSchema } from '../firing/findings.ts';
+import { checkSchema } from './findings.ts';
 import { notePageSchema, remarkSchema } from './notes.ts';
 import { stripPointsSchema } from './note-rows.ts';
 

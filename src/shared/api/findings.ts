@@ -2,18 +2,7 @@ import { z } from 'zod';
 import { pieceSchema } from '../note/pieces.ts';
 import { idsOf } from '../vocabulary/terms.ts';
 import { CRACK_PLACES, FORM_IDS } from '../vocabulary/ware.ts';
-import { TROUBLE_IDS } from '../vocabulary/troubles.ts';
 import { CHANGE_IDS } from '../vocabulary/changes.ts';
-
-/** A finding as stored with a revision: plain data; its sentence is made by `findingText`. */
-export const findingSchema = z.object({
-  code: z.string(),
-  trouble: z.enum(TROUBLE_IDS).nullable(),
-  fromMinute: z.number().nullable(),
-  toMinute: z.number().nullable(),
-  numbers: z.record(z.string(), z.number()),
-  words: z.record(z.string(), z.string()).optional(),
-});
 
 /** A check as stored with a revision, with the author's answer where one was given. */
 export const checkSchema = z.object({

@@ -1,0 +1,228 @@
+import type { Draft } from '#shared/api/notes.ts';
+import type { NoteFields } from '#shared/note/note-fields.ts';
+import { noteFieldsSchema } from '#shared/note/note-fields.ts';
+import { z } from 'zod';
+import { OfflineError, ProblemError } from '../http/client.ts';
+import { saveDraft } from './draft-mutations.ts';
+import { forgetUnsent, keepUnsent, unsentFor } from './unsent-work.ts';
+
+/** How long after the last key a save goes out, and how long until it is tried again. */
+const PAUSE_MILLISECONDS = 1200;
+const RETRY_MILLISECONDS = 8000;
+
+export type SaveState =
+  | { readonly kind: 'saved'; readonly at: string }
+  | { readonly kind: 'waiting' }
+  | { readonly kind: 'saving' }
+  /** Not sent: no network, or the server is away. Tried again by itself. */
+  | { readonly kind: 'unsent'; readonly reason: string; readonly keptHere: boolean }
+  /** Saved elsewhere meanwhile: both versions are shown, and nothing is sent until one is chosen. */
+  | {
+      readonly kind: 'conflict';
+      readonly theirs: NoteFields;
+      readonly theirVersion: number;
+      readonly theirsAt: string;
+    }
+  /** The server refused what was typed, or the note can no longer be edited. */
+  | { readonly kind: 'refused'; readonly reason: string };
+
+export interface KeptDraft {
+  /** What is on the screen. */
+  readonly fields: NoteFields;
+  /** The server's last answer: checks, findings, record, remarks. */
+  readonly draft: Draft;
+  readonly state: SaveState;
+}
+
+const staleSchema = z.object({
+  version: z.number(),
+  savedAt: z.string(),
+  fields: noteFieldsSchema,
+});
+
+/**
+ * Keeps one note's working copy: what is typed goes into this browser at once and to the server
+ * soon after, one save at a time, each on top of the version before. It never overwrites what was
+ * saved elsewhere, and never drops what was typed.
+ */
+export class DraftKeeper {
+  readonly #memberId: number;
+  #kept: KeptDraft;
+  #listeners = new Set<() => void>();
+  #timer: ReturnType<typeof setTimeout> | null = null;
+  #saving: Promise<void> | null = null;
+  #dirty = false;
+
+  constructor(memberId: number, draft: Draft) {
+    this.#memberId = memberId;
+    this.#kept = { fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } };
+    const unsent = unsentFor(memberId, draft.id);
+    if (!unsent || !draft.abilities.edit) return;
+    if (JSON.stringify(unsent.fields) === JSON.stringify(draft.fields)) {
+      forgetUnsent(memberId, draft.id);
+      return;
+    }
+    this.#dirty = true;
+    if (unsent.fromVersion === draft.version) {
+      this.#kept = { ...this.#kept, fields: unsent.fields, state: { kind: 'waiting' } };
+      this.#schedule(PAUSE_MILLISECONDS);
+    } else {
+      this.#kept = {
+        ...this.#kept,
+        fields: unsent.fields,
+        state: {
+          kind: 'conflict',
+          theirs: draft.fields,
+          theirVersion: draft.version,
+          theirsAt: draft.savedAt,
+        },
+      };
+    }
+  }
+
+  readonly subscribe = (listener: () => void): (() => void) => {
+    this.#listeners.add(listener);
+    return () => this.#listeners.delete(listener);
+  };
+  readonly current = (): KeptDraft => this.#kept;
+
+  /** True while something typed is not on the server. */
+  get hasUnsent(): boolean {
+    return this.#dirty;
+  }
+
+  /** Changes what is on the screen; kept here at once, sent soon. */
+  change(update: (fields: NoteFields) => NoteFields): void {
+    const fields = update(this.#kept.fields);
+    if (fields === this.#kept.fields) return;
+    this.#dirty = true;
+    const keptHere = this.#keepHere(fields);
+    const { state } = this.#kept;
+    this.#set({
+      ...this.#kept,
+      fields,
+      state:
+        state.kind === 'conflict' || state.kind === 'saving'
+          ? state
+          : state.kind === 'unsent'
+            ? { ...state, keptHere }
+            : { kind: 'waiting' },
+    });
+    if (state.kind !== 'conflict') this.#schedule(PAUSE_MILLISECONDS);
+  }
+
+  /** Sends now what is waiting, and resolves when the server has it or has said why not. */
+  async flush(): Promise<void> {
+    if (this.#timer !== null) clearTimeout(this.#timer);
+    this.#timer = null;
+    if (this.#saving) await this.#saving;
+    if (this.#dirty && this.#kept.state.kind !== 'conflict') {
+      this.#saving = this.#save().finally(() => {
+        this.#saving = null;
+      });
+      await this.#saving;
+      if (this.#dirty && this.#kept.state.kind === 'waiting') await this.flush();
+    }
+  }
+
+  /** After an act of its own (hand in, a picture, a record): what the server has now. */
+  accept(draft: Draft): void {
+    if (this.#dirty) {
+      this.#set({ ...this.#kept, draft: { ...draft, fields: this.#kept.fields } });
+      return;
+    }
+    this.#set({ fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } });
+  }
+
+  /** Settles a conflict: mine goes on top of theirs, or theirs replaces mine. */
+  settle(choice: 'mine' | 'theirs'): void {
+    const { state } = this.#kept;
+    if (state.kind !== 'conflict') return;
+    const draft = { ...this.#kept.draft, version: state.theirVersion };
+    if (choice === 'theirs') {
+      this.#dirty = false;
+      forgetUnsent(this.#memberId, draft.id);
+      this.#set({ fields: state.theirs, draft, state: { kind: 'saved', at: state.theirsAt } });
+      return;
+    }
+    this.#set({ ...this.#kept, draft, state: { kind: 'waiting' } });
+    this.#keepHere(this.#kept.fields);
+    void this.flush();
+  }
+
+  /** Stops timers; what is unsent stays kept in this browser. */
+  close(): void {
+    if (this.#timer !== null) clearTimeout(this.#timer);
+    this.#timer = null;
+  }
+
+  #keepHere(fields: NoteFields): boolean {
+    const { id, version } = this.#kept.draft;
+    return keepUnsent(this.#memberId, id, {
+      fromVersion: version,
+      at: new Date().toISOString(),
+      fields,
+    });
+  }
+
+  #schedule(milliseconds: number): void {
+    if (this.#timer !== null) clearTimeout(this.#timer);
+    this.#timer = setTimeout(() => void this.flush(), milliseconds);
+  }
+
+  #set(kept: KeptDraft): void {
+    this.#kept = kept;
+    for (const listener of this.#listeners) listener();
+  }
+
+  async #save(): Promise<void> {
+    const { draft, fields } = this.#kept;
+    this.#set({ ...this.#kept, state: { kind: 'saving' } });
+    try {
+      const answer = await saveDraft(draft.id, draft.version, fields);
+      const newer = this.#kept.fields !== fields;
+      this.#dirty = newer;
+      this.#set({
+        fields: this.#kept.fields,
+        draft: answer,
+        state: newer ? { kind: 'waiting' } : { kind: 'saved', at: answer.savedAt },
+      });
+      if (newer) {
+        this.#keepHere(this.#kept.fields);
+        this.#schedule(PAUSE_MILLISECONDS);
+      } else {
+        forgetUnsent(this.#memberId, draft.id);
+      }
+    } catch (error) {
+      this.#failed(error);
+    }
+  }
+
+  #failed(error: unknown): void {
+    if (error instanceof ProblemError && error.problem.status === 412) {
+      const current = staleSchema.safeParse(error.problem.current);
+      if (current.success) {
+        this.#set({
+          ...this.#kept,
+          state: {
+            kind: 'conflict',
+            theirs: current.data.fields,
+            theirVersion: current.data.version,
+            theirsAt: current.data.savedAt,
+          },
+        });
+        return;
+      }
+    }
+    const keptHere = this.#keepHere(this.#kept.fields);
+    const again =
+      error instanceof OfflineError ||
+      (error instanceof ProblemError && [429, 503, 507].includes(error.problem.status));
+    const reason = error instanceof Error ? error.message : 'The save did not work.';
+    this.#set({
+      ...this.#kept,
+      state: again ? { kind: 'unsent', reason, keptHere } : { kind: 'refused', reason },
+    });
+    if (again) this.#schedule(RETRY_MILLISECONDS);
+  }
+}
