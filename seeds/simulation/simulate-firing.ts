@@ -157,7 +157,7 @@ export function simulateFiring(firing: SimulatedFiring): SimulatedRecord {
   if (firing.marksFire !== false && shutOffMinute !== null) {
     marks.push({ minute: end, kind: 'shut-off' });
   }
-  const truth = sampled(course, firing);
+  const truth = sampled(course, firing, shutOffMinute);
   const random = seededRandom(firing.seed + 1);
   const noise = firing.noiseCelsius ?? 0;
   const readings = truth.map((reading) => {
@@ -170,20 +170,29 @@ export function simulateFiring(firing: SimulatedFiring): SimulatedRecord {
   return { readings, marks, truth, shutOffMinute: end, reachedTarget };
 }
 
-/** Readings as a logger takes them, or as a potter with a pencil does. */
-function sampled(course: readonly Reading[], firing: SimulatedFiring): Reading[] {
+/** Readings as a logger takes them, or as a potter with a pencil does, who also notes the shut-off. */
+function sampled(
+  course: readonly Reading[],
+  firing: SimulatedFiring,
+  shutOffMinute: number | null,
+): Reading[] {
   const random = seededRandom(firing.seed);
-  const out: Reading[] = [];
-  const last = course.length - 1;
+  const { handNotedMinutes } = firing;
   const stepsApart = (): number =>
-    firing.handNotedMinutes === undefined
+    handNotedMinutes === undefined
       ? Math.max(1, Math.round((firing.stepSeconds ?? 30) / (60 * STEP_MINUTES)))
-      : Math.max(1, Math.round(firing.handNotedMinutes * (0.6 + 0.8 * random()))) / STEP_MINUTES;
-  for (let i = 0; i <= last; i += stepsApart()) {
-    const reading = course[Math.round(i)];
-    if (reading !== undefined) {
-      out.push({ minute: Math.round(reading.minute * 1e6) / 1e6, celsius: reading.celsius });
-    }
+      : Math.max(1, Math.round(handNotedMinutes * (0.6 + 0.8 * random()))) / STEP_MINUTES;
+  const steps = new Set<number>();
+  for (let i = 0; i < course.length; i += stepsApart()) steps.add(Math.round(i));
+  if (handNotedMinutes !== undefined && shutOffMinute !== null) {
+    steps.add(Math.round(shutOffMinute / STEP_MINUTES));
   }
-  return out;
+  return [...steps]
+    .sort((a, b) => a - b)
+    .flatMap((step) => {
+      const reading = course[step];
+      return reading === undefined
+        ? []
+        : [{ minute: Math.round(reading.minute * 1e6) / 1e6, celsius: reading.celsius }];
+    });
 }

@@ -1,5 +1,6 @@
 import { indexAtOrAfter } from './course.ts';
 import type { Course } from './course.ts';
+import { strideFor } from './scatter.ts';
 import { firstAtOrAbove, stepAt, valueAt } from './curve.ts';
 import { quantile } from '../statistics/quantile.ts';
 import { WAVERING_CELSIUS } from './constants.ts';
@@ -77,7 +78,8 @@ export function waveringOf(course: Course): number | null {
   const distances: number[] = [];
   const { wide } = course;
   const half = Math.round(wide.halfMinutes / wide.stepMinutes);
-  for (let i = course.from; i < course.to; i += 1) {
+  const stride = strideFor(course.to - course.from);
+  for (let i = course.from; i < course.to; i += stride) {
     const step = stepAt(wide, minutes[i] ?? 0);
     const turn = Math.abs((wide.rates[step + half] ?? Infinity) - (wide.rates[step - half] ?? 0));
     if (turn > STRAIGHT_ENOUGH) continue;

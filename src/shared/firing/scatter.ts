@@ -17,8 +17,11 @@ const FINEST_SCATTER = 0.005;
 
 /** Measures the scatter of readings in order of time. Linear but for the medians. */
 export function scatterOf(minutes: Float64Array, celsius: Float64Array): Scatter {
-  const steps = new Float64Array(Math.max(0, minutes.length - 1));
-  for (let i = 0; i < steps.length; i += 1) steps[i] = (minutes[i + 1] ?? 0) - (minutes[i] ?? 0);
+  const stride = strideFor(minutes.length);
+  const steps = new Float64Array(Math.floor(Math.max(0, minutes.length - 1) / stride));
+  for (let i = 0; i < steps.length; i += 1) {
+    steps[i] = (minutes[i * stride + 1] ?? 0) - (minutes[i * stride] ?? 0);
+  }
   steps.sort();
   const step = quantileOfSorted(steps, 0.5) ?? 1;
   const binned = meansOf(minutes, celsius);
@@ -29,23 +32,44 @@ export function scatterOf(minutes: Float64Array, celsius: Float64Array): Scatter
   };
 }
 
+/** Fewer readings than this are mostly corners and bends: their scatter cannot be told from the course. */
+const FEWEST_FOR_NOISE = 15;
+
 /**
- * 1.4826 × the median distance of a reading from the line between its neighbours, divided by √1.5,
- * which that distance has more than one reading (exact for white noise at even steps). A corner of
- * the course moves the median little.
+ * Scatter of single readings by third differences of four neighbours, which no straight line and no
+ * even bend of the course has: 1.4826 × their median size, each over the deviation that white noise
+ * of 1 °C would give it. A corner of the course moves the median little.
  */
 export function neighbourNoise(minutes: Float64Array, celsius: Float64Array): number {
   const n = minutes.length;
-  if (n < 5) return 0;
-  const distances = new Float64Array(n - 2);
-  for (let i = 1; i < n - 1; i += 1) {
-    const before = minutes[i - 1] ?? 0;
-    const low = celsius[i - 1] ?? 0;
-    const share = ((minutes[i] ?? 0) - before) / ((minutes[i + 1] ?? 0) - before);
-    distances[i - 1] = Math.abs((celsius[i] ?? 0) - (low + share * ((celsius[i + 1] ?? 0) - low)));
+  if (n < FEWEST_FOR_NOISE) return 0;
+  const stride = strideFor(n);
+  const sizes = new Float64Array(Math.floor((n - 4) / stride) + 1);
+  for (let at = 0; at < sizes.length; at += 1) {
+    const i = at * stride;
+    let difference = 0;
+    let power = 0;
+    for (let j = i; j < i + 4; j += 1) {
+      let weight = 1;
+      for (let k = i; k < i + 4; k += 1) {
+        if (k !== j) weight /= (minutes[j] ?? 0) - (minutes[k] ?? 0);
+      }
+      difference += weight * ((celsius[j] ?? 0) - (celsius[i] ?? 0));
+      power += weight * weight;
+    }
+    const size = Math.abs(difference) / Math.sqrt(power);
+    sizes[at] = Number.isFinite(size) ? size : 0;
   }
-  distances.sort();
-  return (1.4826 * (quantileOfSorted(distances, 0.5) ?? 0)) / Math.sqrt(1.5);
+  sizes.sort();
+  return 1.4826 * (quantileOfSorted(sizes, 0.5) ?? 0);
+}
+
+/** A median of this many is as good as one of them all. */
+const ENOUGH = 4000;
+
+/** Every how many of so many readings are looked at for a median. */
+export function strideFor(count: number): number {
+  return Math.max(1, Math.floor(count / ENOUGH));
 }
 
 /** A display that shows whole degrees scatters by 1 ÷ √12 °C even where neighbours agree. */

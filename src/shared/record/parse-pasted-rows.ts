@@ -13,6 +13,9 @@ export interface PastedReadings {
   readonly skipped: SkippedLine[];
 }
 
+/** A slip of the keyboard, no temperature in any unit. */
+const HOTTEST = 100_000;
+
 /**
  * Reads rows as a person types them: "12 310", "0:12, 310" (hours and minutes), "12 min 310 °C",
  * "12,5; 310,4". A row that says nothing clear is skipped with its reason, never guessed.
@@ -58,7 +61,9 @@ function readRow(row: string, unit: TemperatureUnit): Reading | string {
   if (minute === null) return `“${timeWord.slice(0, 40)}” cannot be read as a time`;
   const [valueWord = '', unitWord, ...more] = others;
   const temperature = parseTemperature(valueWord, valueWord.includes(',') ? ',' : '.');
-  if (temperature === null) return `“${valueWord.slice(0, 40)}” cannot be read as a temperature`;
+  if (temperature === null || Math.abs(temperature.value) > HOTTEST) {
+    return `“${valueWord.slice(0, 40)}” cannot be read as a temperature`;
+  }
   const behind = unitWord === undefined ? null : temperatureUnit(unitWord);
   if (more.length > 0 || (unitWord !== undefined && behind === null)) {
     return 'a row holds one time and one temperature';

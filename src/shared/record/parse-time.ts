@@ -56,8 +56,16 @@ export function timeUnit(word: string): TimeFormat | null {
   return Object.hasOwn(TIME_WORDS, key) ? (TIME_WORDS[key] ?? null) : null;
 }
 
+/** Farther than this no time of a record lies, minutes: the year 9999, counted from 1970, with room. */
+const FARTHEST = 1e10;
+
 /** Minutes of a time cell, since zero, midnight or 1970 as its format has it; null if unreadable. */
 export function parseTime(cell: string, format: TimeFormat, decimal: '.' | ','): number | null {
+  const minutes = minutesOf(cell, format, decimal);
+  return minutes !== null && Math.abs(minutes) <= FARTHEST ? minutes : null;
+}
+
+function minutesOf(cell: string, format: TimeFormat, decimal: '.' | ','): number | null {
   const perUnit = MINUTES_IN[format];
   if (perUnit !== undefined) {
     const number = leadingNumber(cell, decimal);

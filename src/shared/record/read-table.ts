@@ -142,8 +142,8 @@ function celsiusOf(cell: string, choice: RecordChoice): number | null {
     : toCelsius(temperature.value, temperature.unit ?? choice.unit);
 }
 
-/** °C to a hundredth: finer than any probe, and without the dust of conversion. */
+/** °C without the dust of conversion: finer than any logger writes. */
 function toCelsius(value: number, unit: TemperatureUnit): number {
   const celsius = unit === 'F' ? fToC(value) : unit === 'K' ? kToC(value) : value;
-  return Math.round(celsius * 100) / 100;
+  return Math.round(celsius * 10_000) / 10_000;
 }
