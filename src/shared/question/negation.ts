@@ -10,6 +10,9 @@ const PAIRS: readonly (readonly [string, string])[] = [
   ['opposed', 'to'],
 ];
 
+/** "Isn't it too hot?" asks; it rules nothing out. */
+const ASKED: ReadonlySet<string> = new Set(['it', 'this', 'that', 'there', 'they', 'you', 'i']);
+
 export interface Negated {
   /** Matches that are ruled out. */
   readonly matches: ReadonlySet<Match>;
@@ -50,7 +53,7 @@ export function findNegated(items: readonly Item[], matches: readonly Match[]): 
     } else if (item.kind === 'word') {
       const next = items[index + 1];
       const nextText = next?.kind === 'word' ? next.text : '';
-      if (NEGATIONS.has(item.text)) negation = index;
+      if (NEGATIONS.has(item.text)) negation = ASKED.has(nextText) ? null : index;
       else if (PAIRS.some(([first, second]) => item.text === first && nextText === second)) {
         negation = index;
         index += 1;

@@ -23,7 +23,7 @@ type Element =
     }
   | { readonly kind: 'gap' }
   | {
-      readonly kind: 'temperature' | 'minutes' | 'step' | 'difference';
+      readonly kind: 'temperature' | 'minutes' | 'step' | 'difference' | 'cone';
       takes: boolean;
       optional: boolean;
     };
@@ -35,7 +35,7 @@ interface Phrase {
 
 const MAX_FILLERS = 2;
 const MAX_LEADS = 4;
-const MAX_GAP = 3;
+const MAX_GAP = 4;
 /** A temperature in its place says more than a word, a gap less than none. */
 const TEMPERATURE_SCORE = 1.5;
 const GAP_SCORE = -1;
@@ -52,6 +52,7 @@ function parseElement(source: string): Element {
   if (bare === '#') return { kind: 'temperature', takes: false, optional };
   if (bare === '#min') return { kind: 'minutes', takes: false, optional };
   if (bare === '#step') return { kind: 'step', takes: false, optional };
+  if (bare === '#cone') return { kind: 'cone', takes: false, optional };
   if (bare === '#diff') return { kind: 'difference', takes: false, optional };
   const words = bare
     .split('|')

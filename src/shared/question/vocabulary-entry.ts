@@ -33,9 +33,9 @@ export type Meaning =
  *     word      that word, in any inflection of it      a|b   either
  *     @class    any word of a class (word-classes.ts)   a?    may be left out
  *     (a)       must stand there, but may also mean something else
- *     ..        up to three other words                 #     a temperature
+ *     ..        up to four other words                  #     a temperature
  *     #min      a length of time                        #step so many degrees up, down or out
- *     #diff     so many degrees between two places
+ *     #diff     so many degrees between two places           #cone a cone
  *
  * Articles and the like may stand between the words of a phrase. The longest phrase wins.
  */

@@ -87,6 +87,7 @@ export const HANDLING_CAUSE_VOCABULARY: readonly VocabularyEntry[] = [
       'cool too much before @bin|sawdust|reduction|cover',
       'too cool|cold when|before|by|for|in .. @bin|sawdust|reduction|covered',
       'long walk to? @bin',
+      'take too? long to get|put|move .. in|into|to @bin|sawdust|reduction|newspaper',
       'slow cover|covering',
       'cover too? late|slow|slowly',
       'too long to? cover',

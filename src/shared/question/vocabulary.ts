@@ -1,6 +1,7 @@
 import { CAUSE_VOCABULARY } from './vocabulary-causes.ts';
 import { CHANGE_VOCABULARY } from './vocabulary-changes.ts';
 import type { VocabularyEntry } from './vocabulary-entry.ts';
+import { FLAME_VOCABULARY } from './vocabulary-flame.ts';
 import { HANDLING_CAUSE_VOCABULARY } from './vocabulary-handling-causes.ts';
 import { HEAT_VOCABULARY } from './vocabulary-heat.ts';
 import { SUBJECT_VOCABULARY } from './vocabulary-subjects.ts';
@@ -15,6 +16,7 @@ import { WARE_CHANGE_VOCABULARY } from './vocabulary-ware-changes.ts';
 export const VOCABULARY: readonly VocabularyEntry[] = [
   ...NOT_MEANT,
   ...HEAT_VOCABULARY,
+  ...FLAME_VOCABULARY,
   ...WARE_VOCABULARY,
   ...SUBJECT_VOCABULARY,
   ...CAUSE_VOCABULARY,

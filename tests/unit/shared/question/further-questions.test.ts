@@ -283,6 +283,93 @@ const QUESTIONS: readonly (readonly [question: string, expected: Expected])[] = 
     'twelve fifty fahrenheit stall',
     { trouble: ['stall'], tempC: 677, toleranceC: 20, tempUnit: 'F' },
   ],
+  [
+    "I can't seem to get my small fibre kiln past about 1290F, any ideas?",
+    { trouble: ['stall'], tempC: 699, toleranceC: 35, tempUnit: 'F' },
+  ],
+  [
+    'kiln climbs fine to 800 then nothing',
+    { trouble: ['stall'], tempC: 800, toleranceC: 20, tempUnit: 'guessed' },
+  ],
+  [
+    'got to 650 and stayed there for half an hour',
+    {
+      trouble: ['stall'],
+      tempC: 650,
+      toleranceC: 20,
+      tempUnit: 'guessed',
+      minutes: 30,
+      minutesOp: '=',
+    },
+  ],
+  [
+    'reached 940 but no higher',
+    { trouble: ['stall'], tempC: 940, toleranceC: 10, tempUnit: 'guessed' },
+  ],
+  [
+    'falls back to 1200F from 1300F',
+    { trouble: ['sag'], tempC: 704, toleranceC: 20, tempMinC: 649, tempMaxC: 704, tempUnit: 'F' },
+  ],
+  [
+    'dropped from 1000 to 930 while holding',
+    {
+      trouble: ['sag'],
+      tempC: 1000,
+      toleranceC: 20,
+      tempMinC: 930,
+      tempMaxC: 1000,
+      tempUnit: 'guessed',
+    },
+  ],
+  [
+    '3 hours and only at 850',
+    {
+      trouble: ['slow-climb'],
+      tempC: 850,
+      toleranceC: 20,
+      tempUnit: 'guessed',
+      minutes: 180,
+      minutesOp: '>',
+    },
+  ],
+  [
+    "isn't it too hot at 1080",
+    { trouble: ['overshoot'], tempC: 1080, toleranceC: 10, tempUnit: 'guessed' },
+  ],
+  ["isn't overfired, just blistered", { trouble: ['blistering'], notTrouble: ['overshoot'] }],
+  ['glaze melted at the top but not the bottom', { trouble: ['uneven-heat'] }],
+  ['flame jumping off the burner tip', { trouble: ['flame-out'], causes: ['too-much-air'] }],
+  ['pyrometer is way off', { trouble: ['wrong-reading'], causes: ['probe'] }],
+  [
+    'heard a bang at 350',
+    {
+      trouble: ['crack-in-firing'],
+      tempC: 350,
+      toleranceC: 20,
+      tempUnit: 'guessed',
+      causes: ['damp-clay'],
+    },
+  ],
+  ['cone 06 still standing', { trouble: ['dull-glaze'], cone: '06' }],
+  ['uneven colour on plate', { trouble: ['weak-reduction'], form: 'plate' }],
+  ['lid not sealed in bin so no black', { trouble: ['weak-reduction'], causes: ['lid-gap'] }],
+  ['took too long to get from kiln to bin', { causes: ['slow-to-bin'] }],
+  [
+    'porcelain bottle exploded at 400 C',
+    {
+      trouble: ['crack-in-firing'],
+      tempC: 400,
+      toleranceC: 20,
+      tempUnit: 'C',
+      form: 'bottle',
+      clay: 'porcelain',
+    },
+  ],
+  [
+    'never cracked a bowl but plates always crack',
+    { trouble: ['crack-after-draw', 'crack-in-firing'], form: 'plate' },
+  ],
+  ["don't want cracks", { notTrouble: ['crack-after-draw', 'crack-in-firing'] }],
 ];
 
 describe('readQuestion reads further questions by the same rules', () => {
