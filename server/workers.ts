@@ -1,5 +1,6 @@
 import { setTimeout as sleep } from 'node:timers/promises';
 import type { Deps } from './deps.ts';
+import { startHousekeeping } from './housekeeping.ts';
 import { createHandlers } from './outbox/handlers.ts';
 import { startOutboxWorker } from './outbox/worker.ts';
 import { readRecord } from './records/read-record.ts';
@@ -16,12 +17,13 @@ export interface Workers {
 /** Starts what works beside the requests: the outbox, and one look at whether the index is whole. */
 export function startWorkers(deps: Deps): Workers {
   const outbox = startOutboxWorker(deps, createHandlers(deps, { indexNote, readRecord }));
+  const housekeeping = startHousekeeping(deps);
   const stopping = new AbortController();
   const catchingUp = catchUp(deps, stopping.signal);
   return {
     async stop() {
       stopping.abort();
-      await Promise.all([outbox.stop(), catchingUp]);
+      await Promise.all([outbox.stop(), housekeeping.stop(), catchingUp]);
     },
   };
 }

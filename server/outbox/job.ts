@@ -36,7 +36,7 @@ export class GiveUp extends Error {}
 
 /**
  * Seconds until the next try: twice the last wait, a fifth more or less, so that jobs which failed
- * together do not come back together.
+ * together do not come back together; never more than the longest.
  *
  * @param chance 0 to 1
  */
@@ -46,8 +46,7 @@ export function waitSeconds(
   chance: number,
 ): number {
   const doubled = handler.firstWaitSeconds * 2 ** Math.min(30, Math.max(0, attempts - 1));
-  const bounded = Math.min(handler.longestWaitSeconds / 1.2, doubled);
-  return bounded * (0.8 + 0.4 * chance);
+  return Math.min(handler.longestWaitSeconds, doubled * (0.8 + 0.4 * chance));
 }
 
 /**

@@ -30,10 +30,16 @@ const POLL_MILLISECONDS = 1000;
  * Does the promised work: one loop a topic, so a mail server that is slow does not hold up the
  * index. Wakes when nudged and looks by itself every second.
  */
-export function startOutboxWorker(deps: WorkerDeps, handlers: Handlers): OutboxWorker {
+export function startOutboxWorker(
+  deps: WorkerDeps,
+  handlers: Handlers,
+  { pollMilliseconds = POLL_MILLISECONDS } = {},
+): OutboxWorker {
   let stopping = false;
+  let nudges = 0;
   const wakers = new Set<() => void>();
   const wake = (): void => {
+    nudges += 1;
     for (const waker of wakers) waker();
   };
   const pause = (): Promise<void> =>
@@ -43,21 +49,21 @@ export function startOutboxWorker(deps: WorkerDeps, handlers: Handlers): OutboxW
         wakers.delete(waker);
         resolve();
       };
-      const timer = setTimeout(waker, POLL_MILLISECONDS);
+      const timer = setTimeout(waker, pollMilliseconds);
       wakers.add(waker);
     });
   const loop = async <Topic extends OutboxTopic>(topic: Topic): Promise<void> => {
     while (!stopping) {
-      let done = 0;
-      let broken = false;
+      const nudgesBefore = nudges;
+      let claimed = 0;
       try {
-        done = await workOnce(deps, topic, handlers[topic], () => stopping);
+        claimed = await workOnce(deps, topic, handlers[topic], () => stopping);
       } catch (error) {
         // The database is away: the leases run out by themselves.
-        broken = true;
         deps.log.error({ event: 'outbox', topic, err: error }, 'outbox cannot be read');
       }
-      if ((done === 0 || broken) && !stopping) await pause();
+      // Nudged while looking: what was promised then may not have been seen.
+      if (claimed === 0 && nudges === nudgesBefore && !stopping) await pause();
     }
   };
   const stopListening = onNudge(wake);

@@ -1,5 +1,6 @@
 import { describe, expect } from 'vitest';
 import { meSchema, sessionAnswerSchema } from '#shared/api/accounts.ts';
+import { listTables } from '../../server/database/schema-picture.ts';
 import type { Deps } from '../../server/deps.ts';
 import { type Api, type ApiAnswer, startApi, test } from '../support/api.ts';
 import { aMember, PASSWORD } from '../support/builders.ts';
@@ -328,10 +329,7 @@ describe('POST /api/password-resets', () => {
 });
 
 async function inAnyTable({ db }: Api, needle: string): Promise<boolean> {
-  const [tables] = await db.raw<[{ name: string }[]]>(
-    'SELECT table_name AS name FROM information_schema.tables WHERE table_schema = DATABASE()',
-  );
-  for (const { name } of tables) {
+  for (const name of await listTables(db)) {
     const rows: unknown[] = await db(name).select();
     if (JSON.stringify(rows).includes(needle)) return true;
   }

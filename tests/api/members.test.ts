@@ -1,6 +1,6 @@
 import { describe, expect } from 'vitest';
 import { memberPageSchema } from '#shared/api/accounts.ts';
-import { test } from '../support/api.ts';
+import { test, withoutId } from '../support/api.ts';
 import { aMember } from '../support/builders.ts';
 
 describe('GET /api/members/:id', () => {
@@ -101,7 +101,7 @@ describe('GET /api/members/:id', () => {
       ),
     );
     for (const answer of answers) {
-      const { instance: _instance, ...problem } = answer.problem;
+      const problem = withoutId(answer.problem);
       expect(answer.status).toBe(404);
       expect(problem).toEqual({
         type: `${api.baseUrl}/problems/not-found`,

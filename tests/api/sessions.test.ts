@@ -1,7 +1,8 @@
 import { describe, expect } from 'vitest';
 import { sessionAnswerSchema, sessionListSchema } from '#shared/api/accounts.ts';
 import { hashPassword } from '../../server/accounts/hashing.ts';
-import { type Api, type Client, startApi, test } from '../support/api.ts';
+import { tidyUp } from '../../server/housekeeping.ts';
+import { type Api, type Client, startApi, test, withoutId } from '../support/api.ts';
 import { aMember, PASSWORD } from '../support/builders.ts';
 
 async function signIn(api: Api, email: string, password = PASSWORD) {
@@ -71,7 +72,7 @@ describe('POST /api/session', () => {
     const unknown = await signIn(api, 'nobody@example.org', 'not the password at all');
     const lookAlike = await signIn(api, member.email.replace('e', 'е'));
     for (const { answer } of [wrong, unknown, lookAlike]) {
-      const { instance: _instance, ...problem } = answer.problem;
+      const problem = withoutId(answer.problem);
       expect(problem).toEqual({
         type: `${api.baseUrl}/problems/wrong-credentials`,
         code: 'wrong-credentials',
@@ -402,4 +403,39 @@ test('when sessions cannot be read, nobody counts as signed in and the answer is
   } finally {
     await broken.stop();
   }
+});
+
+test('what has ended is tidied away, and nothing else', async ({ api }) => {
+  const { db } = api;
+  const member = await aMember(db);
+  const hours = (count: number) => db.raw('NOW(3) + INTERVAL ? HOUR', [count]);
+  for (const [key, expires, ends] of [
+    ['idle', -1, 5],
+    ['over', 1, -1],
+    ['open', 1, 5],
+  ] as const) {
+    await db('sessions').insert({
+      id_hash: key,
+      member_id: member.id,
+      data: '{}',
+      expires_at: hours(expires),
+      ends_at: hours(ends),
+    });
+    await db('throttles').insert({
+      key_hash: key,
+      count: 1,
+      window_ends_at: hours(key === 'open' ? -23 : -25),
+    });
+    await db('idempotency_keys').insert({
+      member_id: member.id,
+      idempotency_key: key,
+      route: 'post /x',
+      body_hash: '',
+      created_at: hours(key === 'open' ? -23 : -25),
+    });
+  }
+  await tidyUp(db);
+  expect(await db('sessions').pluck<string[]>('id_hash')).toEqual(['open']);
+  expect(await db('throttles').pluck<string[]>('key_hash')).toEqual(['open']);
+  expect(await db('idempotency_keys').pluck<string[]>('idempotency_key')).toEqual(['open']);
 });

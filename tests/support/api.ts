@@ -76,6 +76,13 @@ export interface SignedInClient extends Client {
   readonly member: BuiltMember;
 }
 
+/** A refusal without the request's id, to be compared with another. */
+export function withoutId(problem: Problem): Omit<Problem, 'instance'> {
+  const copy = { ...problem };
+  delete copy.instance;
+  return copy;
+}
+
 export interface ApiOptions {
   /** Settings other than the test's own. */
   config?: Partial<Config>;
@@ -206,7 +213,7 @@ function makeClient(baseUrl: string, publicUrl: string): Client {
         get json() {
           return JSON.parse(text) as unknown;
         },
-        as: (schema) => schema.parse(JSON.parse(text)) as z.output<typeof schema>,
+        as: (schema) => schema.parse(JSON.parse(text)),
         get problem() {
           return problemSchema.parse(JSON.parse(text));
         },

@@ -1,0 +1,45 @@
+import { setTimeout as sleep } from 'node:timers/promises';
+import type { Knex } from 'knex';
+import { purgeAccounts } from './accounts/purge-accounts.ts';
+import type { Deps } from './deps.ts';
+import { purgeOutbox } from './outbox/job-repository.ts';
+
+const EVERY_MILLISECONDS = 10 * 60_000;
+
+/** Answers are kept for a day, to be given again to whoever repeats a create. */
+export async function purgeIdempotencyKeys(db: Knex): Promise<void> {
+  await db('idempotency_keys')
+    .whereRaw('created_at < NOW(3) - INTERVAL 24 HOUR')
+    .limit(1000)
+    .delete();
+}
+
+/** Removes what has had its time: ended sessions, old links, counts of tries, finished jobs. */
+export async function tidyUp(db: Knex): Promise<void> {
+  await purgeAccounts(db);
+  await purgeOutbox(db);
+  await purgeIdempotencyKeys(db);
+}
+
+/** Tidies up every ten minutes until it is stopped. */
+export function startHousekeeping(deps: Pick<Deps, 'db' | 'log'>): { stop: () => Promise<void> } {
+  const stopping = new AbortController();
+  const work = (async () => {
+    while (!stopping.signal.aborted) {
+      try {
+        await tidyUp(deps.db);
+      } catch (error) {
+        deps.log.error({ event: 'housekeeping', err: error }, 'could not tidy up');
+      }
+      await sleep(EVERY_MILLISECONDS, undefined, { signal: stopping.signal }).catch(
+        () => undefined,
+      );
+    }
+  })();
+  return {
+    stop: async () => {
+      stopping.abort();
+      await work;
+    },
+  };
+}
