@@ -1,0 +1,22 @@
+import { readConfig } from '../config.ts';
+import { openDatabase } from '../database/open-database.ts';
+import { createLog } from '../log.ts';
+import { reindex } from '../search/reindex.ts';
+import { withLocalSettings } from '../start/local-settings.ts';
+import { diskStore } from '../storage/file-store.ts';
+import { runCommand, say } from './run-command.ts';
+
+/** `npm run reindex` rebuilds the search index from the database, without a gap in searching. */
+await runCommand(async () => {
+  const config = readConfig(withLocalSettings(process.env));
+  const db = openDatabase(config.databaseUrl);
+  try {
+    const store = diskStore(config.uploadsFolder);
+    const indexed = await reindex({ config, db, log: createLog(config), store }, (done, of) => {
+      say(`${String(done)} of ${String(of)} notes`);
+    });
+    say(`The index holds ${String(indexed)} notes.`);
+  } finally {
+    await db.destroy();
+  }
+});
