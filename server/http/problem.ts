@@ -1,6 +1,7 @@
 import type { ErrorRequestHandler } from 'express';
 import type { Logger } from 'pino';
 import type { Problem } from '#shared/api/problem.ts';
+import { isUnreachable } from '../database/constraint-errors.ts';
 
 /** Every way a request can be refused: code → status and title. */
 const CATALOGUE = {
@@ -90,18 +91,6 @@ interface KnownShape {
   name?: unknown;
 }
 
-const DATABASE_AWAY = new Set([
-  'ECONNREFUSED',
-  'ECONNRESET',
-  'ETIMEDOUT',
-  'EPIPE',
-  'PROTOCOL_CONNECTION_LOST',
-  'PROTOCOL_SEQUENCE_TIMEOUT',
-  'ER_CON_COUNT_ERROR',
-  'ER_SERVER_SHUTDOWN',
-  'ER_CONNECTION_KILLED',
-]);
-
 /** What an error of a library means to the asker; unknown ones stay unknown (500). */
 export function asAppError(error: unknown): AppError {
   if (error instanceof AppError) return error;
@@ -117,10 +106,8 @@ export function asAppError(error: unknown): AppError {
   }
   if (error instanceof URIError) return new AppError('not-found');
   if (shape.code === 'ENOSPC' || shape.code === 'EDQUOT') return new AppError('no-space');
-  if (typeof shape.code === 'string' && DATABASE_AWAY.has(shape.code)) return new AppError('away');
-  if (shape.name === 'KnexTimeoutError' || shape.name === 'DatabaseBusyError') {
-    return new AppError('busy', { retryAfter: 2 });
-  }
+  if (shape.name === 'DatabaseBusyError') return new AppError('busy', { retryAfter: 2 });
+  if (isUnreachable(error)) return new AppError('away', { retryAfter: 5 });
   return new AppError('internal');
 }
 
