@@ -161,7 +161,7 @@ function buildFiring(told: FiringTold): DemoFiring {
       targetCelsius: told.target,
       targetCone: told.targetCone ?? '',
       peakBy: 'temperature',
-      peakCelsius: Math.round(peak),
+      peakCelsius: told.peakDeclared ?? Math.round(peak),
       typedIn: told.typedIn ?? 'C',
       timeToTemperatureMinutes: gaveUp || reached === null ? null : Math.round(reached),
       noHold: hold === 0,

@@ -48,6 +48,9 @@ export const beehive: readonly FiringTold[] = [
       p(
         'Heat comes out all round the skirt, where wire meets brick. You can see it: the air shivers. I have tucked it in and will try again.',
       ),
+      p(
+        'The cups are back in their box, each with a coat of pink powder that was going to be turquoise. I went to work with soot in my ears.',
+      ),
     ),
   },
   {
@@ -73,6 +76,9 @@ export const beehive: readonly FiringTold[] = [
       ),
       p(
         'Somewhere past 750 the sea breeze arrived, as it does at four. You could watch the number run backwards: 770, 765, 752, 740. Then it thought better of it.',
+      ),
+      p(
+        'My best guess is the ground. It had not rained for three weeks, and the bricks, which drink, had nothing to drink. But a guess is not a change, so I have ticked none.',
       ),
       change('A windbreak before the breeze, not during.'),
     ),
@@ -286,6 +292,9 @@ export const beehive: readonly FiringTold[] = [
       ),
       p(
         'Forty-one minutes to 990 with the paving stone still in there. Five cups, turquoise, the blackest feet I have made. My daughter has the smallest one for pencils, since nobody is to drink from them.',
+      ),
+      p(
+        'So in my kiln the floor was worth something and the burner was worth the rest, and if I had done them in the other order I would be telling you that fibre is magic. Put them both in the book.',
       ),
     ),
   },

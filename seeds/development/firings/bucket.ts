@@ -89,6 +89,9 @@ export const bucket: readonly FiringTold[] = [
       p(
         'Then I put them in the other bucket over a cupful of sawdust and of course that was not enough, and they are white with grey bottoms. I do not care. They are *glazed*.',
       ),
+      p(
+        'I have set the two cups next to the pink one from the third of May, in order, like a family photograph.',
+      ),
     ),
   },
   {
@@ -115,6 +118,7 @@ export const bucket: readonly FiringTold[] = [
       p(
         'Four litres. Great clouds of smoke, all of it coming out round the bottom of the bucket because the lawn is not flat. Feet: grey. Next time, sand.',
       ),
+      p('Or a flatter lawn.'),
     ),
   },
   {
@@ -246,6 +250,7 @@ export const bucket: readonly FiringTold[] = [
       p(
         'I did it so that nobody can say I only believe what Tunde says. Three degrees. Tall floppy flame on top, smell of gas cooker. Turned it down again.',
       ),
+      p('Sorry, cat.'),
     ),
   },
   {
@@ -314,6 +319,10 @@ export const bucket: readonly FiringTold[] = [
       p(
         'Black feet on both. Sand under the bucket, shavings in it, twelve seconds. Everything everyone told me for a year, in one afternoon.',
       ),
+      p(
+        'I went back through my own notes tonight, all of them from the first. It is embarrassing and it is also a straight line, if you hold it far enough away.',
+      ),
+      p('Thank you, all of you, you know which.'),
       change('Get the cat a cushion.'),
     ),
   },

@@ -51,6 +51,9 @@ export const churn: readonly FiringTold[] = [
         'I had the lid nearly shut to keep the heat in. There was a blue-orange fringe all round the lid like a skirt. All the heat I was keeping in was outside.',
       ),
       p('For the metric among you that is about 703 °C, and your favourite number, apparently.'),
+      p(
+        'I gave it another twenty minutes out of spite. The glaze had gone from powder to a sort of sandpaper, so something was happening in there, only not what it says on the packet.',
+      ),
     ),
   },
   {

@@ -138,6 +138,9 @@ export const driftwood: readonly FiringTold[] = [
       p(
         'I lit a fire you could have warmed your hands at and no more, and kept it there, about 140, for twenty-five minutes, until a cold knife held at the spyhole came away dry. Then up, no faster than eight degrees a minute. It was a long day. There was no bang in it.',
       ),
+      p(
+        'The pot itself is nothing much. White crackle, a bit heavy in the hip. But I have set it on the wall by the door of the yard where the other one would have stood, and I nod to it.',
+      ),
       change('Nothing. I would bring a better sandwich.'),
     ),
   },

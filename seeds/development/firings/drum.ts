@@ -50,6 +50,9 @@ export const drum: readonly FiringTold[] = [
       p(
         'He thinks the half tile is choking it. I think it is the mud: the blocks stand on wet shingle and they were steaming. We have a bottle on it. He gets to go first.',
       ),
+      p(
+        'For the record: two folds of fibre in the walls, a burner that used to heat tar, and a pyrometer off a boat.',
+      ),
     ),
   },
   {
@@ -153,6 +156,9 @@ export const drum: readonly FiringTold[] = [
         'Drawing: the shelter. It is open on the side where I stand.',
       ),
       p('Thirty-eight minutes and not a dip in the line. The burner kept one note the whole way.'),
+      p(
+        'For anyone measuring: the planks stand a metre and a half off and are about as high as the kiln, with a hand’s gap under the lowest so that it does not eddy. I tried them closer and the smoke curled back in my face.',
+      ),
       caution(
         'A screen, not a room. Leave the lee side and the top open, and keep timber well away from the flue: mine browned at a metre.',
       ),
@@ -189,6 +195,9 @@ export const drum: readonly FiringTold[] = [
       ),
       p(
         'The new burner is shorter than the old one and I had set it dead square in the port. Looking in from the spyhole there is a bright ball of flame in the middle, a red pot either side of it, and black walls. All the fire is in one place.',
+      ),
+      p(
+        'The pots came out the colour they went in, with a pink blush on the side that faced the ball.',
       ),
       change(
         'Tunde says sweep it. I say it is short of gas. We will do mine first, gently, since it is my kiln.',
@@ -269,6 +278,9 @@ export const drum: readonly FiringTold[] = [
         'Round the wall, 1.2 bar: 980 in thirty-three minutes.',
       ),
       p('I owe Tunde the bottle that Daviti owed me.'),
+      p(
+        'The walls matter, I think, because once they are red they do the firing for you. A pot in the middle of a red room cannot help itself. A pot in front of a flame has one hot cheek and a cold back, and so had every pot I ever put in there before the wedge.',
+      ),
     ),
   },
   {

@@ -206,6 +206,9 @@ export const dustbin: readonly FiringTold[] = [
       p(
         'No report. Whole at the draw, in the bin, in the hand, and ten days later under a lens and a drop of ink. One plate is not a proof. I have put it in so that it can be counted with the rest.',
       ),
+      p(
+        'The record has the rate in it for every minute, for anybody who would like to check my arithmetic.',
+      ),
     ),
   },
   {

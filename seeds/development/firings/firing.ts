@@ -47,6 +47,8 @@ export interface FiringTold {
     readonly sagFrom?: number;
     readonly sagTo?: number;
   };
+  /** Declared peak, where the author read another instrument than the record's. */
+  readonly peakDeclared?: number;
   readonly answers?: readonly { code: string; pointer: string; answer: string }[];
   readonly remarks?: readonly { pointer: string; text: string }[];
   readonly reason?: string;

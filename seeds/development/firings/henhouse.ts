@@ -53,6 +53,9 @@ export const henhouse: readonly FiringTold[] = [
       p(
         'I am eighty-one. I have no objection to waiting, but I like to know what for. I shut it down in the proper order and wrote to the club.',
       ),
+      p(
+        'The hens are pale pink and rough to the touch. I have put them back on the shelf facing the wall, to think about it.',
+      ),
     ),
   },
   {
@@ -170,6 +173,7 @@ export const henhouse: readonly FiringTold[] = [
         'I was eating a buttered scone.',
         'The bowls had stood on the sill since June under a fair amount of June.',
       ),
+      p('The crackle between the islands is as good as any I have had, which makes it worse.'),
       change('One coat, thinner, on a pot wiped with a damp sponge. Scone afterwards.'),
     ),
   },
@@ -230,6 +234,9 @@ export const henhouse: readonly FiringTold[] = [
       ),
       p(
         'I stood back, and to the side, and pushed the cover open with the long hook. It was off again within a minute. You could hear it take a breath. So there is such a thing as a flue too shut, and this was it.',
+      ),
+      p(
+        'We were seven minutes late with the tea in the end, and the hens came out white, netted and cross-looking, as hens should.',
       ),
       change('Mark on the lid where the cover may slide to, in paint, in capitals.'),
     ),

@@ -55,6 +55,9 @@ export const lantern: readonly FiringTold[] = [
       p(
         'I waited twenty minutes because I am stubborn, and the logger says that in those twenty minutes it moved by two degrees, one up and one down.',
       ),
+      p(
+        'The outside of the wall I could touch; the cap I could not. The gas gauge went down as if nothing were the matter, and the bottles came out exactly as they went in, only pinker and a little reproachful.',
+      ),
       change('More gas next time. I know what Tunde wrote about that. My kiln is not his kiln.'),
     ),
   },
@@ -371,6 +374,9 @@ export const lantern: readonly FiringTold[] = [
       ),
       p(
         'Then they went. First the rim, then down the sides in a tide: gold to bronze, bronze to green. They were still far too hot, and copper that is hot in air takes its oxygen back. You cannot stop it by looking horrified.',
+      ),
+      p(
+        'One of the two has kept a thumb’s breadth of gold inside the foot ring, where it stood on the grass and no air came.',
       ),
       change(
         'Leave the lid alone until I can hold a hand near the bin. Half an hour at least. Visitors may have cake.',

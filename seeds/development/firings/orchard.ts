@@ -73,6 +73,7 @@ export const orchard: readonly FiringTold[] = [
       p(
         'More hole, more draught, and the flame took the short way: in, up, out. It never went near the toast. 712.',
       ),
+      p('The tiles are still pink, and the tree is bare to shoulder height.'),
     ),
   },
   {
@@ -105,6 +106,9 @@ export const orchard: readonly FiringTold[] = [
         'turquoise-crackle-jar',
         'A turquoise jar with a black crackle net and a black foot.',
         'Drawing: a jar in the glaze I use on the tiles, because tiles do not draw well.',
+      ),
+      p(
+        'The tip stands back from the port by two fingers now, and there is a clear gap all round it for air. Before, I had it pushed into the hole as if it might get away. I think that was half of it, though Josune says a third.',
       ),
     ),
   },
@@ -154,6 +158,7 @@ export const orchard: readonly FiringTold[] = [
         'Drawing: welded by its own lip.',
       ),
       p('The jar I fired with its lid on, so that they would match. They match for ever.'),
+      p('It took a cold chisel and an afternoon to get the shelf back, and it is now two shelves.'),
       change(
         'Bare clay for two fingers above the foot; wash on the shelf; and lids fired beside their jars, on three specks of wadding, gallery wiped clean.',
       ),

@@ -135,6 +135,7 @@ export const pellow: readonly FiringTold[] = [
       p(
         'Four degrees for half a bar. A flag of yellow flame at the flue that made the rooks leave. Shut down, opened up, walked home, ate a pie.',
       ),
+      p('It was a good pie.'),
     ),
   },
   {
@@ -232,13 +233,6 @@ export const pellow: readonly FiringTold[] = [
       hold: 2,
       by: 'hand-5',
     },
-    answers: [
-      {
-        code: 'hold-disagrees',
-        pointer: '/plan/holdKeptMinutes',
-        answer: 'It was still creeping up; I only call the last two minutes a hold.',
-      },
-    ],
     pieces: [pots({ count: 9 })],
     smoke: bin,
     troubles: ['slow-climb'],

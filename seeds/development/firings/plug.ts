@@ -150,6 +150,9 @@ export const plug: readonly FiringTold[] = [
       p(
         'So no. But now we know where the line is for this frit, in this kiln, at this speed, and that is more than the tin says.',
       ),
+      p(
+        'He asked next why it does not simply melt at one temperature, like ice. I said that glass has never made up its mind, and sent him to his teacher.',
+      ),
     ),
   },
 ];

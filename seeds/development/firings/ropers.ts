@@ -195,6 +195,10 @@ export const ropers: readonly FiringTold[] = [
         'A white tea bowl whose crackle is only faint grey lines, on a pale unsmoked foot.',
         'Drawing: pale all over. The foot should be black.',
       ),
+      p('Thirty-five seconds from the hat to the lid, somebody counted. It felt like four.'),
+      p(
+        'Tunde says that the kiln is not the half of it. I am beginning to see what he means by that.',
+      ),
       change('Twice as much paper? It is what I have.'),
     ),
   },
@@ -343,6 +347,9 @@ export const ropers: readonly FiringTold[] = [
         'plate-whole',
         'A turquoise crackle plate seen from above, whole, with a fine black net.',
         'Drawing: one of them, more or less, in the colour it ought to have been.',
+      ),
+      p(
+        'I have done it both ways now in the same kiln, with the same clay, three weeks apart, and I do not pretend that two plates are statistics. But I know which of the two I shall do with a plate I like.',
       ),
     ),
   },

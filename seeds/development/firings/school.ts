@@ -88,6 +88,10 @@ export const school: readonly FiringTold[] = [
         'Both big tiles whole. We waited a week before we said so, since tiles can change their minds, and tapped them every morning. They ring.',
       ),
       p('If you must have a fast kiln for plates and big tiles, have it after 650.'),
+      p(
+        'The map hangs by the office now with the tide at half. If you look closely at Cold Staithe somebody has drawn a very small kiln on it, smoking.',
+      ),
+      p('Nobody fidgeted, which at eighty minutes I count as a second success.'),
     ),
   },
   {
@@ -130,6 +134,9 @@ export const school: readonly FiringTold[] = [
         'The lower shelf filled almost the whole floor, so the flame could only go up the sides.',
         'The flue is at the top of the back wall. Hot gas is lazy.',
         'One probe, in the right place, would have told us a comfortable lie.',
+      ),
+      p(
+        'We argued for a whole lesson about which of the two numbers was *the* temperature. The answer we settled on was: of what?',
       ),
       change(
         'A smaller bottom shelf with a gap at the back, and it should stand higher off the floor.',
@@ -226,6 +233,9 @@ export const school: readonly FiringTold[] = [
       ),
       p(
         'Whole at the door, whole at the bin, whole after a week in the staff room, which is the real test. The trimmed foot is a millimetre thinner as well, to be fair to the other two, so I will not swear which it was.',
+      ),
+      p(
+        'What we know after three dishes: fast cracked it across, slow cracked it at the foot, slow and lifted did not crack it. That is one of each. The class wanted to fire nine more to be sure, and I have some sympathy.',
       ),
     ),
   },

@@ -75,6 +75,7 @@ export const staithe: readonly FiringTold[] = [
       p(
         'Three tenths of a bar more. Seven degrees more. It rained on the Tuesday and I had not moved the cloth. One does not argue with water by shouting.',
       ),
+      p('The bowls have begun to look patient.'),
     ),
   },
   {

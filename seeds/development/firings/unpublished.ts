@@ -80,6 +80,15 @@ export const unpublished: readonly FiringTold[] = [
     time: '14:00',
     status: 'handed-in',
     title: 'Borrowed heat: tea bowls in Ropers’ Yard',
+    peakDeclared: 998,
+    answers: [
+      {
+        code: 'peak-disagrees',
+        pointer: '/plan/peakCelsius',
+        answer:
+          'The yard’s second meter, with its tip beside the bowls, said 998; the record is from the one by the wall.',
+      },
+    ],
     set: {
       ...yard,
       fibreBeneath: true,
