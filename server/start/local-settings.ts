@@ -1,12 +1,12 @@
-import { join } from 'node:path';
+import { join, resolve } from 'node:path';
 import { readJsonFile } from './private-files.ts';
 import { isSame } from './run-lock.ts';
 
 /** The project's folder. */
 export const ROOT = join(import.meta.dirname, '../..');
 
-/** Where a start without settings keeps everything it makes. */
-export const DATA_FOLDER = join(ROOT, '.data');
+/** Where a start without settings keeps everything it makes; SPYHOLE_DATA names another folder. */
+export const DATA_FOLDER = resolve(ROOT, process.env['SPYHOLE_DATA'] || '.data');
 
 /** The settings the start command made for the parts it started; only its owner can read the file. */
 export const LOCAL_SETTINGS_PATH = join(DATA_FOLDER, 'settings.json');
