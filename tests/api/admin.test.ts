@@ -11,6 +11,8 @@ import {
   caughtMailsSchema,
   outboxStateSchema,
 } from '#shared/api/admin.ts';
+import { changeRole } from '../../server/admin/member-rights.ts';
+import type { SignedIn } from '../../server/authorization/actor.ts';
 import { readJson } from '../../server/database/read-json.ts';
 import { enqueue } from '../../server/outbox/outbox.ts';
 import { type Client, startApi, test } from '../support/api.ts';
@@ -155,6 +157,26 @@ describe('PUT /api/admin/members/:id/role', () => {
     expect((await setRole(admin, member.id, 'moderator', '  ')).problem.errors?.[0]?.pointer).toBe(
       '/reason',
     );
+    expect(await api.db('audit_log')).toEqual([]);
+  });
+
+  test('needs the rights still to be there when it is done, not only when it was asked', async ({
+    api,
+  }) => {
+    const [asker, other] = [
+      await aMember(api.db, { role: 'admin' }),
+      await aMember(api.db, { role: 'admin' }),
+    ];
+    await aMember(api.db, { role: 'admin' });
+    const actor: SignedIn = {
+      ...asker,
+      kind: 'member',
+      emailVerified: true,
+      confirmedAt: Date.now(),
+    };
+    await api.db('members').where({ id: asker.id }).update({ role: 'member' });
+    const late = changeRole(api.db, actor, other.id, { role: 'member', reason: 'Too late' });
+    await expect(late).rejects.toMatchObject({ code: 'not-allowed' });
     expect(await api.db('audit_log')).toEqual([]);
   });
 
