@@ -36,6 +36,7 @@ export function CheckField({ label, checked, onChecked, ...field }: Props) {
         </p>
       )}
       <IssueList id={ids.issuesId} issues={field.issues ?? []} />
+      {field.margin}
     </div>
   );
 }

@@ -59,6 +59,7 @@ export function FieldFrame({ field, ids, group = false, children }: Props) {
         }
       >
         <IssueList id={ids.issuesId} issues={field.issues ?? []} />
+        {field.margin}
       </div>
     </div>
   );

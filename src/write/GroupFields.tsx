@@ -1,12 +1,6 @@
 import type { NoteFields } from '#shared/note/note-fields.ts';
-import { rangeAt } from '#shared/note/ranges.ts';
-import { ChoiceField } from '../ui/ChoiceField.tsx';
-import { NumberField } from '../ui/NumberField.tsx';
-import { optionsOf } from '../ui/options.ts';
-import { SelectField } from '../ui/SelectField.tsx';
-import { TextField } from '../ui/TextField.tsx';
-import { useGroupField, useWriteForm } from './form-context.ts';
-import { shownUnit } from './measure-units.ts';
+import { LineAt, MeasureAt, OneOfAt, YesNoAt } from './FieldsAt.tsx';
+import { useGroupField } from './form-context.ts';
 
 type Group = 'when' | 'setUp' | 'plan' | 'reduction';
 /** The members of a group that hold a value of this type. */
@@ -23,30 +17,21 @@ interface Shared<G extends Group, Name extends string> {
   readonly required?: boolean;
 }
 
+const pointerOf = (group: Group, name: string): string => `/${group}/${name}`;
+
 /** A measure of a group, in the member's units, with its range from the schema. */
 export function Measure<G extends Group, Name extends Of<G, number | null>>({
   group,
   name,
   ...field
 }: Shared<G, Name>) {
-  const { units } = useWriteForm();
-  const { value, set, ...rest } = useGroupField(group, name);
-  const range = rangeAt(`/${group}/${name}`);
-  const shown = shownUnit(range?.unit ?? '', units);
+  const { value, set } = useGroupField(group, name);
   return (
-    <NumberField
-      // Another unit is another field: a half-typed text must not change its meaning.
-      key={shown.unit}
+    <MeasureAt
       {...field}
-      {...rest}
+      pointer={pointerOf(group, name)}
       value={value as number | null}
       onValue={(next) => set(next as NoteFields[G][Name])}
-      unit={shown.unit || undefined}
-      min={range ? Math.round(shown.toShown(range.range[0]) * 10) / 10 : undefined}
-      max={range ? Math.round(shown.toShown(range.range[1]) * 10) / 10 : undefined}
-      decimals={shown.decimals}
-      toShown={shown.toShown}
-      toStored={shown.toStored}
     />
   );
 }
@@ -60,21 +45,17 @@ export function OneOf<G extends Group, Name extends Of<G, string | null>>({
 }: Shared<G, Name> & {
   readonly terms: Readonly<Record<NonNullable<NoteFields[G][Name]> & string, string>>;
 }) {
-  const { value, set, ...rest } = useGroupField(group, name);
-  const options = optionsOf(terms);
-  const Field = options.length <= 5 ? ChoiceField : SelectField;
+  const { value, set } = useGroupField(group, name);
   return (
-    <Field
+    <OneOfAt
       {...field}
-      {...rest}
-      value={value as (typeof options)[number]['value'] | null}
+      pointer={pointerOf(group, name)}
+      terms={terms}
+      value={value as (NonNullable<NoteFields[G][Name]> & string) | null}
       onValue={(next) => set(next as NoteFields[G][Name])}
-      options={options}
     />
   );
 }
-
-const YES_NO = { yes: 'Yes', no: 'No' } as const;
 
 /** Yes, no, or not said. */
 export function YesNo<G extends Group, Name extends Of<G, boolean | null>>({
@@ -82,14 +63,13 @@ export function YesNo<G extends Group, Name extends Of<G, boolean | null>>({
   name,
   ...field
 }: Shared<G, Name>) {
-  const { value, set, ...rest } = useGroupField(group, name);
+  const { value, set } = useGroupField(group, name);
   return (
-    <ChoiceField
+    <YesNoAt
       {...field}
-      {...rest}
-      value={value === null ? null : value ? 'yes' : 'no'}
-      onValue={(next) => set((next === null ? null : next === 'yes') as NoteFields[G][Name])}
-      options={optionsOf(YES_NO)}
+      pointer={pointerOf(group, name)}
+      value={value as boolean | null}
+      onValue={(next) => set(next as NoteFields[G][Name])}
     />
   );
 }
@@ -100,11 +80,11 @@ export function Line<G extends Group, Name extends Of<G, string>>({
   name,
   ...field
 }: Shared<G, Name> & { readonly maxLength?: number }) {
-  const { value, set, ...rest } = useGroupField(group, name);
+  const { value, set } = useGroupField(group, name);
   return (
-    <TextField
+    <LineAt
       {...field}
-      {...rest}
+      pointer={pointerOf(group, name)}
       value={value as string}
       onValue={(next) => set(next as NoteFields[G][Name])}
     />

@@ -1,12 +1,21 @@
 import { createContext, useContext } from 'react';
+import type { ReactNode } from 'react';
 import type { Kiln } from '#shared/api/kilns.ts';
 import type { Draft } from '#shared/api/notes.ts';
 import type { Check } from '#shared/note/checks/check.ts';
+import type { KilnFields } from '#shared/note/kiln-fields.ts';
 import type { NoteFields } from '#shared/note/note-fields.ts';
 import type { NoteReading } from '#shared/note/read-note.ts';
 import type { Units } from '#shared/units/units.ts';
 import type { FieldIssue } from '../ui/field-issue.ts';
 import type { DraftKeeper } from './draft-keeper.ts';
+
+/** A kiln as the form needs it: one's own, or one that the draft named before it was lent no longer. */
+export interface FormKiln {
+  readonly id: number;
+  readonly fields: KilnFields;
+  readonly volumeLitres: number | null;
+}
 
 /** What every part of the Write page works on. */
 export interface WriteForm {
@@ -18,11 +27,14 @@ export interface WriteForm {
   readonly editable: boolean;
   /** Kilns this member may fire. */
   readonly kilns: readonly Kiln[];
-  readonly kiln: Kiln | null;
+  readonly kiln: FormKiln | null;
   /** Read in this browser while typing; the server reads again and its reading counts. */
   readonly reading: NoteReading;
-  /** Unanswered checks at a pointer, as the field shows them. */
+  /** Checks at a pointer, as the field shows them; answered ones are marked as settled. */
   readonly issuesAt: (pointer: string) => FieldIssue[];
+  /** What else stands in the margin at a pointer: findings, remarks from the desk. */
+  readonly marginAt: (pointer: string) => ReactNode;
+  /** Every check that asks the author, answered or not. */
   readonly checks: readonly Check[];
 }
 
@@ -42,13 +54,15 @@ export function useGroupField<G extends Group, Name extends keyof NoteFields[G] 
   group: G,
   name: Name,
 ) {
-  const { fields, change, issuesAt, editable } = useWriteForm();
+  const { fields, change, issuesAt, marginAt, editable } = useWriteForm();
+  const pointer = `/${group}/${name}`;
   return {
     value: fields[group][name],
     set: (value: NoteFields[G][Name]) => {
       change((before) => ({ ...before, [group]: { ...before[group], [name]: value } }));
     },
-    issues: issuesAt(`/${group}/${name}`),
+    issues: issuesAt(pointer),
+    margin: marginAt(pointer),
     disabled: !editable,
   };
 }
