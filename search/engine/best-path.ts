@@ -1,4 +1,4 @@
-import type { Occurrence } from './matching.ts';
+import type { Occurrences } from './occurrences.ts';
 import type { QueryGraph } from './query-graph.ts';
 import type { BuiltInRule } from './ranking-rule-names.ts';
 import { POSITIONS_PER_ATTRIBUTE } from './search-index.ts';
@@ -7,6 +7,14 @@ import { POSITIONS_PER_ATTRIBUTE } from './search-index.ts';
 export type PlacedRule = 'typo' | 'proximity' | 'attributeRank' | 'wordPosition' | 'inexact';
 
 export type PathCosts = Record<PlacedRule, number>;
+
+export const NO_COSTS: PathCosts = {
+  typo: 0,
+  proximity: 0,
+  attributeRank: 0,
+  wordPosition: 0,
+  inexact: 0,
+};
 
 /** Size of each rule's share in the packed cost; ten words never exceed it. Product below 2^53. */
 const RANGES: Record<PlacedRule, number> = {
@@ -32,11 +40,13 @@ export function positionStep(position: number): number {
   return 32_768;
 }
 
+function sameAttribute(a: number, b: number): boolean {
+  return Math.floor(a / POSITIONS_PER_ATTRIBUTE) === Math.floor(b / POSITIONS_PER_ATTRIBUTE);
+}
+
 /** How far the word at `start` is from the one that ended at `end`: 1 side by side, at most 8. */
 export function proximityCost(end: number, start: number): number {
-  const sameAttribute =
-    Math.floor(end / POSITIONS_PER_ATTRIBUTE) === Math.floor(start / POSITIONS_PER_ATTRIBUTE);
-  if (!sameAttribute) return FARTHEST;
+  if (!sameAttribute(end, start)) return FARTHEST;
   const distance = start > end ? start - end : end - start + 1;
   return Math.min(Math.max(distance, 1), FARTHEST);
 }
@@ -52,17 +62,35 @@ export function placedRules(rules: readonly BuiltInRule[]): PlacedRule[] {
   return placed;
 }
 
-type State = { end: number; cost: number };
+export type PathRanker = (occurrences: Occurrences, droppedUnits: ReadonlySet<number>) => PathCosts;
 
-export type PathRanker = (
-  occurrences: readonly Occurrence[],
-  droppedUnits: ReadonlySet<number>,
-) => PathCosts;
+/**
+ * Ways to have placed all units before one unit: where the last placed one ends, and the packed cost
+ * so far, in parallel lists up to `count`. The lists are used again for the next document.
+ */
+type Arrivals = { count: number; ends: number[]; costs: number[]; cheapest: number };
+
+function arrive(arrivals: Arrivals, end: number, cost: number): void {
+  const { ends, costs } = arrivals;
+  // Arrivals come almost in order of their ends; late ones are moved to their place.
+  let at = arrivals.count;
+  for (; at > 0 && (ends[at - 1] ?? 0) > end; at -= 1) {
+    ends[at] = ends[at - 1] ?? 0;
+    costs[at] = costs[at - 1] ?? 0;
+  }
+  ends[at] = end;
+  costs[at] = cost;
+  arrivals.count += 1;
+  if (cost < arrivals.cheapest) arrivals.cheapest = cost;
+}
 
 /**
  * Makes the function that finds, for one document, the choice of occurrences that is best under the
  * given rules in their order, and answers what that choice costs under each. `rankOf` gives an
- * attribute's place in the searchable list.
+ * attribute's place in the searchable list; without `byWord` only the attribute counts as distance.
+ *
+ * The costs of all rules are packed into one number, the first rule in its highest digits, so that
+ * the smallest sum is the best choice under the rules in order.
  */
 export function createPathRanker(
   graph: QueryGraph,
@@ -70,85 +98,99 @@ export function createPathRanker(
   rankOf: (attribute: number) => number,
   byWord: boolean,
 ): PathRanker {
-  const unit: Partial<Record<PlacedRule, number>> = {};
+  const weights: PathCosts = { ...NO_COSTS };
   let weight = 1;
   for (const rule of [...rules].reverse()) {
-    unit[rule] = weight;
+    weights[rule] = weight;
     weight *= RANGES[rule];
   }
-  const weightOf = (rule: PlacedRule): number => unit[rule] ?? 0;
   const unitCount = graph.units.length;
+  const spans = graph.edges.map(({ from, to }) => to - from + 1);
+  const fixedCosts = graph.edges.map(
+    ({ typos, exact }, edge) =>
+      typos * weights.typo +
+      ((spans[edge] ?? 1) - 1) * weights.proximity +
+      (exact ? 0 : (spans[edge] ?? 1)) * weights.inexact,
+  );
+  const fromUnits = graph.edges.map(({ from }) => from);
+  const seen = new Uint8Array(graph.edges.length);
+  const nodes: Arrivals[] = Array.from({ length: unitCount + 1 }, () => ({
+    count: 0,
+    ends: [],
+    costs: [],
+    cheapest: Infinity,
+  }));
+  const farthestCost = FARTHEST * weights.proximity;
+  const reach = byWord ? FARTHEST : POSITIONS_PER_ATTRIBUTE;
 
-  const occurrenceCost = (occurrence: Occurrence): number => {
-    const edge = graph.edges[occurrence.edge];
-    if (edge === undefined) return 0;
-    const span = edge.to - edge.from + 1;
-    const attribute = Math.floor(occurrence.start / POSITIONS_PER_ATTRIBUTE);
-    const position = occurrence.start % POSITIONS_PER_ATTRIBUTE;
-    return (
-      edge.typos * weightOf('typo') +
-      (span - 1) * weightOf('proximity') +
-      span * Math.min(rankOf(attribute), MAX_ATTRIBUTE_RANK) * weightOf('attributeRank') +
-      span * positionStep(position) * weightOf('wordPosition') +
-      (edge.exact ? 0 : span) * weightOf('inexact')
-    );
+  const occurrenceCost = (edge: number, start: number): number => {
+    const attribute = Math.floor(start / POSITIONS_PER_ATTRIBUTE);
+    const rank = Math.min(rankOf(attribute), MAX_ATTRIBUTE_RANK);
+    const step = positionStep(start % POSITIONS_PER_ATTRIBUTE);
+    const placed = rank * weights.attributeRank + step * weights.wordPosition;
+    return (fixedCosts[edge] ?? 0) + (spans[edge] ?? 1) * placed;
+  };
+  const apartCost = (end: number, start: number): number => {
+    if (byWord) return proximityCost(end, start) * weights.proximity;
+    return (sameAttribute(end, start) ? 1 : FARTHEST) * weights.proximity;
   };
 
-  const between = (end: number, start: number): number => {
-    if (byWord) return proximityCost(end, start);
-    return proximityCost(end, start) === FARTHEST &&
-      Math.floor(end / POSITIONS_PER_ATTRIBUTE) !== Math.floor(start / POSITIONS_PER_ATTRIBUTE)
-      ? FARTHEST
-      : 1;
-  };
+  /** Places the occurrences of one unit after the cheapest ways to come to each. */
+  function placeUnit(unit: number, occurrences: Occurrences, isFirst: boolean): void {
+    const { count, edges, starts, ends } = occurrences;
+    const before = nodes[unit];
+    if (before === undefined || (!isFirst && before.count === 0)) return;
+    let near = 0;
+    seen.fill(0);
+    for (let at = 0; at < count; at += 1) {
+      const edge = edges[at] ?? 0;
+      if (fromUnits[edge] !== unit) continue;
+      const times = seen[edge] ?? 0;
+      if (times >= MAX_OCCURRENCES) continue;
+      seen[edge] = times + 1;
+      const start = starts[at] ?? 0;
+      let best = 0;
+      if (!isFirst) {
+        best = before.cheapest + farthestCost;
+        while (near < before.count && (before.ends[near] ?? 0) < start - reach) near += 1;
+        for (let other = near; other < before.count; other += 1) {
+          const end = before.ends[other] ?? 0;
+          if (end > start + reach) break;
+          const cost = (before.costs[other] ?? 0) + apartCost(end, start);
+          if (cost < best) best = cost;
+        }
+      }
+      const next = nodes[unit + (spans[edge] ?? 1)];
+      if (next) arrive(next, ends[at] ?? 0, best + occurrenceCost(edge, start));
+    }
+  }
 
   return (occurrences, droppedUnits) => {
-    const leaving: Occurrence[][] = Array.from({ length: unitCount }, () => []);
-    const counts = new Map<number, number>();
-    for (const occurrence of occurrences) {
-      const from = graph.edges[occurrence.edge]?.from ?? 0;
-      const seen = counts.get(occurrence.edge) ?? 0;
-      if (seen >= MAX_OCCURRENCES) continue;
-      counts.set(occurrence.edge, seen + 1);
-      leaving[from]?.push(occurrence);
+    for (const node of nodes) {
+      node.count = 0;
+      node.cheapest = Infinity;
     }
-    const states: State[][] = Array.from({ length: unitCount + 1 }, () => []);
-    states[0]?.push({ end: -1, cost: 0 });
-    for (let at = 0; at < unitCount; at += 1) {
-      const here = cheapestByEnd(states[at] ?? []);
-      if (droppedUnits.has(at)) {
-        states[at + 1]?.push(...here);
+    let isFirst = true;
+    for (let unit = 0; unit < unitCount; unit += 1) {
+      if (!droppedUnits.has(unit)) {
+        placeUnit(unit, occurrences, isFirst);
+        isFirst = false;
         continue;
       }
-      for (const occurrence of leaving[at] ?? []) {
-        let best = Infinity;
-        for (const state of here) {
-          const apart =
-            state.end < 0 ? 0 : between(state.end, occurrence.start) * weightOf('proximity');
-          if (state.cost + apart < best) best = state.cost + apart;
-        }
-        if (best === Infinity) continue;
-        const to = graph.edges[occurrence.edge]?.to ?? at;
-        states[to + 1]?.push({ end: occurrence.end, cost: best + occurrenceCost(occurrence) });
+      const here = nodes[unit];
+      const next = nodes[unit + 1];
+      if (here === undefined || next === undefined) continue;
+      for (let at = 0; at < here.count; at += 1) {
+        arrive(next, here.ends[at] ?? 0, here.costs[at] ?? 0);
       }
     }
-    const best = Math.min(...(states[unitCount] ?? []).map((state) => state.cost));
+    const best = nodes[unitCount]?.cheapest ?? Infinity;
     return unpack(best === Infinity ? 0 : best, rules);
   };
 }
 
-function cheapestByEnd(states: readonly State[]): State[] {
-  if (states.length < 2) return [...states];
-  const best = new Map<number, State>();
-  for (const state of states) {
-    const known = best.get(state.end);
-    if (known === undefined || state.cost < known.cost) best.set(state.end, state);
-  }
-  return [...best.values()];
-}
-
 function unpack(packed: number, rules: readonly PlacedRule[]): PathCosts {
-  const costs: PathCosts = { typo: 0, proximity: 0, attributeRank: 0, wordPosition: 0, inexact: 0 };
+  const costs = { ...NO_COSTS };
   let rest = packed;
   for (const rule of [...rules].reverse()) {
     costs[rule] = rest % RANGES[rule];

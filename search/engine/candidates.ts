@@ -29,11 +29,13 @@ export class CandidateIndex extends MiniSearch<CandidateDocument> {
     this.discard(id);
   }
 
-  /** Numbers of the documents that hold a word; may include removed ones until they are cleaned. */
-  *numbersWith(word: string): Iterable<number> {
+  /** Visits the documents that hold a word; may include removed ones until they are cleaned. */
+  forEachWith(word: string, visit: (number: number) => void): void {
     const byField = this._index.get(word);
     if (byField === undefined) return;
-    for (const postings of byField.values()) yield* postings.keys();
+    for (const postings of byField.values()) {
+      for (const number of postings.keys()) visit(number);
+    }
   }
 
   /** How many documents hold a word. */

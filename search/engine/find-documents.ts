@@ -1,15 +1,13 @@
 import { isWithin } from './flatten.ts';
 import type { DocumentSet } from './filter-evaluate.ts';
 import {
-  createOccurrenceFinder,
   documentsWithAll,
   droppingOrder,
   findMatches,
-  sequenceAt,
-  type AttributeRules,
   type Match,
   type MatchingStrategy,
 } from './matching.ts';
+import { createOccurrenceFinder, sequenceAt, type AttributeRules } from './occurrences.ts';
 import { buildQueryGraph, type QueryGraph } from './query-graph.ts';
 import { parseQuery } from './query-parse.ts';
 import { createRanking, type Ranking } from './ranking-rules.ts';

@@ -1,6 +1,7 @@
 import type { DocumentSet } from './filter-evaluate.ts';
 import type { Edge, QueryGraph } from './query-graph.ts';
-import { POSITIONS_PER_ATTRIBUTE, type IndexedDocument, type SearchIndex } from './search-index.ts';
+import type { AttributeRules, OccurrenceFinder } from './occurrences.ts';
+import type { SearchIndex } from './search-index.ts';
 
 export type MatchingStrategy = 'last' | 'all' | 'frequency';
 
@@ -14,99 +15,6 @@ export type Match = {
   /** Numbers of the edges this document satisfies. */
   edges: number[];
 };
-
-export type Occurrence = { edge: number; start: number; end: number };
-
-/** Finds where the edges of one query occur in a document. */
-export type OccurrenceFinder = (document: IndexedDocument) => Occurrence[];
-
-/** Attributes in which a query may match, and those where only exact spelling counts. */
-export type AttributeRules = {
-  isSearched: (attribute: number) => boolean;
-  allowsTypos: (attribute: number) => boolean;
-  restricted: boolean;
-};
-
-/**
- * Prepares a scan of document words for the edges of a query. A sequence matches words at
- * consecutive positions of one attribute.
- */
-export function createOccurrenceFinder(
-  index: SearchIndex,
-  graph: QueryGraph,
-  attributes: AttributeRules,
-): OccurrenceFinder {
-  const { vocabulary } = index;
-  const interesting = new Uint8Array(vocabulary.words.length);
-  const singles = new Map<number, number[]>();
-  const starts = new Map<number, { edge: number; words: (number | null)[] }[]>();
-  const note = (word: string): number | undefined => {
-    const number = vocabulary.numberOf.get(word);
-    if (number !== undefined) interesting[number] = 1;
-    return number;
-  };
-  for (const [edge, { words, sequences }] of graph.edges.entries()) {
-    for (const word of words) {
-      const number = note(word);
-      if (number === undefined) continue;
-      const list = singles.get(number);
-      if (list === undefined) singles.set(number, [edge]);
-      else list.push(edge);
-    }
-    for (const sequence of sequences) {
-      const numbers = sequence.map((word) =>
-        word === null ? null : vocabulary.numberOf.get(word),
-      );
-      const [first] = numbers;
-      if (first == null || numbers.includes(undefined)) continue;
-      interesting[first] = 1;
-      const list = starts.get(first) ?? [];
-      list.push({ edge, words: numbers.map((number) => number ?? null) });
-      starts.set(first, list);
-    }
-  }
-  const edgeAllowsAttribute = (edge: number, attribute: number): boolean =>
-    attributes.isSearched(attribute) &&
-    ((graph.edges[edge]?.typos ?? 0) === 0 || attributes.allowsTypos(attribute));
-
-  return ({ words, places }) => {
-    const found: Occurrence[] = [];
-    for (let at = 0; at < words.length; at += 1) {
-      const word = words[at] ?? 0;
-      if (!interesting[word]) continue;
-      const start = places[at] ?? 0;
-      const attribute = Math.floor(start / POSITIONS_PER_ATTRIBUTE);
-      for (const edge of singles.get(word) ?? []) {
-        if (attributes.restricted && !edgeAllowsAttribute(edge, attribute)) continue;
-        found.push({ edge, start, end: start });
-      }
-      for (const { edge, words: sequence } of starts.get(word) ?? []) {
-        if (attributes.restricted && !edgeAllowsAttribute(edge, attribute)) continue;
-        if (sequenceAt(words, places, at, sequence)) {
-          found.push({ edge, start, end: start + sequence.length - 1 });
-        }
-      }
-    }
-    return found;
-  };
-}
-
-/** Whether a sequence of word numbers stands at entry `at` of a document. */
-export function sequenceAt(
-  words: Uint32Array,
-  places: Uint32Array,
-  at: number,
-  sequence: readonly (number | null)[],
-): boolean {
-  const start = places[at] ?? 0;
-  let next = at;
-  for (const [offset, wanted] of sequence.entries()) {
-    if (wanted === null) continue;
-    while (next < words.length && (places[next] ?? 0) < start + offset) next += 1;
-    if (places[next] !== start + offset || words[next] !== wanted) return false;
-  }
-  return true;
-}
 
 /** Order in which units may be dropped. Phrases are never dropped, nor is the last one left. */
 export function droppingOrder(
@@ -174,9 +82,9 @@ export function findMatches(
     if (mask === undefined) continue;
     const bit = 1 << (number % 31);
     for (const word of edge.words) {
-      for (const document of index.candidates.numbersWith(word)) {
+      index.candidates.forEachWith(word, (document) => {
         if (allowed[document]) mask[document] = (mask[document] ?? 0) | bit;
-      }
+      });
     }
     for (const sequence of edge.sequences) {
       const words = sequence.filter((word) => word !== null);
@@ -198,7 +106,9 @@ export function findMatches(
       const indexed = index.documents[document];
       if (indexed === undefined) continue;
       for (const mask of masks) mask[document] = 0;
-      for (const { edge } of find(indexed)) {
+      const { count, edges: held } = find(indexed);
+      for (let at = 0; at < count; at += 1) {
+        const edge = held[at] ?? 0;
         const mask = masks[Math.floor(edge / 31)];
         if (mask) mask[document] = (mask[document] ?? 0) | (1 << (edge % 31));
       }
@@ -230,13 +140,15 @@ export function documentsWithAll(index: SearchIndex, words: readonly string[]): 
     (a, b) => index.candidates.frequency(a) - index.candidates.frequency(b),
   );
   const [rarest, ...others] = byFrequency;
-  let found = new Set(rarest === undefined ? [] : index.candidates.numbersWith(rarest));
+  let found = new Set<number>();
+  if (rarest !== undefined) index.candidates.forEachWith(rarest, (number) => found.add(number));
   for (const word of others) {
     if (found.size === 0) break;
+    const before = found;
     const next = new Set<number>();
-    for (const document of index.candidates.numbersWith(word)) {
-      if (found.has(document)) next.add(document);
-    }
+    index.candidates.forEachWith(word, (document) => {
+      if (before.has(document)) next.add(document);
+    });
     found = next;
   }
   return found;

@@ -1,5 +1,12 @@
-import { createPathRanker, placedRules, type PathCosts, type PlacedRule } from './best-path.ts';
-import type { AttributeRules, Match, OccurrenceFinder } from './matching.ts';
+import {
+  createPathRanker,
+  NO_COSTS,
+  placedRules,
+  type PathCosts,
+  type PlacedRule,
+} from './best-path.ts';
+import type { Match } from './matching.ts';
+import type { AttributeRules, OccurrenceFinder } from './occurrences.ts';
 import type { QueryGraph } from './query-graph.ts';
 import type { BuiltInRule, RankingRule } from './ranking-rule-names.ts';
 import type { SearchIndex } from './search-index.ts';
@@ -64,8 +71,8 @@ export function createRanking(
     let costs = costsKnown.get(match.document);
     if (costs === undefined) {
       const document = index.documents[match.document];
-      const occurrences = document === undefined ? [] : find(document);
-      costs = ranker(occurrences, droppedSets[match.dropped] ?? noneDropped);
+      const dropped = droppedSets[match.dropped] ?? noneDropped;
+      costs = document === undefined ? NO_COSTS : ranker(find(document), dropped);
       costsKnown.set(match.document, costs);
     }
     return costs;

@@ -44,7 +44,9 @@ export function search(index: SearchIndex, indexUid: string, request: SearchRequ
     total = matches.length;
   }
 
-  const matcher = createTextMatcher(found.graph, index.tokenise);
+  const matcher = createTextMatcher(found.graph, index.tokenise, (word) =>
+    index.vocabulary.numberOf.has(word),
+  );
   const hits = matches.slice(paging.start, paging.end).map((match): JsonObject => {
     const source = index.documents[match.document]?.source ?? {};
     const hit = formatHit(source, request, index.settings.displayedAttributes, matcher);

@@ -141,6 +141,7 @@ async function loadSnapshot(state: EngineState, path: string): Promise<number> {
 /** Opens the folder, reads the state kept there, and prepares to append to its log. */
 export async function openStorage(
   folder: string,
+  compactAfterBytes = COMPACT_AFTER_BYTES,
 ): Promise<{ state: EngineState; storage: Storage }> {
   await mkdir(folder, { recursive: true });
   const state = createEngineState();
@@ -236,7 +237,7 @@ export async function openStorage(
   const storage: Storage = {
     append,
     compactIfLarge: async (current) => {
-      if (logBytes > COMPACT_AFTER_BYTES) await compact(current);
+      if (logBytes > compactAfterBytes) await compact(current);
     },
     databaseSize: () => logBytes + snapshotBytes,
     close: async () => {

@@ -17,12 +17,16 @@ type WordAnswer = { unit: number; prefixLength: number | null };
  * Makes the function that finds a query in any text, searchable or not: its words, their synonyms
  * and tolerated misspellings, and the typed part of words begun by the last query word.
  */
-export function createTextMatcher(graph: QueryGraph, tokenise: Tokeniser): TextMatcher {
+export function createTextMatcher(
+  graph: QueryGraph,
+  tokenise: Tokeniser,
+  isKnownWord: (word: string) => boolean,
+): TextMatcher {
   const whole = new Map<string, number>();
   const sequences: { words: (string | null)[]; unit: number }[] = [];
   for (const edge of graph.edges) {
     for (const words of edge.sequences) sequences.push({ words, unit: edge.from });
-    if (edge.kind === 'prefix' || edge.kind === 'typo') continue;
+    if (edge.kind === 'prefix') continue;
     for (const word of edge.words) if (!whole.has(word)) whole.set(word, edge.from);
   }
   const typed = graph.units.flatMap((unit, number) =>
@@ -36,9 +40,11 @@ export function createTextMatcher(graph: QueryGraph, tokenise: Tokeniser): TextM
     }
     const unit = whole.get(word);
     if (unit !== undefined) return { unit, prefixLength: null };
+    // Misspellings of indexed words were found with the query; other texts are compared here.
+    const compare = !isKnownWord(word);
     for (const { word: query, isPrefix, number, budget } of typed) {
       if (isPrefix && word.startsWith(query)) return { unit: number, prefixLength: query.length };
-      if (budget > 0 && typosBetween(query, word, budget, isPrefix) !== undefined) {
+      if (compare && budget > 0 && typosBetween(query, word, budget, isPrefix) !== undefined) {
         return { unit: number, prefixLength: null };
       }
     }

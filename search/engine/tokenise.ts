@@ -27,17 +27,21 @@ const enum Kind {
 }
 
 const kindByCode = new Map<number, Kind>();
+const asciiKinds = Uint8Array.from({ length: 128 }, (_, code) =>
+  readKind(String.fromCharCode(code)),
+);
 
 function kindOf(text: string, codePoint: number): Kind {
   const known = kindByCode.get(codePoint);
   if (known !== undefined) return known;
-  const kind = WORD_CHARACTER.test(text)
-    ? Kind.Word
-    : HARD_SEPARATORS.has(text)
-      ? Kind.Hard
-      : Kind.Soft;
+  const kind = readKind(text);
   kindByCode.set(codePoint, kind);
   return kind;
+}
+
+function readKind(text: string): Kind {
+  if (WORD_CHARACTER.test(text)) return Kind.Word;
+  return HARD_SEPARATORS.has(text) ? Kind.Hard : Kind.Soft;
 }
 
 /** Longest first, so that `..` wins over `.`. */
@@ -108,7 +112,11 @@ export function createTokeniser(options: TokeniserOptions): Tokeniser {
           continue;
         }
       }
-      const { kind, length } = step(text, at);
+      const code = text.charCodeAt(at);
+      let kind: Kind;
+      let length = 1;
+      if (plain && code < 128) kind = asciiKinds[code] ?? Kind.Soft;
+      else ({ kind, length } = step(text, at));
       if (kind === Kind.Word) {
         if (wordStart < 0) wordStart = at;
       } else {

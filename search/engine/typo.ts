@@ -37,6 +37,8 @@ export function typosBetween(
   if (query === word) return 0;
   if (!asPrefix && Math.abs(query.length - word.length) > budget) return undefined;
   const surcharge = query.charCodeAt(0) === word.charCodeAt(0) ? 0 : 1;
+  if (surcharge > 0 && budget < 2) return undefined;
+  if (budget === 0 && !asPrefix) return undefined;
   const rows = new EditRows(query);
   let best = asPrefix ? Infinity : undefined;
   for (let depth = 1; depth <= word.length; depth += 1) {
