@@ -1,7 +1,7 @@
 import { existsSync } from 'node:fs';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
 import { test as base, inject } from 'vitest';
-import type { DemoAccount } from './global-setup.ts';
+import type { DemoAccount } from '../support/product.ts';
 
 const CHROMIUM = '/usr/bin/chromium';
 
