@@ -7,6 +7,7 @@ import { TROUBLE_SHORT } from '#shared/vocabulary/troubles.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { QuestionField } from '../find/QuestionField.tsx';
 import { figureQueries } from '../figures/figure-queries.ts';
+import { TroubleRail } from '../figures/TroubleRail.tsx';
 import { NoteRows } from '../notes/NoteRows.tsx';
 import { EmptyState } from '../ui/EmptyState.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';
@@ -60,7 +61,10 @@ export function FrontPage() {
       )}
       {front.data && front.data.shares.notes > 0 && (
         <>
-          <TroubleRail shares={front.data.shares} />
+          <TroubleRail
+            shares={front.data.shares}
+            toTrouble={(trouble) => paths.find(TROUBLE_SHORT[trouble])}
+          />
           <Sentences sentences={front.data.sentences} />
           <section aria-labelledby="newest" className="space-y-4">
             <div className="flex flex-wrap items-baseline justify-between gap-x-6">
@@ -76,51 +80,6 @@ export function FrontPage() {
         </>
       )}
     </div>
-  );
-}
-
-/** Each trouble with the share of notes that had it, as a rule of that length: cold, no heat. */
-function TroubleRail({ shares }: { readonly shares: FrontData['shares'] }) {
-  const most = Math.max(1, ...shares.troubles.map(({ notes }) => notes));
-  return (
-    <section aria-labelledby="troubles" className="space-y-4">
-      <h2 id="troubles" className="text-section">
-        What goes wrong
-      </h2>
-      <p className="text-small text-soot-2">
-        Share of {shares.notes} notes by {shares.members} members that had each trouble, found in
-        the record or named by the author.
-      </p>
-      <ul className="grid gap-x-10 border-t border-soot sm:grid-cols-2 lg:grid-cols-3">
-        {shares.troubles.map(({ trouble, notes }) => (
-          <li key={trouble} className="border-b border-line">
-            <Link
-              to={paths.find(TROUBLE_SHORT[trouble])}
-              className="group flex min-h-11 items-center gap-4 py-1.5 text-small text-soot no-underline"
-            >
-              <span className="w-36 shrink-0 underline decoration-line underline-offset-4 group-hover:decoration-verdigris">
-                {TROUBLE_SHORT[trouble]}
-              </span>
-              <svg
-                aria-hidden="true"
-                className="h-2 min-w-0 grow"
-                viewBox="0 0 100 2"
-                preserveAspectRatio="none"
-              >
-                <rect
-                  width={(notes / most) * 100}
-                  height="2"
-                  className="fill-soot-2 group-hover:fill-verdigris"
-                />
-              </svg>
-              <span className="reading w-20 shrink-0 text-right text-note text-soot-2">
-                {notes} of {shares.notes}
-              </span>
-            </Link>
-          </li>
-        ))}
-      </ul>
-    </section>
   );
 }
 

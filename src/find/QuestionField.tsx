@@ -1,10 +1,18 @@
 import { useQuery } from '@tanstack/react-query';
-import { useDeferredValue, useId, useState, type KeyboardEvent, type SyntheticEvent } from 'react';
+import {
+  useDeferredValue,
+  useId,
+  useRef,
+  useState,
+  type KeyboardEvent,
+  type SyntheticEvent,
+} from 'react';
 import { useNavigate } from 'react-router-dom';
 import { paths } from '#shared/paths.ts';
 import { MAX_QUESTION, type SuggestAnswer } from '#shared/api/search.ts';
 import { Button } from '../ui/Button.tsx';
 import { findQueries } from './find-queries.ts';
+import { useSlashKey } from './useSlashKey.ts';
 
 type Suggestion = SuggestAnswer['suggestions'][number];
 
@@ -18,6 +26,14 @@ interface Props {
 /** "What happened in the kiln?": the question, with suggestions while it is typed. */
 export function QuestionField({ initial = '', large = false, onAsk }: Props) {
   const [text, setText] = useState(initial);
+  const [seen, setSeen] = useState(initial);
+  const field = useRef<HTMLInputElement>(null);
+  useSlashKey(field);
+  // Going back changes the question of the page: the field follows it.
+  if (seen !== initial) {
+    setSeen(initial);
+    setText(initial);
+  }
   const [open, setOpen] = useState(false);
   const [chosen, setChosen] = useState(-1);
   const navigate = useNavigate();
@@ -66,6 +82,8 @@ export function QuestionField({ initial = '', large = false, onAsk }: Props) {
       </label>
       <div className="mt-2 flex items-end gap-3">
         <input
+          ref={field}
+          aria-keyshortcuts="/"
           id={`${listId}-field`}
           className={`field-corner min-w-0 grow ${large ? 'min-h-13! text-lead!' : ''}`}
           type="search"

@@ -1,0 +1,44 @@
+import { Link } from 'react-router-dom';
+import type { FindAnswer } from '#shared/api/search.ts';
+import { paths } from '#shared/paths.ts';
+import { Button } from '../ui/Button.tsx';
+import { EmptyState } from '../ui/EmptyState.tsx';
+import { tickedCount, type FindAddress } from './find-address.ts';
+
+interface Props {
+  readonly address: FindAddress;
+  readonly loosen: FindAnswer['loosen'];
+  readonly onLeaveOut: (key: string) => void;
+  readonly onClearFilters: () => void;
+}
+
+/** No note fits: which part to leave out, and how many notes that would find. */
+export function NothingFound({ address, loosen, onLeaveOut, onClearFilters }: Props) {
+  const ticked = tickedCount(address);
+  return (
+    <EmptyState
+      title="No note fits all of this"
+      action={
+        <>
+          {ticked > 0 && (
+            <Button onClick={onClearFilters}>
+              Take {ticked === 1 ? 'the filter' : `all ${String(ticked)} filters`} off
+            </Button>
+          )}
+          {loosen.map(({ key, label, count }) => (
+            <Button key={key} onClick={() => onLeaveOut(key)}>
+              Leave out “{label}”: {count} {count === 1 ? 'note' : 'notes'}
+            </Button>
+          ))}
+        </>
+      }
+    >
+      {loosen.length > 0 || ticked > 0
+        ? 'Loosen one part of it:'
+        : 'Say it in other words, or with fewer.'}{' '}
+      <Link to={paths.newest} className="link">
+        All notes, newest first
+      </Link>
+    </EmptyState>
+  );
+}

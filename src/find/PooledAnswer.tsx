@@ -1,0 +1,79 @@
+import { Link } from 'react-router-dom';
+import type { FindAnswer } from '#shared/api/search.ts';
+import { paths } from '#shared/paths.ts';
+import { CHANGES } from '#shared/vocabulary/changes.ts';
+import { TROUBLE_SHORT } from '#shared/vocabulary/troubles.ts';
+import { Icon } from '../ui/Icon.tsx';
+import { Reading } from '../ui/Reading.tsx';
+
+type Pooled = NonNullable<FindAnswer['pooled']>;
+
+const VERDICTS: Readonly<Record<Pooled['rows'][number]['verdict'], string | null>> = {
+  better: 'better than no change',
+  worse: 'worse than no change',
+  'cannot-be-told': 'cannot be told from no change',
+  'too-few': 'too few to say',
+  reference: null,
+};
+
+const WHERE = {
+  measured: 'found in the record',
+  named: 'named by the author',
+} as const;
+
+/** What was tried next for the trouble asked about, in two lines, with no change beside it. */
+export function PooledAnswer({ pooled }: { readonly pooled: Pooled }) {
+  const trouble = TROUBLE_SHORT[pooled.trouble];
+  const tried = pooled.rows.filter((row) => row.change !== null);
+  const unchanged = pooled.rows.find((row) => row.change === null);
+  const cautions = tried.flatMap(({ caution }) => (caution === null ? [] : [caution]));
+  return (
+    <section aria-labelledby="pooled" className="space-y-2 border-y border-soot py-3">
+      <h2 id="pooled" className="sr-only">
+        What was tried next
+      </h2>
+      <p>
+        Of <Reading>{String(pooled.pairs)}</Reading> firings with “{trouble}” (
+        {WHERE[pooled.source]}, {pooled.startClass} starts) that have a next firing to compare, what
+        was tried next: {tried.length === 0 && 'no change often enough to say'}
+        {tried.map((row) => (
+          <span key={row.change}>
+            <strong className="font-[650]">
+              {row.change === null ? '' : CHANGES[row.change].toLowerCase()}
+            </strong>
+            , gone <Reading>{`${String(row.gone)} of ${String(row.firings)}`}</Reading>{' '}
+            <span className="text-small text-soot-2">
+              ({row.members} members
+              {VERDICTS[row.verdict] ? `; ${VERDICTS[row.verdict] ?? ''}` : ''})
+            </span>
+            {'; '}
+          </span>
+        ))}
+        {tried.length === 0 && '; '}
+        <strong className="font-[650]">no change named</strong>
+        {unchanged && unchanged.firings > 0 ? (
+          <>
+            , gone <Reading>{`${String(unchanged.gone)} of ${String(unchanged.firings)}`}</Reading>
+          </>
+        ) : (
+          ', none to compare with'
+        )}
+        .
+      </p>
+      {cautions.map((caution) => (
+        <p key={caution} className="flex gap-2 text-small text-caution">
+          <Icon name="look-again" className="mt-0.5 size-4.5" />
+          <span>
+            <strong className="font-[650]">Take care.</strong> {caution}
+          </span>
+        </p>
+      ))}
+      <p className="text-small text-soot-2">
+        <Link to={paths.whatHelpedWith(pooled.trouble)} className="link">
+          What helped with {trouble}: every change, its interval and its notes
+        </Link>
+        . What members report, not proof.
+      </p>
+    </section>
+  );
+}

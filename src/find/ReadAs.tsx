@@ -1,0 +1,57 @@
+import { useEffect, useRef } from 'react';
+import { Chip } from '../ui/Chip.tsx';
+import { Icon } from '../ui/Icon.tsx';
+import type { ReadAsPart } from './read-as.ts';
+
+interface Props {
+  readonly parts: readonly ReadAsPart[];
+  readonly onToggle: (key: string) => void;
+}
+
+/** How the question was understood, in parts; each can be left out and taken in again. */
+export function ReadAs({ parts, onToggle }: Props) {
+  const list = useRef<HTMLUListElement>(null);
+  const pressed = useRef<string | null>(null);
+  // The pressed button turns into its opposite: the focus stays on it.
+  useEffect(() => {
+    if (pressed.current === null) return;
+    list.current
+      ?.querySelector<HTMLElement>(`[data-part="${CSS.escape(pressed.current)}"] button`)
+      ?.focus();
+    pressed.current = null;
+  }, [parts]);
+  const toggle = (key: string): void => {
+    pressed.current = key;
+    onToggle(key);
+  };
+  return (
+    <div className="flex flex-wrap items-baseline gap-x-4 gap-y-2">
+      <h2 className="text-small font-[450] tracking-normal text-soot-2">Read as</h2>
+      {parts.length === 0 ? (
+        <p className="text-small">words to look for; no trouble, temperature or ware in it</p>
+      ) : (
+        <ul ref={list} className="flex flex-wrap gap-2">
+          {parts.map(({ key, label, off }) => (
+            <li key={key} data-part={key}>
+              {off ? (
+                <button
+                  type="button"
+                  aria-label={`Take ${label} in again`}
+                  onClick={() => toggle(key)}
+                  className="inline-flex min-h-8 items-center gap-2 border border-dashed border-soot-2 px-2.5 py-1 text-small text-soot-2 hover:border-verdigris hover:text-verdigris touch:min-h-11"
+                >
+                  <Icon name="add" className="size-3" />
+                  <s>{label}</s>
+                </button>
+              ) : (
+                <Chip onRemove={() => toggle(key)} removeLabel={`Leave ${label} out`}>
+                  {label}
+                </Chip>
+              )}
+            </li>
+          ))}
+        </ul>
+      )}
+    </div>
+  );
+}
