@@ -5,6 +5,11 @@ import type { Json } from './json.ts';
 const LARGE_BODY_BYTES = 100 * 1024 * 1024;
 const SMALL_BODY_BYTES = 8 * 1024 * 1024;
 
+/** Values nested deeper would exhaust the stack when they are written out again. */
+const MAX_DEPTH = 200;
+const [QUOTE, BACKSLASH] = [0x22, 0x5c];
+const [OPEN_BRACKET, CLOSE_BRACKET, OPEN_BRACE, CLOSE_BRACE] = [0x5b, 0x5d, 0x7b, 0x7d];
+
 async function readBytes(request: IncomingMessage, limit: number): Promise<Buffer> {
   const chunks: Buffer[] = [];
   let size = 0;
@@ -26,6 +31,24 @@ function malformed(format: string, detail: string): EngineError {
     'malformed_payload',
     `The ${format} payload provided is malformed. ${detail}`,
   );
+}
+
+/** Whether valid JSON nests deeper than any document or query has reason to. */
+function isTooDeep(bytes: Buffer): boolean {
+  let depth = 0;
+  let inText = false;
+  for (let at = 0; at < bytes.length; at += 1) {
+    const byte = bytes[at];
+    if (inText) {
+      if (byte === BACKSLASH) at += 1;
+      else if (byte === QUOTE) inText = false;
+    } else if (byte === QUOTE) inText = true;
+    else if (byte === OPEN_BRACKET || byte === OPEN_BRACE) {
+      depth += 1;
+      if (depth > MAX_DEPTH) return true;
+    } else if (byte === CLOSE_BRACKET || byte === CLOSE_BRACE) depth -= 1;
+  }
+  return false;
 }
 
 function parseJson(text: string): Json {
@@ -66,8 +89,12 @@ export async function readBody(
   }
   const type = header.split(';')[0]?.trim().toLowerCase();
   const text = bytes.toString('utf8').replace(/^\uFEFF/, '');
-  if (type === 'application/json') return parseJson(text);
-  if (large && type === 'application/x-ndjson') return parseLines(text);
+  const isLines = large && type === 'application/x-ndjson';
+  if (type === 'application/json' || isLines) {
+    const value = isLines ? parseLines(text) : parseJson(text);
+    if (isTooDeep(bytes)) throw malformed('`json`', `It nests deeper than ${MAX_DEPTH} levels.`);
+    return value;
+  }
   throw new EngineError(
     'invalid_content_type',
     `The Content-Type \`${header}\` is invalid. Accepted values for the Content-Type header are: ${accepted}`,

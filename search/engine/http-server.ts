@@ -13,8 +13,9 @@ async function answer(
   routes: readonly Route[],
   request: IncomingMessage,
 ): Promise<RouteAnswer> {
-  const { pathname, searchParams } = new URL(request.url ?? '/', 'http://engine.invalid');
-  const match = matchRoute(routes, request.method ?? 'GET', pathname);
+  const [path = '/', ...queryParts] = (request.url ?? '/').split('?');
+  const query = new URLSearchParams(queryParts.join('?'));
+  const match = matchRoute(routes, request.method ?? 'GET', path);
   if (match.kind === 'unknown') return { status: 404 };
   if (match.kind === 'wrong-method') return { status: 405 };
   const { route, params } = match;
@@ -28,7 +29,7 @@ async function answer(
   if (indexUid !== undefined && !mayUseIndex(access, indexUid)) throw invalidApiKey();
   const body =
     request.method === 'GET' ? undefined : await readBody(request, route.largeBody ?? false);
-  return route.handle({ engine, access, params, query: searchParams, body });
+  return route.handle({ engine, access, params, query, body });
 }
 
 function send(response: ServerResponse, { status, body }: RouteAnswer): void {

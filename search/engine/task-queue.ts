@@ -36,7 +36,14 @@ export async function enqueueTask(
   engine.state.nextTaskUid += 1;
   engine.state.tasks.set(task.uid, task);
   engine.state.payloads.set(task.uid, payload);
-  await engine.storage.append({ kind: 'task', task, payload });
+  try {
+    await engine.storage.append({ kind: 'task', task, payload });
+  } catch (error) {
+    // Not on the disk, so never promised to anyone; it must not hold up what comes after.
+    engine.state.tasks.delete(task.uid);
+    engine.state.payloads.delete(task.uid);
+    throw error;
+  }
   engine.durableTasks.add(task.uid);
   if (payload.type === 'taskCancelation') engine.queue.urgent.push(task.uid);
   wakeQueue(engine);

@@ -23,9 +23,14 @@ export function createTextMatcher(
   isKnownWord: (word: string) => boolean,
 ): TextMatcher {
   const whole = new Map<string, number>();
-  const sequences: { words: (string | null)[]; unit: number }[] = [];
+  const sequences = new Map<string | null, { words: (string | null)[]; unit: number }[]>();
   for (const edge of graph.edges) {
-    for (const words of edge.sequences) sequences.push({ words, unit: edge.from });
+    for (const words of edge.sequences) {
+      const [start = null] = words;
+      const list = sequences.get(start) ?? [];
+      list.push({ words, unit: edge.from });
+      sequences.set(start, list);
+    }
     if (edge.kind === 'prefix') continue;
     for (const word of edge.words) if (!whole.has(word)) whole.set(word, edge.from);
   }
@@ -57,7 +62,7 @@ export function createTextMatcher(
   ): { length: number; unit: number } | null {
     const first = tokens[at];
     if (first === undefined) return null;
-    for (const { words, unit } of sequences) {
+    for (const { words, unit } of sequences.get(first.word) ?? []) {
       const matches = words.every((word, offset) => {
         const token = tokens[at + offset];
         return (

@@ -158,8 +158,8 @@ describe('restarting', () => {
       .waitTask();
     await second.close();
     const third = await start();
-    const again = connect(third.url).index('notes');
-    expect((await again.search('')).hits.map((hit) => hit['id'])).toEqual([2, 1, 3]);
+    const again = connect(third.url).index<{ id: number }>('notes');
+    expect((await again.search('')).hits.map((hit) => hit.id)).toEqual([2, 1, 3]);
     expect(await again.getStopWords()).toEqual(['the']);
     await third.close();
   });
@@ -191,9 +191,9 @@ describe('the program', () => {
       expect((await again.tasks.waitForTask(taskUid)).status).toBe('succeeded');
     }
     expect((await again.index('notes').getStats()).numberOfDocuments).toBe(403);
-    expect((await again.index('notes').search('"word399"')).hits.map((hit) => hit['id'])).toEqual([
-      400,
-    ]);
+    expect(
+      (await again.index<{ id: number }>('notes').search('"word399"')).hits.map((hit) => hit.id),
+    ).toEqual([400]);
     after.child.kill('SIGTERM');
     expect(await exitOf(after.child)).toBe(0);
   }, 60_000);

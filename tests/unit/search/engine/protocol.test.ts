@@ -510,4 +510,25 @@ describe('searching', () => {
     ]);
     expect(await ids('copper')).toEqual([2, 4]);
   });
+
+  it('refuses documents nested without end, and still runs the writes that follow', async () => {
+    const answer = await fetch(`${engine.url}/indexes/deep/documents`, {
+      method: 'POST',
+      headers: { Authorization: `Bearer ${MASTER_KEY}`, 'Content-Type': 'application/json' },
+      body: `[{"id":1,"a":${'['.repeat(100_000)}${']'.repeat(100_000)}}]`,
+    });
+    expect(answer.status).toBe(400);
+    expect(await answer.json()).toMatchObject({ code: 'malformed_payload' });
+    const next = await client
+      .index('deep')
+      .addDocuments([{ id: 1 }])
+      .waitTask();
+    expect(next.status).toBe('succeeded');
+  });
+
+  it('answers strange addresses like unknown routes', async () => {
+    for (const path of ['//', '/%zz', '/indexes/a/b/c/d']) {
+      expect((await fetch(engine.url + path)).status).toBe(404);
+    }
+  });
 });
