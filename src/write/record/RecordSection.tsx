@@ -1,0 +1,218 @@
+import { useState } from 'react';
+import type { Reading } from '#shared/firing/types.ts';
+import { MAX_TYPED_ROWS } from '#shared/note/plan.ts';
+import { RecordError } from '#shared/record/record-error.ts';
+import type { RecordChoice } from '#shared/record/record-choice.ts';
+import { Button } from '../../ui/Button.tsx';
+import { ChoiceField } from '../../ui/ChoiceField.tsx';
+import { Fieldset } from '../../ui/Fieldset.tsx';
+import { Notice } from '../../ui/Notice.tsx';
+import { optionsOf } from '../../ui/options.ts';
+import { ProgressBar } from '../../ui/ProgressBar.tsx';
+import { useMessages } from '../../ui/useMessages.ts';
+import { useWriteForm } from '../form-context.ts';
+import { looksLikeTable, useFileDrop } from '../story/useFileDrop.ts';
+import { ChoiceForm } from './ChoiceForm.tsx';
+import { ChooseFile } from './ChooseFile.tsx';
+import { DraftRecordChart } from './DraftRecordChart.tsx';
+import { MarksEditor } from './MarksEditor.tsx';
+import { PasteRows } from './PasteRows.tsx';
+import { sourceOfFile, sourceOfReadings, type RecordSource } from './record-source.ts';
+import { StoredRecord } from './StoredRecord.tsx';
+import { TypedReadings } from './TypedReadings.tsx';
+import { useRecordSending } from './useRecordSending.ts';
+import { useRecordStatus } from './useRecordStatus.ts';
+
+const WAYS = { type: 'Type them', paste: 'Paste columns', file: 'Upload a file' } as const;
+type Way = keyof typeof WAYS;
+
+/** A table that waits to be confirmed; `again` is the stored record it is to be read anew for. */
+interface Candidate {
+  readonly source: RecordSource;
+  readonly again: number | null;
+}
+
+/** The temperature record: typed, pasted or uploaded, its marks, and what it shows. */
+export function RecordSection() {
+  const { fields, draft, keeper, change, units, editable, issuesAt } = useWriteForm();
+  const tell = useMessages();
+  const { recordId, typedRows } = fields.record;
+  const unit = units.temperature;
+  const [way, setWay] = useState<Way>('type');
+  const [replacing, setReplacing] = useState(false);
+  const [candidate, setCandidate] = useState<Candidate | null>(null);
+  const [refused, setRefused] = useState<string | null>(null);
+  const [looking, setLooking] = useState(false);
+  const { sending, sent, send, cancel, dismiss } = useRecordSending(draft.id, keeper);
+  const status = useRecordStatus(recordId);
+  const mayChoose = editable && sending.kind !== 'sending';
+
+  const look = async (file: File): Promise<void> => {
+    setLooking(true);
+    setRefused(null);
+    dismiss();
+    try {
+      setCandidate({ source: await sourceOfFile(file), again: null });
+    } catch (error) {
+      setCandidate(null);
+      setRefused(error instanceof RecordError ? error.message : 'This file could not be opened.');
+    } finally {
+      setLooking(false);
+    }
+  };
+  useFileDrop({
+    takes: looksLikeTable,
+    disabled: !mayChoose,
+    onFiles: ([file]) => {
+      if (!file) return;
+      setWay('file');
+      setReplacing(recordId !== null);
+      void look(file);
+    },
+  });
+
+  const confirm = async (source: RecordSource, choice: RecordChoice, again: number | null) => {
+    setCandidate(null);
+    setReplacing(false);
+    if (await send(source, choice, again)) {
+      tell({ kind: 'done', text: 'The record is with the server and is being read.' });
+    }
+  };
+  const takeReadings = (readings: readonly Reading[]): void => {
+    if (readings.length > MAX_TYPED_ROWS) {
+      const source = sourceOfReadings(readings);
+      void confirm(source, source.choice, null);
+      return;
+    }
+    const before = typedRows;
+    const put = (rows: typeof before) =>
+      change((now) => ({ ...now, record: { ...now.record, typedRows: rows } }));
+    put(readings.map(({ minute, celsius }) => ({ minute, celsius })));
+    setWay('type');
+    tell({
+      kind: 'done',
+      text: `${readings.length} readings taken over.`,
+      ...(before.length > 0 ? { action: { label: 'Undo', onClick: () => put(before) } } : {}),
+    });
+  };
+  const remove = (): void => {
+    const { levelAnswers } = fields.record;
+    const put = (record: Partial<typeof fields.record>) =>
+      change((now) => ({ ...now, record: { ...now.record, ...record } }));
+    put({ recordId: null, levelAnswers: [] });
+    tell({
+      kind: 'done',
+      text: 'The record is taken off this note.',
+      action: { label: 'Undo', onClick: () => put({ recordId, levelAnswers }) },
+    });
+  };
+
+  return (
+    <Fieldset
+      id="record"
+      legend="Record"
+      lead="Readings of the pyrometer, and what was done when. A note may go without, but then nothing can be read off it."
+      issues={issuesAt('/record')}
+    >
+      <div className="space-y-6">
+        {recordId !== null && (
+          <StoredRecord
+            status={status}
+            editable={mayChoose}
+            onChooseAgain={
+              sent?.recordId === recordId
+                ? () => setCandidate({ source: sent.source, again: recordId })
+                : null
+            }
+            onReplace={() => {
+              setReplacing(true);
+              setWay('file');
+            }}
+            onRemove={remove}
+          />
+        )}
+        {editable && (recordId === null || replacing) && sending.kind === 'idle' && (
+          <div className="space-y-3">
+            <ChoiceField
+              label={recordId === null ? 'Readings' : 'Replace by'}
+              required
+              value={way}
+              onValue={(next) => next && setWay(next)}
+              options={optionsOf(WAYS).filter(({ value }) => recordId === null || value !== 'type')}
+            />
+            {way === 'paste' && candidate === null && (
+              <PasteRows
+                unit={unit}
+                onReadings={takeReadings}
+                onTable={(source) => setCandidate({ source, again: null })}
+              />
+            )}
+            {way === 'file' && candidate === null && (
+              <ChooseFile onFile={(file) => void look(file)} busy={looking} />
+            )}
+            {replacing && (
+              <Button
+                kind="quiet"
+                onClick={() => {
+                  setReplacing(false);
+                  setCandidate(null);
+                }}
+              >
+                Keep the record as it is
+              </Button>
+            )}
+          </div>
+        )}
+        {refused !== null && (
+          <Notice kind="error" heading="This file cannot be a record" appeared>
+            {refused}
+          </Notice>
+        )}
+        {candidate && (
+          <ChoiceForm
+            source={candidate.source}
+            onSource={(source) => setCandidate({ ...candidate, source })}
+            unit={unit}
+            onConfirm={(choice) => void confirm(candidate.source, choice, candidate.again)}
+            onCancel={() => setCandidate(null)}
+          />
+        )}
+        {sending.kind === 'sending' && (
+          <ProgressBar
+            label="The record is being sent"
+            done={sending.share}
+            of={1}
+            cancel={<Button onClick={cancel}>Cancel</Button>}
+          />
+        )}
+        {sending.kind === 'failed' && (
+          <Notice
+            kind="error"
+            heading="The record was not sent"
+            appeared
+            action={
+              <>
+                <Button kind="main" icon="retry" onClick={sending.retry}>
+                  Try again
+                </Button>
+                <Button onClick={dismiss}>Leave it</Button>
+              </>
+            }
+          >
+            {sending.reason}
+          </Notice>
+        )}
+        {recordId === null && (way === 'type' || !editable) && candidate === null && (
+          <TypedReadings onTooMany={takeReadings} />
+        )}
+        {recordId !== null && typedRows.length > 0 && (
+          <p className="max-w-measure text-small text-soot-2">
+            {typedRows.length} typed readings are kept as well, and count only without this record.
+          </p>
+        )}
+        <DraftRecordChart record={status.record} />
+        <MarksEditor />
+      </div>
+    </Fieldset>
+  );
+}

@@ -1,0 +1,171 @@
+import type { Reading } from '#shared/firing/types.ts';
+import { decodeRecordBytes } from '#shared/record/decode-record-bytes.ts';
+import { detectTable } from '#shared/record/detect-table.ts';
+import { parsePastedRows } from '#shared/record/parse-pasted-rows.ts';
+import type { SkippedLine } from '#shared/record/read-table.ts';
+import type { RecordChoice } from '#shared/record/record-choice.ts';
+import { RecordError } from '#shared/record/record-error.ts';
+import { RECORD_LIMITS } from '#shared/record/record-limits.ts';
+import { formatTemperature } from '#shared/units/temperature.ts';
+import type { TemperatureUnit } from '#shared/units/temperature.ts';
+
+/** A table that stands in this browser, before it is sent: its text and how to read it. */
+export interface RecordSource {
+  readonly text: string;
+  /** The file as it was chosen, to be sent byte for byte; null once its text was changed here. */
+  readonly file: Blob | null;
+  readonly fileName: string;
+  readonly source: 'file' | 'pasted';
+  readonly choice: RecordChoice;
+  readonly assumed: readonly string[];
+  /** Why the layout could not be found out; then it is chosen by hand. */
+  readonly undetected: string | null;
+  /** Lines taken out by hand, as the editor counts them. */
+  readonly leftOut: readonly number[];
+}
+
+const BY_HAND: RecordChoice = {
+  delimiter: ',',
+  decimal: '.',
+  headerLine: null,
+  timeColumn: 0,
+  timeFormat: 'minutes',
+  temperatureColumn: 1,
+  secondColumn: null,
+  unit: 'C',
+};
+
+/** A table's text with what was found out about its layout, or why nothing was. */
+export function sourceOf(
+  text: string,
+  fileName: string,
+  source: RecordSource['source'],
+  file: Blob | null = null,
+): RecordSource {
+  const shared = { text, file, fileName, source, leftOut: [] };
+  try {
+    const { choice, assumed } = detectTable(text);
+    return { ...shared, choice, assumed, undetected: null };
+  } catch (error) {
+    if (!(error instanceof RecordError)) throw error;
+    return { ...shared, choice: BY_HAND, assumed: [], undetected: error.message };
+  }
+}
+
+/**
+ * Reads a chosen file in this browser.
+ * @throws RecordError for what is no table of text at all
+ */
+export async function sourceOfFile(file: File): Promise<RecordSource> {
+  if (file.size === 0) throw new RecordError('This file is empty.');
+  if (file.size > RECORD_LIMITS.bytes) {
+    throw new RecordError('The file is larger than 10 MiB, the most a record may be.');
+  }
+  const bytes = new Uint8Array(await file.arrayBuffer());
+  // A spreadsheet's own file is a ZIP (PK) or an older compound file (D0 CF 11 E0).
+  const [a, b, c, d] = bytes;
+  if ((a === 0x50 && b === 0x4b) || (a === 0xd0 && b === 0xcf && c === 0x11 && d === 0xe0)) {
+    throw new RecordError(
+      'This is a spreadsheet’s own file. Save the table as CSV and choose that.',
+    );
+  }
+  return sourceOf(decodeRecordBytes(bytes), file.name || 'record.csv', 'file', file);
+}
+
+/** Readings that are too many to be typed rows, as a table of our own. */
+export function sourceOfReadings(readings: readonly Reading[]): RecordSource {
+  const lines = readings.map(({ minute, celsius }) => `${minute},${celsius}`);
+  return {
+    text: `minute,celsius\n${lines.join('\n')}\n`,
+    file: null,
+    fileName: 'pasted.csv',
+    source: 'pasted',
+    choice: { ...BY_HAND, headerLine: 1 },
+    assumed: [],
+    undetected: null,
+    leftOut: [],
+  };
+}
+
+/** The source without one line: it is made a comment, so the file still says what stood there. */
+export function leaveOut(source: RecordSource, line: number): RecordSource {
+  let at = 0;
+  for (let passed = 1; passed < line; passed += 1) {
+    const end = lineEnd(source.text, at);
+    if (end >= source.text.length) return source;
+    at = source.text.startsWith('\r\n', end) ? end + 2 : end + 1;
+  }
+  return {
+    ...source,
+    text: `${source.text.slice(0, at)}# left out: ${source.text.slice(at)}`,
+    file: null,
+    leftOut: [...source.leftOut, line],
+  };
+}
+
+/** What stands on a line, shortened for showing. */
+export function lineAt(text: string, line: number): string {
+  let at = 0;
+  for (let passed = 1; passed < line; passed += 1) {
+    const end = lineEnd(text, at);
+    if (end >= text.length) return '';
+    at = text.startsWith('\r\n', end) ? end + 2 : end + 1;
+  }
+  const words = text.slice(at, lineEnd(text, at));
+  return words.length > 120 ? `${words.slice(0, 120)}…` : words;
+}
+
+function lineEnd(text: string, from: number): number {
+  for (let at = from; at < text.length; at += 1) {
+    const code = text.charCodeAt(at);
+    if (code === 10 || code === 13) return at;
+  }
+  return text.length;
+}
+
+/** "18 °C to 1012 °C", in words for a preview. */
+export function spanWords(readings: readonly Reading[], unit: TemperatureUnit): string {
+  let low = Infinity;
+  let high = -Infinity;
+  for (const { celsius } of readings) {
+    low = Math.min(low, celsius);
+    high = Math.max(high, celsius);
+  }
+  return `${formatTemperature(low, unit)} to ${formatTemperature(high, unit)}`;
+}
+
+export type PastedText =
+  | {
+      readonly kind: 'rows';
+      readonly readings: readonly Reading[];
+      readonly skipped: readonly SkippedLine[];
+    }
+  | { readonly kind: 'table'; readonly source: RecordSource }
+  | { readonly kind: 'unreadable'; readonly because: string };
+
+/** Of lines that say nothing clear, a tenth may be skipped before the text is taken for a table. */
+const SKIPPED_SHARE = 0.1;
+
+/**
+ * Pasted text as rows of a minute and a temperature; else as a table whose layout is to be
+ * confirmed. Words above the first reading are column names, and name units: then it is a table.
+ */
+export function readPasted(text: string, unit: TemperatureUnit): PastedText {
+  try {
+    const { readings, skipped } = parsePastedRows(text, unit);
+    const isNamed = skipped[0]?.line === 1;
+    const few = skipped.length <= Math.max(1, readings.length * SKIPPED_SHARE);
+    if (readings.length > 0 && few && !isNamed) return { kind: 'rows', readings, skipped };
+    const source = sourceOf(text, 'pasted.csv', 'pasted');
+    if (source.undetected === null) return { kind: 'table', source };
+    if (readings.length > 0) return { kind: 'rows', readings, skipped };
+    const first = skipped[0];
+    return {
+      kind: 'unreadable',
+      because: first ? `Line ${first.line}: ${first.reason}.` : source.undetected,
+    };
+  } catch (error) {
+    if (!(error instanceof RecordError)) throw error;
+    return { kind: 'unreadable', because: error.message };
+  }
+}
