@@ -2,13 +2,14 @@ import { z } from 'zod';
 import { roleBodySchema, suspendBodySchema } from '#shared/api/admin.ts';
 import type { Done } from '#shared/api/accounts.ts';
 import { requireConfirmed, signedIn } from '../accounts/signed-in.ts';
-import { defineRoute, type Route } from '../http/define-route.ts';
+import { defineRoute, reply, type Route } from '../http/define-route.ts';
 import { idParams, pageQuery } from '../http/ids.ts';
 import { listCaughtMails } from '../mail/read-caught.ts';
 import { listAuditLog } from './audit-list.ts';
 import { listMembers } from './member-list.ts';
 import { changeRole, setSuspended } from './member-rights.ts';
 import { readOutboxState, retryJob } from './outbox-state.ts';
+import { cancelReindex, readReindex, startReindex } from './reindexing.ts';
 
 const done = (message: string): Done => ({ message });
 const CAUGHT_MAILS_SHOWN = 100;
@@ -81,6 +82,31 @@ export const adminRoutes: readonly Route[] = [
       await retryJob(db, params.id);
       return done('It is tried again now.');
     },
+  }),
+  defineRoute({
+    method: 'get',
+    path: '/api/admin/reindex',
+    access: 'admin',
+    handle: ({ deps }) => readReindex(deps),
+  }),
+  defineRoute({
+    method: 'post',
+    path: '/api/admin/reindex',
+    access: 'admin',
+    handle: ({ deps, actor, request }) => {
+      const state = startReindex(deps);
+      deps.log.info(
+        { requestId: request.requestId, event: 'reindex', memberId: signedIn(actor).id },
+        'reindex started',
+      );
+      return reply(202, state);
+    },
+  }),
+  defineRoute({
+    method: 'delete',
+    path: '/api/admin/reindex',
+    access: 'admin',
+    handle: ({ deps }) => cancelReindex(deps),
   }),
   defineRoute({
     method: 'get',

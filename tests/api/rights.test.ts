@@ -74,7 +74,9 @@ const RIGHTS: Readonly<Record<string, Access>> = {
   'post /api/admin/outbox/:id/retry': 'admin',
   'get /api/admin/mail': 'admin',
   'get /api/admin/audit': 'admin',
+  'get /api/admin/reindex': 'admin',
   'post /api/admin/reindex': 'admin',
+  'delete /api/admin/reindex': 'admin',
 };
 
 const RANK: Record<Access, number> = { anyone: 0, member: 1, moderator: 2, admin: 3 };

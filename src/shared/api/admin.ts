@@ -44,6 +44,19 @@ export const outboxStateSchema = z.object({
 });
 export type OutboxState = z.infer<typeof outboxStateSchema>;
 
+/** Making the index anew from the database, which goes on in the background. */
+export const reindexStateSchema = z.object({
+  running: z.boolean(),
+  /** Notes put into the new index so far, of those that are to be. */
+  done: z.number(),
+  of: z.number(),
+  /** How the last one since the server's start ended. */
+  last: z
+    .object({ outcome: z.enum(['finished', 'cancelled', 'failed']), at: z.iso.datetime() })
+    .nullable(),
+});
+export type ReindexState = z.infer<typeof reindexStateSchema>;
+
 export const caughtMailsSchema = z.object({
   /** False when a real SMTP server is configured: then nothing is caught here. */
   catching: z.boolean(),
