@@ -21,11 +21,10 @@ function leavesOf(value: unknown, pointer: string, into: Leaves): void {
     for (const [key, inner] of Object.entries(value)) {
       if (key !== 'key') leavesOf(inner, `${pointer}/${key}`, into);
     }
-  } else if (value !== null && value !== '' && value !== undefined) {
-    into.set(
-      pointer,
-      typeof value === 'boolean' ? (value ? 'yes' : 'no') : String(value as string | number),
-    );
+  } else if (typeof value === 'boolean') {
+    into.set(pointer, value ? 'yes' : 'no');
+  } else if (typeof value === 'number' || (typeof value === 'string' && value !== '')) {
+    into.set(pointer, String(value));
   }
 }
 

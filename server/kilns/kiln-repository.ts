@@ -99,7 +99,7 @@ export async function kilnsOf(db: Knex, memberId: number): Promise<KilnRow[]> {
 export async function hasPublishedFirings(db: Knex, kilnId: number): Promise<boolean> {
   const row = await db('published_firings')
     .where('published_firings.kiln_id', kilnId)
-    .first('published_firings.note_id');
+    .first<{ note_id: number } | undefined>('published_firings.note_id');
   return row !== undefined;
 }
 

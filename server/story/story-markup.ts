@@ -44,7 +44,7 @@ export function storyMarkup(story: Story, pictures: readonly Picture[]): string 
     (block.content ?? [])
       .map((child) =>
         child.type === 'text' || child.type === 'hardBreak'
-          ? inlineMarkup(child as StoryInline)
+          ? inlineMarkup(child)
           : blockMarkup(child),
       )
       .join('');

@@ -56,10 +56,3 @@ export function insideVolumeLitres(kiln: KilnFields): number | null {
   }
   return null;
 }
-
-export type KilnSize = 'small' | 'medium' | 'large';
-/** Size classes for filters: under 40 l, under 100 l, and above (our own division). */
-export function kilnSizeOf(litres: number | null): KilnSize | null {
-  if (litres == null) return null;
-  return litres < 40 ? 'small' : litres < 100 ? 'medium' : 'large';
-}
