@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import express, { type Request, type RequestHandler, type Response, type Router } from 'express';
 import type { Knex } from 'knex';
 import type { z } from 'zod';
+import { clientOf, takeTry, type ThrottleRule } from '../accounts/throttle.ts';
 import type { Actor, SignedIn } from '../authorization/actor.ts';
 import type { Deps } from '../deps.ts';
 import { inTransaction } from '../database/transaction.ts';
@@ -59,6 +60,8 @@ export interface RouteSpec<
   readonly body?: Body;
   /** A create: the same Idempotency-Key gives the first answer again (members only). */
   readonly idempotent?: boolean;
+  /** How often one member, or one client address of visitors, may ask. */
+  readonly rate?: ThrottleRule;
   /** Handlers between the access check and the parsing, e.g. an upload. */
   readonly before?: (deps: Deps) => RequestHandler[];
   /** Public answers may be kept by the browser for re-validation; all else is `no-store`. */
@@ -115,10 +118,14 @@ function parse(
 }
 
 const jsonBody = express.json({ limit: '256kb', strict: true });
+/** A body of another type is refused, also where none is read: forms of other sites send such. */
 const requireJson: RequestHandler = (request, _response, next) => {
   if (request.is('application/json') === false) throw new AppError('wrong-type', 'Send JSON.');
   next();
 };
+
+const whoAsks = (request: Request): string =>
+  request.actor.kind === 'member' ? `member ${String(request.actor.id)}` : clientOf(request.ip);
 
 const isUnsafe = (method: Method): boolean => method !== 'get';
 
@@ -132,9 +139,10 @@ export function defineRoute<
   Body extends z.ZodType | undefined = undefined,
 >(spec: RouteSpec<Params, Query, Body>): Route {
   const mount = (router: Router, deps: Deps): void => {
-    const admit: RequestHandler = (request, _response, next) => {
+    const admit: RequestHandler = async (request, _response, next) => {
       requireAccess(request.actor, spec.access);
       if (isUnsafe(spec.method)) checkOwnOrigin(request, deps.config.publicUrl);
+      if (spec.rate) await takeTry(deps.db, spec.rate, whoAsks(request));
       next();
     };
     const run: RequestHandler = async (request, response) => {
@@ -170,7 +178,9 @@ export function defineRoute<
           : await handle(deps.db);
       send(response, answer);
     };
-    const before = spec.before?.(deps) ?? (spec.body ? [requireJson, jsonBody] : []);
+    const before =
+      spec.before?.(deps) ??
+      (spec.body ? [requireJson, jsonBody] : isUnsafe(spec.method) ? [requireJson] : []);
     router[spec.method](spec.path, admit, ...before, run);
   };
   return { method: spec.method, path: spec.path, access: spec.access, mount };

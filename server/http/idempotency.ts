@@ -34,11 +34,12 @@ export async function recallOrRemember(
     });
   } catch (error) {
     if (!isDuplicate(error, 'PRIMARY')) throw error;
-    // Locking read: sees what the first request committed after our snapshot began.
+    // A locking read sees what the first request committed after our snapshot began. Shared, as the
+    // refused insert already holds it: several repeats would block one another over an exclusive one.
     const first = await trx('idempotency_keys')
       .select('body_hash', 'route', 'status', 'answer')
       .where(row)
-      .forUpdate()
+      .forShare()
       .first<{ body_hash: string; route: string; status: number | null; answer: unknown }>();
     if (!first) throw new AppError('conflict');
     if (first.body_hash !== request.bodyHash || first.route !== request.route.slice(0, 120)) {

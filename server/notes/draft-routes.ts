@@ -4,6 +4,7 @@ import { lastDecision, remarksForAuthor } from '../desk/remark-repository.ts';
 import { defineRoute, memberOf, reply, type Context, type Route } from '../http/define-route.ts';
 import { versionFromIfMatch, versionTag } from '../http/entity-version.ts';
 import { idParams, idSchema } from '../http/ids.ts';
+import { RATES } from '../http/rates.ts';
 import { markMended } from '../desk/remark-service.ts';
 import { picturesOfNote } from '../pictures/picture-repository.ts';
 import { findKiln } from '../kilns/kiln-repository.ts';
@@ -35,6 +36,7 @@ export const draftRoutes: readonly Route[] = [
     access: 'member',
     body: newNoteBodySchema,
     idempotent: true,
+    rate: RATES.newNotes,
     async handle(context) {
       const { db, actor, body } = context;
       const kiln = body.kilnId === null ? null : await findKiln(db, body.kilnId);

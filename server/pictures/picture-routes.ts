@@ -6,6 +6,7 @@ import type { Deps } from '../deps.ts';
 import { defineRoute, memberOf, reply, type Route } from '../http/define-route.ts';
 import { idParams } from '../http/ids.ts';
 import { AppError } from '../http/problem.ts';
+import { RATES } from '../http/rates.ts';
 import { readSingleUpload, uploadOf } from '../http/single-upload.ts';
 import {
   addNotePicture,
@@ -38,6 +39,7 @@ export const pictureRoutes: readonly Route[] = [
     path: '/api/notes/:id/pictures',
     access: 'member',
     params: idParams,
+    rate: RATES.uploads,
     before: uploadAfter(requireEditableNote),
     async handle({ db, deps, actor, params, request }) {
       const { bytes } = uploadOf(request);
@@ -49,6 +51,7 @@ export const pictureRoutes: readonly Route[] = [
     path: '/api/kilns/:id/picture',
     access: 'member',
     params: idParams,
+    rate: RATES.uploads,
     before: uploadAfter(requireEditableKiln),
     async handle({ db, deps, actor, params, request }) {
       const { bytes } = uploadOf(request);

@@ -4,35 +4,42 @@ import type { TableReadings } from '#shared/record/read-table.ts';
 import { inTransaction } from '../database/transaction.ts';
 import type { Deps } from '../deps.ts';
 import { storeContent } from './record-content.ts';
-import { findRecordById, markFailed, markReady } from './record-repository.ts';
+import { findRecordById, lockRecord, markFailed, markReady } from './record-repository.ts';
 
 const LIMIT_MILLISECONDS = 20_000;
 const MEMORY_MEGABYTES = 512;
 
-type Outcome =
-  | { read: TableReadings; error?: undefined }
+/** What the thread answers: readings, or what is wrong with the file. */
+export type ReadOutcome =
+  | { read: Omit<TableReadings, 'rowCount'> & { skippedCount: number }; error?: undefined }
   | { read?: undefined; error: { message: string; line: number | null } };
 
 /** Reads the bytes on a thread of their own, so that no file can hold up the page server. */
-function readOnThread(bytes: Uint8Array, choice: RecordChoice): Promise<Outcome> {
+function readOnThread(bytes: Uint8Array, choice: RecordChoice): Promise<ReadOutcome> {
   return new Promise((resolve, reject) => {
-    const worker = new Worker(new URL('./record-worker.ts', import.meta.url), {
+    const worker = new Worker(new URL('./record-thread.mjs', import.meta.url), {
       workerData: { bytes, choice },
-      execArgv: ['--import', 'tsx'],
+      execArgv: [],
       resourceLimits: { maxOldGenerationSizeMb: MEMORY_MEGABYTES },
     });
     const timer = setTimeout(() => {
       resolve({ error: { message: 'This file took too long to read.', line: null } });
       void worker.terminate();
     }, LIMIT_MILLISECONDS);
-    worker.once('message', (outcome: Outcome) => {
+    worker.once('message', (outcome: ReadOutcome) => {
       clearTimeout(timer);
       resolve(outcome);
       void worker.terminate();
     });
-    worker.once('error', (error) => {
+    worker.once('error', (error: NodeJS.ErrnoException) => {
       clearTimeout(timer);
-      reject(error);
+      if (error.code === 'ERR_WORKER_OUT_OF_MEMORY') {
+        resolve({
+          error: { message: 'This file takes more memory to read than one may.', line: null },
+        });
+      } else {
+        reject(error);
+      }
     });
   });
 }
@@ -53,20 +60,27 @@ export async function readRecord(deps: Deps, recordId: number): Promise<void> {
   const record = await findRecordById(deps.db, recordId);
   if (record?.status !== 'reading' || record.storageKey === null) return;
   const bytes = await bytesOf(deps, record.storageKey);
-  const outcome: Outcome = bytes
+  const outcome: ReadOutcome = bytes
     ? await readOnThread(bytes, record.choice)
     : { error: { message: 'The file is gone; upload it again.', line: null } };
   await inTransaction(deps.db, async (trx) => {
+    // Chosen anew while this was read: the job of that choice reads it again.
+    const now = await lockRecord(trx, recordId);
+    if (now?.status !== 'reading' || !isSameChoice(now.choice, record.choice)) return;
     if (!outcome.read) {
       await markFailed(trx, recordId, outcome.error);
       return;
     }
-    const { readings, secondProbe, assumed, skipped } = outcome.read;
+    const { readings, secondProbe, assumed, skipped, skippedCount } = outcome.read;
     await markReady(trx, recordId, {
       contentId: await storeContent(trx, { readings, secondProbe }),
       unit: record.choice.unit,
       assumed,
       skipped,
+      skippedCount,
     });
   });
 }
+
+const isSameChoice = (a: RecordChoice, b: RecordChoice): boolean =>
+  (Object.keys(a) as (keyof RecordChoice)[]).every((part) => a[part] === b[part]);

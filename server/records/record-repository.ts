@@ -97,6 +97,12 @@ export async function findRecordById(db: Knex, recordId: number): Promise<Record
   return row ? toRow(row) : null;
 }
 
+/** The same with its row locked until the transaction ends. */
+export async function lockRecord(trx: Knex, recordId: number): Promise<RecordRow | null> {
+  const [row] = await selectRecords(trx).where('records.id', recordId).forUpdate('records');
+  return row ? toRow(row) : null;
+}
+
 export async function insertRecord(
   trx: Knex,
   record: {
@@ -138,7 +144,9 @@ export async function markReady(
     contentId: number;
     unit: string;
     assumed: readonly string[];
+    /** The first of them, and how many there are. */
     skipped: readonly { line: number; reason: string }[];
+    skippedCount: number;
   },
 ): Promise<void> {
   await trx('records')
@@ -148,8 +156,8 @@ export async function markReady(
       content_id: read.contentId,
       unit: read.unit,
       assumed: JSON.stringify(read.assumed),
-      skipped: JSON.stringify(read.skipped.slice(0, 100)),
-      skipped_count: read.skipped.length,
+      skipped: JSON.stringify(read.skipped),
+      skipped_count: read.skippedCount,
       error: null,
     });
 }

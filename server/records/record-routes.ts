@@ -4,6 +4,7 @@ import { recordChoiceSchema } from '#shared/record/record-choice.ts';
 import { defineRoute, pointersOf, reply, type Route } from '../http/define-route.ts';
 import { idParams, idSchema } from '../http/ids.ts';
 import { AppError } from '../http/problem.ts';
+import { RATES } from '../http/rates.ts';
 import { readSingleUpload, uploadOf } from '../http/single-upload.ts';
 import { ownNote } from '../notes/draft-service.ts';
 import { requireEditableNote } from '../pictures/picture-service.ts';
@@ -41,6 +42,7 @@ export const recordRoutes: readonly Route[] = [
     path: '/api/notes/:id/records',
     access: 'member',
     params: idParams,
+    rate: RATES.uploads,
     before: (deps) => [
       async (request, _response, next) => {
         const params = idParams.safeParse(request.params);
@@ -98,6 +100,7 @@ export const recordRoutes: readonly Route[] = [
     method: 'get',
     path: '/api/notes/:id/record.csv',
     access: 'anyone',
+    rate: RATES.exports,
     params: idParams,
     query: ofQuery,
     async handle({ db, actor, params, query, response }) {

@@ -64,51 +64,55 @@ export async function find(
     label: labelOf(part, units),
     off: off.has(part.key),
   }));
-  const pooled = pooledAnswer(db, asked);
-  try {
-    const answer = await searchEngine(deps.config, asked, chosenFacets(query));
-    const ordered = inOrder(answer.hits, asked, query.sort);
-    const shown = ordered.slice((query.page - 1) * A_PAGE, query.page * A_PAGE);
-    // Only what is published now is shown, whatever the index still holds.
-    const rows = new Map(
-      (
-        await publishedRows(
-          db,
-          shown.map((hit) => hit.document.noteId),
-        )
-      ).map((row) => [row.id, row]),
-    );
-    const hits = shown.flatMap((hit): Hit[] => {
-      const note = rows.get(hit.document.noteId);
-      if (!note) return [];
-      const passage = passageOf(hit.marked);
-      return [
-        {
-          note,
-          tier: hit.tier,
-          why:
-            query.q.trim() === ''
-              ? ''
-              : whyFound(asked, hit.document, hit.tier, units, hitWords(passage)),
-          passage,
-        },
-      ];
-    });
-    return {
-      parts,
-      hits,
-      total: ordered.length,
-      page: query.page,
-      pages: Math.max(1, Math.ceil(ordered.length / A_PAGE)),
-      facets: answer.facets,
-      pooled: await pooled,
-      loosen: ordered.length === 0 ? await looser(deps, question, units) : [],
-      plain: false,
-    };
-  } catch (error) {
-    deps.log.warn({ err: error }, 'the engine is away: plain search');
-    return { ...(await findPlainly(db, query, asked)), parts, pooled: await pooled };
+  const chosen = chosenFacets(query);
+  const [pooled, answer] = await Promise.all([
+    pooledAnswer(db, asked),
+    searchEngine(deps.config, asked, chosen).catch((error: unknown) => {
+      deps.log.warn({ err: error }, 'the engine is away: plain search');
+      return null;
+    }),
+  ]);
+  if (answer === null) {
+    return { ...(await findPlainly(db, query, asked)), parts, pooled };
   }
+  const ordered = inOrder(answer.hits, asked, query.sort);
+  const shown = ordered.slice((query.page - 1) * A_PAGE, query.page * A_PAGE);
+  // Only what is published now is shown, whatever the index still holds.
+  const rows = new Map(
+    (
+      await publishedRows(
+        db,
+        shown.map((hit) => hit.document.noteId),
+      )
+    ).map((row) => [row.id, row]),
+  );
+  const hits = shown.flatMap((hit): Hit[] => {
+    const note = rows.get(hit.document.noteId);
+    if (!note) return [];
+    const passage = passageOf(hit.marked);
+    return [
+      {
+        note,
+        tier: hit.tier,
+        why:
+          query.q.trim() === ''
+            ? ''
+            : whyFound(asked, hit.document, hit.tier, units, hitWords(passage)),
+        passage,
+      },
+    ];
+  });
+  return {
+    parts,
+    hits,
+    total: ordered.length,
+    page: query.page,
+    pages: Math.max(1, Math.ceil(ordered.length / A_PAGE)),
+    facets: answer.facets,
+    pooled,
+    loosen: ordered.length === 0 ? await looser(deps, question, units).catch(() => []) : [],
+    plain: false,
+  };
 }
 
 async function findPlainly(

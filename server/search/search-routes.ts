@@ -4,6 +4,7 @@ import { METRIC_UNITS, type Units } from '#shared/units/units.ts';
 import type { Actor } from '../authorization/actor.ts';
 import { findAccountById } from '../accounts/account-repository.ts';
 import { defineRoute, type Route } from '../http/define-route.ts';
+import { RATES } from '../http/rates.ts';
 import { find } from './find-service.ts';
 import { suggest } from './suggest-service.ts';
 
@@ -20,6 +21,7 @@ export const searchRoutes: readonly Route[] = [
     method: 'get',
     path: '/api/search',
     access: 'anyone',
+    rate: RATES.searches,
     query: findQuerySchema,
     handle: async ({ db, deps, actor, query }) => find(db, deps, query, await unitsOf(db, actor)),
   }),

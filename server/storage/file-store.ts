@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import { mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
+import { mkdir, open, rename, rm, rmdir, stat } from 'node:fs/promises';
 import path from 'node:path';
 import type { Readable } from 'node:stream';
 
@@ -62,10 +62,9 @@ export function diskStore(folder: string): FileStore {
     },
     async remove(prefix) {
       await rm(locate(prefix), { recursive: true, force: true });
+      // The folder of a picture goes with its last file; rmdir leaves one alone that is not empty.
       const parent = path.dirname(locate(prefix));
-      if (parent !== root && (await readdir(parent).catch(() => ['kept'])).length === 0) {
-        await rm(parent, { recursive: true, force: true });
-      }
+      if (path.dirname(path.dirname(parent)) === root) await rmdir(parent).catch(() => undefined);
     },
   };
 }

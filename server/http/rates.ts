@@ -1,0 +1,11 @@
+import type { ThrottleRule } from '../accounts/throttle.ts';
+
+const MINUTE = 60;
+
+/** How often a member, or a visitor's address, may ask for what costs the server much. */
+export const RATES = {
+  newNotes: { name: 'new-note', limit: 30, windowSeconds: 60 * MINUTE },
+  uploads: { name: 'upload', limit: 60, windowSeconds: 30 * MINUTE },
+  searches: { name: 'search', limit: 60, windowSeconds: MINUTE },
+  exports: { name: 'export', limit: 10, windowSeconds: 60 * MINUTE },
+} as const satisfies Record<string, ThrottleRule>;
