@@ -4,11 +4,14 @@ import { noteFieldsSchema } from '#shared/note/note-fields.ts';
 import { z } from 'zod';
 import { OfflineError, ProblemError } from '../http/client.ts';
 import { saveDraft } from './draft-mutations.ts';
+import { sameFields } from './field-differences.ts';
 import { forgetUnsent, keepUnsent, unsentFor } from './unsent-work.ts';
 
 /** How long after the last key a save goes out, and how long until it is tried again. */
 const PAUSE_MILLISECONDS = 1200;
 const RETRY_MILLISECONDS = 8000;
+/** Unanswered saves remembered, to know them again if they arrived. */
+const MOST_UNHEARD = 12;
 
 export type SaveState =
   | { readonly kind: 'saved'; readonly at: string }
@@ -52,20 +55,21 @@ export class DraftKeeper {
   #timer: ReturnType<typeof setTimeout> | null = null;
   #saving: Promise<void> | null = null;
   #dirty = false;
+  /** Sent without an answer so far: a save may have arrived though its answer was lost. */
+  #unheard: NoteFields[] = [];
 
   constructor(memberId: number, draft: Draft) {
     this.#memberId = memberId;
     this.#kept = { fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } };
     const unsent = unsentFor(memberId, draft.id);
     if (!unsent || !draft.abilities.edit) return;
-    if (JSON.stringify(unsent.fields) === JSON.stringify(draft.fields)) {
+    if (sameFields(unsent.fields, draft.fields)) {
       forgetUnsent(memberId, draft.id);
       return;
     }
     this.#dirty = true;
     if (unsent.fromVersion === draft.version) {
       this.#kept = { ...this.#kept, fields: unsent.fields, state: { kind: 'waiting' } };
-      this.#schedule(PAUSE_MILLISECONDS);
     } else {
       this.#kept = {
         ...this.#kept,
@@ -89,6 +93,11 @@ export class DraftKeeper {
   /** True while something typed is not on the server. */
   get hasUnsent(): boolean {
     return this.#dirty;
+  }
+
+  /** Sends what was left unsent when the page was last closed. */
+  start(): void {
+    if (this.#dirty && this.#kept.state.kind === 'waiting') this.#schedule(PAUSE_MILLISECONDS);
   }
 
   /** Changes what is on the screen; kept here at once, sent soon. */
@@ -115,7 +124,8 @@ export class DraftKeeper {
   async flush(): Promise<void> {
     if (this.#timer !== null) clearTimeout(this.#timer);
     this.#timer = null;
-    if (this.#saving) await this.#saving;
+    // Several may wait for the same save; whoever goes on first starts the next.
+    while (this.#saving) await this.#saving;
     if (this.#dirty && this.#kept.state.kind !== 'conflict') {
       this.#saving = this.#save().finally(() => {
         this.#saving = null;
@@ -128,7 +138,20 @@ export class DraftKeeper {
   /** After an act of its own (hand in, a picture, a record): what the server has now. */
   accept(draft: Draft): void {
     if (this.#dirty) {
-      this.#set({ ...this.#kept, draft: { ...draft, fields: this.#kept.fields } });
+      const { fields, draft: before, state } = this.#kept;
+      const isSafe = draft.version === before.version || this.#isMineOrBase(draft.fields);
+      this.#set({
+        fields,
+        draft,
+        state: isSafe
+          ? state
+          : {
+              kind: 'conflict',
+              theirs: draft.fields,
+              theirVersion: draft.version,
+              theirsAt: draft.savedAt,
+            },
+      });
       return;
     }
     this.#set({ fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } });
@@ -138,7 +161,12 @@ export class DraftKeeper {
   settle(choice: 'mine' | 'theirs'): void {
     const { state } = this.#kept;
     if (state.kind !== 'conflict') return;
-    const draft = { ...this.#kept.draft, version: state.theirVersion };
+    const draft = {
+      ...this.#kept.draft,
+      version: state.theirVersion,
+      savedAt: state.theirsAt,
+      fields: state.theirs,
+    };
     if (choice === 'theirs') {
       this.#dirty = false;
       forgetUnsent(this.#memberId, draft.id);
@@ -154,6 +182,12 @@ export class DraftKeeper {
   close(): void {
     if (this.#timer !== null) clearTimeout(this.#timer);
     this.#timer = null;
+  }
+
+  /** What the server has is what was here before, or what a save brought there unheard. */
+  #isMineOrBase(theirs: NoteFields): boolean {
+    const { fields, draft } = this.#kept;
+    return [fields, draft.fields, ...this.#unheard].some((known) => sameFields(known, theirs));
   }
 
   #keepHere(fields: NoteFields): boolean {
@@ -177,9 +211,13 @@ export class DraftKeeper {
 
   async #save(): Promise<void> {
     const { draft, fields } = this.#kept;
+    this.#unheard = [...this.#unheard.filter((sent) => sent !== fields), fields].slice(
+      -MOST_UNHEARD,
+    );
     this.#set({ ...this.#kept, state: { kind: 'saving' } });
     try {
       const answer = await saveDraft(draft.id, draft.version, fields);
+      this.#unheard = [];
       const newer = this.#kept.fields !== fields;
       this.#dirty = newer;
       this.#set({
@@ -201,6 +239,23 @@ export class DraftKeeper {
   #failed(error: unknown): void {
     if (error instanceof ProblemError && error.problem.status === 412) {
       const current = staleSchema.safeParse(error.problem.current);
+      if (current.success && this.#isMineOrBase(current.data.fields)) {
+        // Nobody else wrote: only the version went on. Mine goes on top of it.
+        const { version, savedAt, fields } = current.data;
+        const draft = { ...this.#kept.draft, version, savedAt, fields };
+        this.#dirty = !sameFields(fields, this.#kept.fields);
+        if (!this.#dirty) forgetUnsent(this.#memberId, draft.id);
+        this.#set({
+          ...this.#kept,
+          draft,
+          state: this.#dirty ? { kind: 'waiting' } : { kind: 'saved', at: savedAt },
+        });
+        if (this.#dirty) {
+          this.#keepHere(this.#kept.fields);
+          this.#schedule(PAUSE_MILLISECONDS);
+        }
+        return;
+      }
       if (current.success) {
         this.#set({
           ...this.#kept,

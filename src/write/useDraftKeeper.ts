@@ -7,6 +7,7 @@ export function useDraftKeeper(memberId: number, draft: Draft): [KeptDraft, Draf
   const [keeper] = useState(() => new DraftKeeper(memberId, draft));
   const kept = useSyncExternalStore(keeper.subscribe, keeper.current);
   useEffect(() => {
+    keeper.start();
     const ask = (event: BeforeUnloadEvent): void => {
       if (keeper.hasUnsent) event.preventDefault();
     };
