@@ -120,7 +120,10 @@ function parse(
 const jsonBody = express.json({ limit: '256kb', strict: true });
 /** A body of another type is refused, also where none is read: forms of other sites send such. */
 const requireJson: RequestHandler = (request, _response, next) => {
-  if (request.is('application/json') === false) throw new AppError('wrong-type', 'Send JSON.');
+  const isEmpty = request.get('Content-Length') === '0' && !request.get('Transfer-Encoding');
+  if (!isEmpty && request.is('application/json') === false) {
+    throw new AppError('wrong-type', 'Send JSON.');
+  }
   next();
 };
 
