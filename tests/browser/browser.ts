@@ -9,18 +9,25 @@ export interface Visit {
   readonly context: BrowserContext;
   readonly page: Page;
 }
+export interface VisitOptions {
+  readonly width?: number;
+  readonly height?: number;
+  readonly theme?: 'light' | 'dark';
+  /** Signed in as this account from the start. */
+  readonly as?: DemoAccount;
+}
 export interface Visiting {
   readonly baseUrl: string;
+  readonly dataFolder: string;
   /** A browser window of its own, as one person's. */
-  readonly visit: (options?: {
-    width?: number;
-    height?: number;
-    theme?: 'light' | 'dark';
-  }) => Promise<Visit>;
+  readonly visit: (options?: VisitOptions) => Promise<Visit>;
   /** Signs in through the page, as people do. */
-  readonly signIn: (page: Page, account: DemoAccount) => Promise<void>;
-  /** A demo account with this role. */
-  readonly account: (role: string, which?: number) => DemoAccount;
+  readonly signIn: (
+    page: Page,
+    account: Pick<DemoAccount, 'name' | 'email' | 'password'>,
+  ) => Promise<void>;
+  /** The first demo account with this role or name. */
+  readonly account: (roleOrName: string) => DemoAccount;
   /** What went wrong in any window: script errors, refused content, requests to other hosts. */
   readonly faults: string[];
 }
@@ -42,55 +49,79 @@ function openBrowser(): Promise<Browser> {
   return browser;
 }
 
+type Kept = Awaited<ReturnType<BrowserContext['storageState']>>;
+/** Signing in once is enough for a whole file. */
+const keptSessions = new Map<string, Kept>();
+
 /** A browser test: windows are closed at its end, and faults on the way fail it. */
 export const test = base.extend<{ visiting: Visiting }>({
-  visiting: async ({}, use) => {
+  visiting: async ({ task }, use) => {
     const baseUrl = inject('baseUrl');
     const accounts = inject('demoAccounts');
     const opened: BrowserContext[] = [];
     const faults: string[] = [];
     const own = await openBrowser();
+
+    const watch = (page: Page): void => {
+      page.on('pageerror', (error) => faults.push(`script error: ${error.message}`));
+      page.on('console', (message) => {
+        const text = message.text();
+        if (message.type() === 'error' && /content security policy/i.test(text)) faults.push(text);
+      });
+      page.on('request', (request) => {
+        const url = new URL(request.url());
+        const isOwn = url.origin === baseUrl || ['data:', 'blob:'].includes(url.protocol);
+        if (!isOwn) faults.push(`request to ${url.origin}`);
+      });
+    };
+    const signIn: Visiting['signIn'] = async (page, account) => {
+      await page.goto('/sign-in');
+      await page.getByLabel('E-mail address').fill(account.email);
+      await page.getByLabel(/^Password/).fill(account.password);
+      await page.getByRole('button', { name: 'Sign in' }).click();
+      await page.getByRole('link', { name: account.name }).waitFor();
+    };
+    const visit: Visiting['visit'] = async ({
+      width = 1280,
+      height = 900,
+      theme = 'light',
+      as: account,
+    } = {}) => {
+      const storageState = account && keptSessions.get(account.email);
+      const context = await own.newContext({
+        baseURL: baseUrl,
+        viewport: { width, height },
+        colorScheme: theme,
+        locale: 'en-GB',
+        timezoneId: 'Europe/London',
+        reducedMotion: 'reduce',
+        ...(storageState ? { storageState } : {}),
+      });
+      opened.push(context);
+      context.on('page', watch);
+      const page = await context.newPage();
+      if (account && !storageState) {
+        await signIn(page, account);
+        keptSessions.set(account.email, await context.storageState());
+      }
+      return { context, page };
+    };
+
     await use({
       baseUrl,
+      dataFolder: inject('dataFolder'),
       faults,
-      account: (role, which = 0) => {
-        const found = accounts.filter((account) => account.role === role)[which];
-        if (!found) throw new Error(`The demo has no ${role} number ${String(which)}.`);
+      signIn,
+      visit,
+      account: (roleOrName) => {
+        const found = accounts.find(({ role, name }) => role === roleOrName || name === roleOrName);
+        if (!found) throw new Error(`The demo has no ${roleOrName}.`);
         return found;
-      },
-      visit: async ({ width = 1280, height = 900, theme = 'light' } = {}) => {
-        const context = await own.newContext({
-          baseURL: baseUrl,
-          viewport: { width, height },
-          colorScheme: theme,
-          locale: 'en-GB',
-          timezoneId: 'Europe/London',
-          reducedMotion: 'reduce',
-        });
-        opened.push(context);
-        const page = await context.newPage();
-        page.on('pageerror', (error) => faults.push(`script error: ${error.message}`));
-        page.on('console', (message) => {
-          const text = message.text();
-          if (message.type() === 'error' && /content security policy/i.test(text))
-            faults.push(text);
-        });
-        page.on('request', (request) => {
-          const url = new URL(request.url());
-          const own = url.origin === baseUrl || ['data:', 'blob:'].includes(url.protocol);
-          if (!own) faults.push(`request to ${url.origin}`);
-        });
-        return { context, page };
-      },
-      signIn: async (page, account) => {
-        await page.goto('/sign-in');
-        await page.getByLabel('E-mail').fill(account.email);
-        await page.getByLabel('Password').fill(account.password);
-        await page.getByRole('button', { name: 'Sign in' }).click();
-        await page.getByRole('link', { name: account.name }).waitFor();
       },
     });
     for (const context of opened) await context.close();
-    if (faults.length > 0) throw new Error(`Faults in the browser:\n${faults.join('\n')}`);
+    if (faults.length > 0) {
+      throw new Error(`Faults in the browser in “${task.name}”:\n${faults.join('\n')}`);
+    }
   },
 });
