@@ -160,9 +160,9 @@ function Results({ found, address, isSettled, hasTemperature, go }: ResultsProps
       <div className={hasFilters ? 'grid gap-x-10 gap-y-4 lg:grid-cols-[minmax(0,1fr)_13rem]' : ''}>
         {hasFilters &&
           (isWide ? (
-            <aside aria-label="Filters" className="order-2">
+            <div role="group" aria-label="Filters" className="order-2">
               {filters}
-            </aside>
+            </div>
           ) : (
             <details className="border-y border-line py-1">
               <summary className="flex min-h-11 items-center text-verdigris underline underline-offset-4">

@@ -34,11 +34,12 @@ export function NothingFound({ address, loosen, onLeaveOut, onClearFilters }: Pr
       }
     >
       {loosen.length > 0 || ticked > 0
-        ? 'Loosen one part of it:'
-        : 'Say it in other words, or with fewer.'}{' '}
+        ? 'Loosen one part of it, or look through'
+        : 'Say it in other words, or with fewer; or look through'}{' '}
       <Link to={paths.newest} className="link">
-        All notes, newest first
+        all notes, newest first
       </Link>
+      .
     </EmptyState>
   );
 }
