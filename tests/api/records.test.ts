@@ -1,0 +1,211 @@
+import { once } from 'node:events';
+import { connect } from 'node:net';
+import { describe, expect } from 'vitest';
+import { notePageSchema } from '#shared/api/notes.ts';
+import { recordPointsSchema, recordSchema } from '#shared/api/records.ts';
+import { createHandlers } from '../../server/outbox/handlers.ts';
+import { workOnce } from '../../server/outbox/worker.ts';
+import { readRecord } from '../../server/records/read-record.ts';
+import { test } from '../support/api.ts';
+import { addKiln, completeFields, decideOn, handIn, startNote } from '../support/notes.ts';
+import {
+  MINUTES_CELSIUS,
+  readUpload as read,
+  recordPath as pathOf,
+  uploadRecord,
+} from '../support/records.ts';
+
+/** A plain climb, `count` readings. */
+function climb(count: number, line = (minute: number, celsius: number) => `${minute},${celsius}`) {
+  return Array.from({ length: count }, (_, index) =>
+    line(index / 4, Math.round((20 + (980 * index) / count) * 10) / 10),
+  );
+}
+
+describe('an uploaded record', () => {
+  test('is promised to the outbox, read on its own thread, and then ready', async ({
+    committedApi: api,
+  }) => {
+    const author = await api.signedIn();
+    const draft = await startNote(author, null);
+    const answer = await uploadRecord(
+      author,
+      draft.id,
+      ['minute,celsius', ...climb(50)].join('\n'),
+    );
+    expect(answer.status).toBe(201);
+    const { id, status, count } = answer.as(recordSchema);
+    expect({ status, count }).toEqual({ status: 'reading', count: null });
+
+    const handlers = createHandlers(api.deps, {
+      readRecord,
+      indexNote: () => Promise.resolve(),
+    });
+    expect(await workOnce(api.deps, 'read-record', handlers['read-record'])).toBe(1);
+    const ready = (await author.get(pathOf(draft.id, id))).as(recordSchema);
+    expect(ready).toMatchObject({ status: 'ready', count: 50, unit: 'C', error: null });
+    expect(ready.strip?.length).toBeGreaterThan(10);
+    // Doing it twice changes nothing.
+    await readRecord(api.deps, id);
+    expect((await author.get(pathOf(draft.id, id))).as(recordSchema)).toEqual(ready);
+  });
+
+  test('that cannot be read says why and on which line, and can be chosen again', async ({
+    api,
+  }) => {
+    const author = await api.signedIn();
+    const draft = await startNote(author, null);
+    const lines = climb(30, (minute, celsius) => `${celsius};${minute}`);
+    lines[19] = '640.5;ten past';
+    const file = ['celsius;minute', ...lines].join('\r\n');
+    const choice = { delimiter: ';', timeColumn: 1, temperatureColumn: 0 } as const;
+    const failed = await read(api, author, draft.id, file, choice);
+    expect(failed).toMatchObject({ status: 'failed', count: null, strip: null });
+    expect(failed.error?.line).toBe(21);
+    expect(failed.error?.message).toContain('ten past');
+
+    const kept = ['C;min', '20;0', '500;10', '900;20'].join('\n');
+    const swapped = await read(api, author, draft.id, kept, { delimiter: ';' });
+    expect(swapped.count).toBe(3);
+    const again = await author.put(pathOf(draft.id, swapped.id), {
+      choice: { ...MINUTES_CELSIUS, ...choice, unit: 'F' },
+    });
+    expect(again.as(recordSchema)).toMatchObject({ status: 'reading', count: null });
+    await readRecord(api.deps, swapped.id);
+    const mended = (await author.get(pathOf(draft.id, swapped.id))).as(recordSchema);
+    expect(mended).toMatchObject({ status: 'ready', count: 3, unit: 'F' });
+    expect(mended.strip?.at(-1)).toEqual([20, expect.closeTo(482.2, 1)]);
+  });
+
+  test('chosen again while it is being read is read by the last choice', async ({
+    committedApi: api,
+  }) => {
+    const author = await api.signedIn();
+    const draft = await startNote(author, null);
+    const answer = await uploadRecord(
+      author,
+      draft.id,
+      ['minute,celsius', ...climb(20)].join('\n'),
+    );
+    const { id } = answer.as(recordSchema);
+    const first = readRecord(api.deps, id);
+    const chosen = await author.put(pathOf(draft.id, id), {
+      choice: { ...MINUTES_CELSIUS, unit: 'K' },
+    });
+    expect(chosen.status).toBe(200);
+    await first;
+    await readRecord(api.deps, id);
+    const now = (await author.get(pathOf(draft.id, id))).as(recordSchema);
+    expect(now).toMatchObject({ status: 'ready', unit: 'K' });
+  });
+
+  test('is nobody else’s to see or to choose', async ({ api }) => {
+    const author = await api.signedIn();
+    const draft = await startNote(author, null);
+    const own = await read(api, author, draft.id, 'm,c\n0,20\n5,300\n9,500');
+    const moderator = await api.signedIn('moderator');
+    const other = await api.signedIn();
+    const othersDraft = await startNote(other, null);
+    for (const client of [other, moderator]) {
+      expect((await client.get(pathOf(draft.id, own.id))).status).toBe(404);
+      const put = await client.put(pathOf(draft.id, own.id), { choice: MINUTES_CELSIUS });
+      expect(put.status).toBe(404);
+      expect((await uploadRecord(client, draft.id, 'm,c\n0,20')).status).toBe(404);
+      for (const of of ['draft', 'handed-in', 'published']) {
+        const url = `/api/notes/${String(draft.id)}/record.csv?of=${of}`;
+        expect((await client.get(url)).status, of).toBe(404);
+      }
+    }
+    // Nor by way of a note of one's own.
+    expect((await other.get(pathOf(othersDraft.id, own.id))).status).toBe(404);
+    const fields = {
+      ...othersDraft.fields,
+      record: { ...othersDraft.fields.record, recordId: own.id },
+    };
+    const stolen = await other.put(
+      `/api/notes/${String(othersDraft.id)}/draft`,
+      { fields },
+      { headers: { 'If-Match': `"v${String(othersDraft.version)}"` } },
+    );
+    expect(stolen.status).toBe(422);
+    expect(stolen.problem.errors?.[0]?.pointer).toBe('/fields/record/recordId');
+  });
+
+  test('comes out of the export as it went in', async ({ api }) => {
+    const author = await api.signedIn();
+    const moderator = await api.signedIn('moderator');
+    const kiln = await addKiln(author);
+    const draft = await startNote(author, kiln.id);
+    // Steps of 15 seconds with one sharp peak between two points of any thinning.
+    const lines = climb(6000).map((line, index) => (index === 3333 ? `${index / 4},1101.7` : line));
+    const record = await read(api, author, draft.id, ['minute,celsius', ...lines].join('\n'));
+    const fields = completeFields(kiln.id);
+    await handIn(author, draft, {
+      ...fields,
+      record: { ...fields.record, typedRows: [], marks: [], recordId: record.id },
+    });
+    const csvPath = `/api/notes/${String(draft.id)}/record.csv`;
+    const visitor = api.client();
+    expect((await visitor.get(csvPath)).status).toBe(404);
+    expect((await moderator.get(`${csvPath}?of=handed-in`)).status).toBe(200);
+    await decideOn(moderator, draft.id, 'publish');
+
+    const csv = await visitor.get(csvPath);
+    expect(csv.headers.get('content-disposition')).toBe(
+      `attachment; filename=firing-${String(draft.id)}.csv`,
+    );
+    expect(csv.headers.get('content-type')).toBe('text/csv; charset=utf-8');
+    const rows = csv.text.trim().split('\r\n');
+    expect(rows.shift()).toBe('minute,celsius');
+    expect(rows).toHaveLength(lines.length);
+    const values = (row: string | undefined) => (row ?? '').split(',').map(Number);
+    for (const [index, row] of rows.entries()) {
+      const [minute = NaN, celsius = NaN] = values(row);
+      const [wasMinute = NaN, wasCelsius = NaN] = values(lines[index]);
+      if (Math.abs(minute - wasMinute) > 0.001 || Math.abs(celsius - wasCelsius) > 0.05) {
+        expect(row, `line ${String(index + 2)}`).toBe(lines[index]);
+      }
+    }
+    const chart = (await visitor.get(`/api/notes/${String(draft.id)}/record`)).as(
+      recordPointsSchema,
+    );
+    expect(chart.count).toBe(6000);
+    expect(chart.points.length).toBeLessThanOrEqual(3000);
+    expect(Math.max(...chart.points.map(([, celsius]) => celsius))).toBe(1101.7);
+    const page = (await visitor.get(`/api/notes/${String(draft.id)}`)).as(notePageSchema);
+    expect(page.hasRecord).toBe(true);
+  });
+});
+
+describe('a refused upload', () => {
+  test('is answered before a megabyte of it was read', async ({ api }) => {
+    const author = await api.signedIn();
+    const draft = await startNote(author, null);
+    const { port } = new URL(api.baseUrl);
+    for (const path of [
+      `/api/notes/${String(draft.id)}/records`,
+      `/api/notes/${String(draft.id)}/pictures`,
+    ]) {
+      const socket = connect(Number(port), '127.0.0.1');
+      socket.on('error', () => undefined);
+      await once(socket, 'connect');
+      const size = 16 * 1024 * 1024;
+      socket.write(
+        `POST ${path} HTTP/1.1\r\nHost: 127.0.0.1\r\nOrigin: ${api.baseUrl}\r\nContent-Type: multipart/form-data; boundary=x\r\nContent-Length: ${String(size)}\r\n\r\n`,
+      );
+      let answer = '';
+      socket.on('data', (bytes: Buffer) => (answer += bytes.toString('latin1')));
+      const chunk = Buffer.alloc(64 * 1024);
+      let sent = 0;
+      while (answer === '' && sent < size && !socket.destroyed) {
+        socket.write(chunk);
+        sent += chunk.length;
+        await new Promise((resolve) => setTimeout(resolve, 20));
+      }
+      expect(answer).toMatch(/^HTTP\/1\.1 401 /);
+      expect(answer.toLowerCase()).toContain('connection: close');
+      expect(sent).toBeLessThan(1024 * 1024);
+      if (!socket.destroyed) await once(socket, 'close');
+    }
+  });
+});
