@@ -14,7 +14,7 @@ export function LevelAnswers({ findings }: { readonly findings: readonly Finding
   if (levels.length === 0) return null;
   return (
     <div className="space-y-1">
-      <h4 className="text-body">Level stretches</h4>
+      <h3 className="text-body">Level stretches</h3>
       <ul className="border-t border-soot-2">
         {levels.map((finding) => (
           <li key={finding.fromMinute} className="border-b border-line py-2">

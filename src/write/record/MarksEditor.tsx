@@ -25,7 +25,7 @@ export function MarksEditor() {
   };
   return (
     <div className="@container space-y-3">
-      <h4 className="text-body">What was done, and when</h4>
+      <h3 className="text-body">What was done, and when</h3>
       <IssueList issues={issuesAt('/record/marks')} />
       {marks.length > 0 && (
         <ol

@@ -5,12 +5,14 @@ import { RecordError } from '#shared/record/record-error.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
 import { Button } from '../../ui/Button.tsx';
 import { ChoiceField } from '../../ui/ChoiceField.tsx';
-import { Fieldset } from '../../ui/Fieldset.tsx';
+import { IssueList } from '../../ui/IssueList.tsx';
 import { Notice } from '../../ui/Notice.tsx';
 import { optionsOf } from '../../ui/options.ts';
 import { ProgressBar } from '../../ui/ProgressBar.tsx';
 import { useMessages } from '../../ui/useMessages.ts';
 import { useWriteForm } from '../form-context.ts';
+import { PinnedField } from '../PinnedField.tsx';
+import { WriteSection } from '../WriteSection.tsx';
 import { looksLikeTable, useFileDrop } from '../story/useFileDrop.ts';
 import { ChoiceForm } from './ChoiceForm.tsx';
 import { ChooseFile } from './ChooseFile.tsx';
@@ -108,13 +110,15 @@ export function RecordSection() {
   };
 
   return (
-    <Fieldset
+    <WriteSection
       id="record"
-      legend="Record"
+      title="Record"
       lead="Readings of the pyrometer, and what was done when. A note may go without, but then nothing can be read off it."
-      issues={issuesAt('/record')}
     >
       <div className="space-y-6">
+        <PinnedField pointer="/record">
+          <IssueList issues={issuesAt('/record')} />
+        </PinnedField>
         {recordId !== null && (
           <StoredRecord
             status={status}
@@ -211,8 +215,10 @@ export function RecordSection() {
           </p>
         )}
         <DraftRecordChart record={status.record} />
-        <MarksEditor />
+        <PinnedField pointer="/record/marks">
+          <MarksEditor />
+        </PinnedField>
       </div>
-    </Fieldset>
+    </WriteSection>
   );
 }
