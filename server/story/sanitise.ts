@@ -51,7 +51,6 @@ function failAll(error: Error): void {
 
 function start(): Worker {
   const started = new Worker(new URL('./sanitise-worker.mjs', import.meta.url), { execArgv: [] });
-  started.unref();
   started.on('message', (answer: WorkerAnswer) => {
     const asked = waiting.get(answer.id);
     if (!asked) return;
@@ -70,6 +69,8 @@ function start(): Worker {
     if (worker === started) worker = null;
     isWarm = false;
   });
+  // After the listeners, which would hold on to it again: an idle thread keeps no command alive.
+  started.unref();
   return started;
 }
 
