@@ -66,6 +66,9 @@ function DeskNote({ noteId, memberId }: Props) {
         <Link to={paths.desk} className="link inline-flex min-h-11 items-center text-small">
           The whole pile
         </Link>
+        <a href="#look-at" className="link inline-flex min-h-11 items-center text-small lg:hidden">
+          What to look at, remarks, decision
+        </a>
         {next !== null && <LinkButton to={paths.deskNote(next)}>Next note</LinkButton>}
       </div>
       <ClaimBar desk={desk} data={data} isOwn={data.page.author?.id === memberId} />
@@ -73,7 +76,7 @@ function DeskNote({ noteId, memberId }: Props) {
         <div ref={noteRef} className="min-w-0">
           <NoteView page={data.page} units={units} recordOf="handed-in" />
         </div>
-        <div className="min-w-0 space-y-10">
+        <div className="min-w-0 space-y-10 lg:sticky lg:top-2 lg:-m-2 lg:max-h-[calc(100dvh-1rem)] lg:self-start lg:overflow-y-auto lg:p-2">
           <WhatToLookAt
             data={data}
             units={units}

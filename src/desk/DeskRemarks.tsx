@@ -1,5 +1,5 @@
-import { useRef } from 'react';
 import type { DeskNote } from '#shared/api/desk.ts';
+import { useRepeatKey } from '../http/useRepeatKey.ts';
 import { momentWords } from '../notes/note-words.ts';
 import { Button } from '../ui/Button.tsx';
 import { IconButton } from '../ui/IconButton.tsx';
@@ -21,18 +21,18 @@ interface Props {
 export function DeskRemarks({ desk, data, typed, onTyped }: Props) {
   const tell = useMessages();
   const { addRemark, removeRemark } = desk;
-  // One key for one remark, however often it is sent.
-  const key = useRef(desk.newKey());
+  const keyFor = useRepeatKey();
   const pins = remarkPins(data.page.fields);
   const options = pins.some(({ value }) => value === typed.pointer)
     ? pins
     : [...pins, { value: typed.pointer, label: pinWords(typed.pointer) }];
   const pin = (): void => {
+    // The same remark twice is meant only when a first one is there already.
+    const remark = { pointer: typed.pointer, text: typed.remark };
     addRemark.mutate(
-      { pointer: typed.pointer, text: typed.remark, key: key.current },
+      { ...remark, key: keyFor(remark) },
       {
         onSuccess: () => {
-          key.current = desk.newKey();
           onTyped({ remark: '', pointer: '' });
           tell({ kind: 'done', text: 'The remark is pinned.' });
         },

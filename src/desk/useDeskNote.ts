@@ -2,7 +2,7 @@ import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { doneSchema } from '#shared/api/accounts.ts';
 import { deskNoteSchema, type DeskNote } from '#shared/api/desk.ts';
-import { newIdempotencyKey, send } from '../http/client.ts';
+import { send } from '../http/client.ts';
 import { noteQueries } from '../notes/note-queries.ts';
 import { deskPath, deskQueries } from './desk-queries.ts';
 
@@ -79,6 +79,6 @@ export function useDeskNote(noteId: number) {
     return () => clearInterval(timer);
   }, [isMine, renew]);
 
-  return { note, claim, giveUp, addRemark, removeRemark, decide, newKey: newIdempotencyKey };
+  return { note, claim, giveUp, addRemark, removeRemark, decide };
 }
 export type AtTheDesk = ReturnType<typeof useDeskNote>;
