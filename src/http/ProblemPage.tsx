@@ -58,7 +58,9 @@ export function ProblemPage({ error, onRetry }: Props) {
     }
     return (
       <EmptyState headingLevel={1} title={error.problem.title} action={retry}>
-        {detail}
+        {detail === error.problem.title
+          ? 'It is not your doing, and it has been noted down. Try again in a moment.'
+          : detail}
         {error.problem.instance && (
           <span className="mt-2 block text-note">
             If you tell us, name {error.problem.instance}.

@@ -64,10 +64,6 @@ export const test = base.extend<{ visiting: Visiting }>({
 
     const watch = (page: Page): void => {
       page.on('pageerror', (error) => faults.push(`script error: ${error.message}`));
-      page.on('console', (message) => {
-        const text = message.text();
-        if (message.type() === 'error' && /content security policy/i.test(text)) faults.push(text);
-      });
       page.on('request', (request) => {
         const url = new URL(request.url());
         const isOwn = url.origin === baseUrl || ['data:', 'blob:'].includes(url.protocol);
@@ -99,6 +95,15 @@ export const test = base.extend<{ visiting: Visiting }>({
       });
       opened.push(context);
       context.on('page', watch);
+      await context.exposeFunction('tellRefused', (what: string) => faults.push(what));
+      await context.addInitScript(() => {
+        document.addEventListener('securitypolicyviolation', (event) => {
+          const { tellRefused } = window as unknown as { tellRefused: (what: string) => void };
+          tellRefused(
+            `${location.pathname}: the policy refused ${event.blockedURI} (${event.violatedDirective}) from ${event.sourceFile}:${event.lineNumber}`,
+          );
+        });
+      });
       const page = await context.newPage();
       if (account && !storageState) {
         await signIn(page, account);

@@ -70,7 +70,12 @@ async function examineAll(
           inTheme.push(`${page.url()} console: ${message.text()} ${message.location().url}`);
         }
       });
-      for (const address of addresses) inTheme.push(...(await examine(page, address, theme)));
+      for (const address of addresses) {
+        const about = await examine(page, address, theme).catch((error: unknown) => [
+          `${address} ${theme}: ${error instanceof Error ? error.message : String(error)}`,
+        ]);
+        inTheme.push(...about);
+      }
       return inTheme;
     }),
   );
@@ -114,7 +119,7 @@ describe('every page is sound in both themes, on a phone and on a wide screen', 
   });
 
   test('for a member', async ({ visiting }) => {
-    const account = visiting.account('Haruka Bellwether');
+    const account = visiting.account('admin');
     const { page } = await visiting.visit({ as: account });
     const { notes } = notebookSchema.parse(await answer(page, '/api/notebook'));
     const draft = notes.find(({ status }) => status === 'draft');
