@@ -178,6 +178,12 @@ export class DraftKeeper {
     void this.flush();
   }
 
+  /** The note is removed: nothing is sent any more. */
+  abandon(): void {
+    this.#dirty = false;
+    this.close();
+  }
+
   /** Stops timers; what is unsent stays kept in this browser. */
   close(): void {
     if (this.#timer !== null) clearTimeout(this.#timer);

@@ -1,0 +1,67 @@
+import { START_CLASSES } from '#shared/vocabulary/kiln.ts';
+import { DateField } from '../ui/DateField.tsx';
+import { SelectField } from '../ui/SelectField.tsx';
+import { TimeField } from '../ui/TimeField.tsx';
+import { Measure, OneOf } from './GroupFields.tsx';
+import { useGroupField, useWriteForm } from './form-context.ts';
+import { PinnedField } from './PinnedField.tsx';
+import { WriteSection } from './WriteSection.tsx';
+
+const OWN_ZONE = Intl.DateTimeFormat().resolvedOptions().timeZone;
+const ZONES: readonly string[] = Intl.supportedValuesOf('timeZone');
+
+/** Day, hour, and how the kiln stood at the start. */
+export function WhenSection() {
+  const { draft } = useWriteForm();
+  const { value: date, set: setDate, ...dateField } = useGroupField('when', 'date');
+  const { value: time, set: setTime, ...timeField } = useGroupField('when', 'startTime');
+  return (
+    <WriteSection id="when" title="When">
+      <PinnedField pointer="/when/date">
+        <DateField
+          label="Day"
+          required
+          {...dateField}
+          value={date ?? ''}
+          onValue={(next) => setDate(next || null)}
+        />
+      </PinnedField>
+      <PinnedField pointer="/when/startTime">
+        <TimeField
+          label="Lit at"
+          hint="Roughly is enough: it puts the firings of one day in order."
+          required
+          {...timeField}
+          value={time ?? ''}
+          onValue={(next) => setTime(next || null)}
+        />
+      </PinnedField>
+      <TimeZone />
+      <OneOf group="when" name="startClass" label="Kiln" terms={START_CLASSES} required />
+      <Measure group="when" name="startCelsius" label="Its temperature" hint="If you know it." />
+      <Measure
+        group="when"
+        name="unreportedFirings"
+        label="Firings without a note"
+        required={draft.earlier !== null}
+        hint="Firings of this kiln since the last one written up that nobody wrote up. None is 0."
+      />
+    </WriteSection>
+  );
+}
+
+function TimeZone() {
+  const { value, set, ...field } = useGroupField('when', 'timeZone');
+  const names = [...new Set([OWN_ZONE, value, ...ZONES])].filter((name) => name !== '');
+  return (
+    <PinnedField pointer="/when/timeZone">
+      <SelectField
+        label="Time zone of the kiln"
+        {...field}
+        value={value || null}
+        onValue={(next) => set(next ?? '')}
+        options={names.map((name) => ({ value: name, label: name.replace(/_/g, ' ') }))}
+      />
+    </PinnedField>
+  );
+}

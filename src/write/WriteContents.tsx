@@ -1,0 +1,46 @@
+import type { ReactNode } from 'react';
+import { WRITE_SECTIONS, type WriteSectionId } from './write-sections.ts';
+
+interface Props {
+  readonly openIn: ReadonlyMap<WriteSectionId, number>;
+  /** How saving stands. */
+  readonly children: ReactNode;
+}
+
+/** The table of contents, always in reach, with how much each section still asks. */
+export function WriteContents({ openIn, children }: Props) {
+  return (
+    <div className="sticky top-0 z-30 -mx-4 flex flex-wrap items-center justify-between gap-x-6 border-b border-soot-2 bg-ash px-4 sm:-mx-8 sm:px-8">
+      <nav aria-label="Sections of this note" className="min-w-0 max-w-full overflow-x-auto">
+        <ol className="flex gap-x-4 text-small whitespace-nowrap">
+          {WRITE_SECTIONS.map(({ id, title }) => {
+            const open = openIn.get(id) ?? 0;
+            return (
+              <li key={id}>
+                <a
+                  href={`#section-${id}`}
+                  className="inline-flex min-h-11 items-center gap-1.5 text-soot underline decoration-line underline-offset-4 hover:decoration-verdigris"
+                  onClick={(event) => {
+                    event.preventDefault();
+                    const section = document.getElementById(`section-${id}`);
+                    section?.scrollIntoView({ block: 'start' });
+                    section?.focus({ preventScroll: true });
+                  }}
+                >
+                  {title}
+                  {open > 0 && (
+                    <span className="reading text-note text-caution">
+                      {open}
+                      <span className="sr-only"> to look at</span>
+                    </span>
+                  )}
+                </a>
+              </li>
+            );
+          })}
+        </ol>
+      </nav>
+      <div className="py-1.5">{children}</div>
+    </div>
+  );
+}

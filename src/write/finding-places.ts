@@ -1,0 +1,19 @@
+import type { Finding, FindingCode } from '#shared/firing/findings.ts';
+
+/** The field beside which a finding is told while the author types. */
+const PLACES: Readonly<Partial<Record<FindingCode, string>>> = {
+  reached: '/plan/timeToTemperatureMinutes',
+  'slow-climb': '/plan/timeToTemperatureMinutes',
+  'not-reached': '/plan/peakBy',
+  overshoot: '/plan/peakBy',
+  'just-short': '/plan/peakBy',
+  hold: '/plan/holdKeptMinutes',
+  stall: '/result/troubles',
+  sag: '/result/troubles',
+  'uneven-heat': '/result/troubles',
+};
+
+/** The findings told beside the field at a pointer. */
+export function findingsBeside(pointer: string, findings: readonly Finding[]): Finding[] {
+  return findings.filter(({ code }) => PLACES[code] === pointer);
+}

@@ -1,0 +1,59 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { useNavigate } from 'react-router-dom';
+import type { Draft } from '#shared/api/notes.ts';
+import { paths } from '#shared/paths.ts';
+import { noteQueries } from '../notes/note-queries.ts';
+import { useMessages } from '../ui/useMessages.ts';
+import { handIn, removeNote, revise, takeBack } from './draft-mutations.ts';
+import type { DraftKeeper } from './draft-keeper.ts';
+import { forgetUnsent } from './unsent-work.ts';
+
+/** What an author does with a note as a whole. Each tells how it went and can be tried again. */
+export function useDraftActs(keeper: DraftKeeper, noteId: number, memberId: number) {
+  const tell = useMessages();
+  const client = useQueryClient();
+  const navigate = useNavigate();
+  /** Lists and pages that show the note are asked for again; the keeper holds the draft itself. */
+  const refresh = () =>
+    client.invalidateQueries({
+      queryKey: noteQueries.all,
+      predicate: ({ queryKey }) => queryKey[1] !== 'draft' && queryKey[1] !== 'record',
+    });
+  const done = (text: string) => async (draft: Draft) => {
+    keeper.accept(draft);
+    tell({ kind: 'done', text });
+    window.scrollTo({ top: 0 });
+    await refresh();
+  };
+  return {
+    handIn: useMutation({
+      mutationFn: async () => {
+        await keeper.flush();
+        if (keeper.hasUnsent) {
+          throw new Error('The last changes are not saved yet, so there is nothing to hand in.');
+        }
+        return handIn(noteId, keeper.current().draft.version);
+      },
+      onSuccess: done('Handed in. A moderator reads it; you hear of the decision.'),
+    }),
+    takeBack: useMutation({
+      mutationFn: () => takeBack(noteId),
+      onSuccess: done('Taken back. It is your draft again.'),
+    }),
+    revise: useMutation({
+      mutationFn: () => revise(noteId),
+      onSuccess: done('Open for a new revision. What is published stays up meanwhile.'),
+    }),
+    remove: useMutation({
+      mutationFn: () => removeNote(noteId),
+      onSuccess: async (answer) => {
+        keeper.abandon();
+        forgetUnsent(memberId, noteId);
+        tell({ kind: 'done', text: answer.message });
+        await navigate(paths.notebook);
+        await refresh();
+      },
+    }),
+  };
+}
+export type DraftActs = ReturnType<typeof useDraftActs>;
