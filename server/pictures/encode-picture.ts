@@ -13,7 +13,9 @@ sharp.cache(false);
 
 const DECODE_SECONDS = 15;
 const PREVIEW_WIDTH = 1200;
-const PLACEHOLDER_WIDTH = 24;
+/** A strip of a picture would otherwise be taller than WebP can be (16,383 pixels). */
+const TALLEST = 8000;
+const PLACEHOLDER_SIDE = 24;
 /** Two decodings at once on two cores; a queue, then 503. */
 const inTurn = turnstile(2, 20);
 
@@ -64,7 +66,7 @@ async function encode(bytes: Buffer): Promise<EncodedPicture> {
     const { data, info } = await open(bytes)
       .autoOrient()
       .toColourspace('srgb')
-      .resize({ width: widest, withoutEnlargement: true })
+      .resize({ width: widest, height: TALLEST, fit: 'inside', withoutEnlargement: true })
       .raw({ depth: 'uchar' })
       .toBuffer({ resolveWithObject: true });
     const pixels = () =>
@@ -82,7 +84,7 @@ async function encode(bytes: Buffer): Promise<EncodedPicture> {
       .jpeg({ quality: 80, mozjpeg: false })
       .toBuffer();
     const placeholder = await pixels()
-      .resize({ width: PLACEHOLDER_WIDTH })
+      .resize({ width: PLACEHOLDER_SIDE, height: PLACEHOLDER_SIDE, fit: 'inside' })
       .webp({ quality: 30 })
       .toBuffer();
     return {

@@ -31,6 +31,11 @@ const uploadAfter =
     readSingleUpload(MAX_PICTURE_BYTES, 'A picture'),
   ];
 
+/** If-None-Match by its weak comparison (RFC 9110 section 13.1.2). */
+const isKnown = (given: string | undefined, tag: string): boolean =>
+  given !== undefined &&
+  given.split(',').some((one) => ['*', tag, `W/${tag}`].includes(one.trim()));
+
 const TYPES = { webp: 'image/webp', jpg: 'image/jpeg' } as const;
 
 export const pictureRoutes: readonly Route[] = [
@@ -79,9 +84,10 @@ export const pictureRoutes: readonly Route[] = [
           : 'private, max-age=300',
         'Content-Security-Policy': "default-src 'none'; sandbox",
         'X-Content-Type-Options': 'nosniff',
+        'Accept-Ranges': 'none',
         ...(isPublic ? {} : { Vary: 'Cookie' }),
       });
-      if (request.get('If-None-Match') === tag) return reply(304, null);
+      if (isKnown(request.get('If-None-Match'), tag)) return reply(304, null);
       const file = await deps.store.read(`pictures/${params.name}/${params.file}`);
       if (!file) throw new AppError('not-found');
       response.type(params.file.endsWith('.webp') ? TYPES.webp : TYPES.jpg);

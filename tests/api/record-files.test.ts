@@ -2,6 +2,7 @@ import { describe, expect } from 'vitest';
 import { test } from '../support/api.ts';
 import { startNote } from '../support/notes.ts';
 import { readUpload as read, uploadRecord } from '../support/records.ts';
+import { slowUpload } from '../support/slow-upload.ts';
 
 describe('files of every kind', () => {
   const TABLE = ['Zeit;Température', '0;20,5', '10;512,25', '20;998,75'].join('\r\n');
@@ -59,9 +60,10 @@ describe('files of every kind', () => {
   test('a line of 12 MB is refused with the limit named', async ({ api }) => {
     const author = await api.signedIn();
     const draft = await startNote(author, null);
-    const answer = await uploadRecord(author, draft.id, '7'.repeat(12_000_000));
-    expect(answer.status).toBe(413);
-    expect(answer.problem.detail).toContain('10 MiB');
+    const path = `/api/notes/${String(draft.id)}/records`;
+    const { status, answer } = await slowUpload(api, author, path, 12_000_000);
+    expect(status).toBe(413);
+    expect(answer).toContain('10 MiB');
     expect(await api.db('records').select('id')).toEqual([]);
   });
 
