@@ -1,9 +1,8 @@
 import type { Knex } from 'knex';
 import type { MemberPage } from '#shared/api/accounts.ts';
-import { noteRowSchema } from '#shared/api/note-rows.ts';
 import type { Role } from '#shared/vocabulary/statuses.ts';
 import { dayOf } from '../database/day.ts';
-import { readJson } from '../database/read-json.ts';
+import { rowsByAuthor } from '../notes/published-repository.ts';
 
 const NOTES_SHOWN = 100;
 const KILNS_SHOWN = 100;
@@ -38,21 +37,16 @@ export async function findMemberPage(db: Knex, memberId: number): Promise<Member
     );
   if (!member) return null;
   const { joinedAt, suspendedAt, ...shown } = member;
-  const [kilns, noteRows] = await Promise.all([
+  const [kilns, notes] = await Promise.all([
     findPublicKilns(db, memberId),
-    db('published_firings')
-      .where('published_firings.author_id', memberId)
-      .orderBy('published_firings.published_at', 'desc')
-      .orderBy('published_firings.note_id', 'desc')
-      .limit(NOTES_SHOWN)
-      .select<{ noteRow: unknown }[]>('published_firings.note_row AS noteRow'),
+    rowsByAuthor(db, memberId, NOTES_SHOWN),
   ]);
   return {
     ...shown,
     ...(suspendedAt === null ? {} : { place: '', about: '' }),
     joinedOn: dayOf(joinedAt),
     kilns,
-    notes: noteRows.map((row) => noteRowSchema.parse(readJson(row.noteRow))),
+    notes,
   };
 }
 

@@ -45,7 +45,7 @@ export function PasswordField({ label, value, onValue, issues, use }: Props) {
         issues={issues}
         hint={use === 'new' ? newPasswordHint(value) : undefined}
       />
-      <div className="grid gap-x-5 text-small @2xl:grid-cols-[10.5rem_minmax(0,1fr)]">
+      <div className="grid gap-x-5 @2xl:grid-cols-[10.5rem_minmax(0,1fr)]">
         <div className="-mt-1 @2xl:col-start-2">
           <CheckField label="Show what is typed" checked={shown} onChecked={setShown} />
         </div>

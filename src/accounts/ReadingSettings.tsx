@@ -3,7 +3,7 @@ import { useState } from 'react';
 import type { Me } from '#shared/api/accounts.ts';
 import { Button } from '../ui/Button.tsx';
 import { CheckField } from '../ui/CheckField.tsx';
-import { ChoiceField } from '../ui/ChoiceField.tsx';
+import { SelectField } from '../ui/SelectField.tsx';
 import { rememberThemeChoice } from '../ui/theme.ts';
 import { useMessages } from '../ui/useMessages.ts';
 import { changeSettings } from './account-mutations.ts';
@@ -38,9 +38,9 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
         if (!saving.isPending) saving.mutate(settings);
       }}
     >
-      <ChoiceField
+      <SelectField
         label="Temperatures"
-        required
+        blank={null}
         options={[
           { value: 'C', label: '°C' },
           { value: 'F', label: '°F' },
@@ -48,9 +48,9 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
         value={settings.temperature}
         onValue={(temperature) => temperature && setSettings({ ...settings, temperature })}
       />
-      <ChoiceField
+      <SelectField
         label="Other measures"
-        required
+        blank={null}
         hint="Lengths, weights, volumes and pressures."
         options={[
           { value: 'metric', label: 'Metric' },
@@ -59,9 +59,9 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
         value={settings.system}
         onValue={(system) => system && setSettings({ ...settings, system })}
       />
-      <ChoiceField
+      <SelectField
         label="Theme"
-        required
+        blank={null}
         options={[
           { value: 'system', label: 'As the device' },
           { value: 'day', label: 'Day' },

@@ -157,7 +157,7 @@ function columnsFor(
         member.id === myId ? (
           <span className="text-soot-2">yourself</span>
         ) : (
-          <span className="flex flex-wrap gap-x-3">
+          <span className="-ml-1 flex flex-wrap gap-x-3">
             <Button
               kind="quiet"
               label={`Role of ${member.name}`}
