@@ -3,7 +3,8 @@ import type { FindAnswer } from '#shared/api/search.ts';
 import { paths } from '#shared/paths.ts';
 import { CHANGES } from '#shared/vocabulary/changes.ts';
 import { TROUBLE_SHORT } from '#shared/vocabulary/troubles.ts';
-import { Icon } from '../ui/Icon.tsx';
+import { ChangeCaution } from '../figures/ChangeCaution.tsx';
+import { SOURCE_WORDS } from '../figures/helped-words.ts';
 import { Reading } from '../ui/Reading.tsx';
 
 type Pooled = NonNullable<FindAnswer['pooled']>;
@@ -15,11 +16,6 @@ const VERDICTS: Readonly<Record<Pooled['rows'][number]['verdict'], string | null
   'too-few': 'too few to say',
   reference: null,
 };
-
-const WHERE = {
-  measured: 'found in the record',
-  named: 'named by the author',
-} as const;
 
 /** What was tried next for the trouble asked about, in two lines, with no change beside it. */
 export function PooledAnswer({ pooled }: { readonly pooled: Pooled }) {
@@ -34,8 +30,8 @@ export function PooledAnswer({ pooled }: { readonly pooled: Pooled }) {
       </h2>
       <p>
         Of <Reading>{String(pooled.pairs)}</Reading> firings with “{trouble}” (
-        {WHERE[pooled.source]}, {pooled.startClass} starts) that have a next firing to compare, what
-        was tried next: {tried.length === 0 && 'no change often enough to say'}
+        {SOURCE_WORDS[pooled.source]}, {pooled.startClass} starts) that have a next firing to
+        compare, what was tried next: {tried.length === 0 && 'no change often enough to say'}
         {tried.map((row) => (
           <span key={row.change}>
             <strong className="font-[650]">
@@ -61,12 +57,7 @@ export function PooledAnswer({ pooled }: { readonly pooled: Pooled }) {
         .
       </p>
       {cautions.map((caution) => (
-        <p key={caution} className="flex gap-2 text-small text-caution">
-          <Icon name="look-again" className="mt-0.5 size-4.5" />
-          <span>
-            <strong className="font-[650]">Take care.</strong> {caution}
-          </span>
-        </p>
+        <ChangeCaution key={caution} caution={caution} />
       ))}
       <p className="text-small text-soot-2">
         <Link to={paths.whatHelpedWith(pooled.trouble)} className="link">

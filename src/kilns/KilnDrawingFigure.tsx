@@ -17,7 +17,7 @@ export function KilnDrawingFigure({ fields }: { readonly fields: KilnFields }) {
       <KilnSection kiln={drawing.dimensions} />
       {drawing.assumed.length > 0 && (
         <p className="text-note text-soot-2">
-          Drawn with {drawing.assumed.join(' and ')}, which nobody has said.
+          Drawn with {drawing.assumed.join(' and ')}, as the description does not say.
         </p>
       )}
     </div>
