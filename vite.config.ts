@@ -24,7 +24,13 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' },
+        test: {
+          name: 'unit',
+          include: ['tests/unit/**/*.test.ts'],
+          environment: 'node',
+          // Only against hanging: nothing here measures time on the clock.
+          testTimeout: 60_000,
+        },
       },
       {
         extends: true,
@@ -32,6 +38,7 @@ export default defineConfig({
           name: 'pages',
           include: ['tests/pages/**/*.test.tsx'],
           environment: 'jsdom',
+          testTimeout: 60_000,
           setupFiles: ['tests/support/pages-setup.ts'],
         },
       },

@@ -1,5 +1,5 @@
 import argon2 from 'argon2';
-import { AppError } from '../http/problem.ts';
+import { turnstile } from '../http/turnstile.ts';
 
 /**
  * argon2id with the parameters OWASP's Password Storage page gives as its floor: 19 MiB, two passes,
@@ -18,25 +18,7 @@ export const HASH_PARAMETERS = {
 const AT_ONCE = 4;
 const MAY_WAIT = 40;
 
-let running = 0;
-const waiting: (() => void)[] = [];
-
-async function inTurn<T>(work: () => Promise<T>): Promise<T> {
-  if (running >= AT_ONCE) {
-    if (waiting.length >= MAY_WAIT) throw new AppError('busy', { retryAfter: 3 });
-    await new Promise<void>((resolve) => waiting.push(resolve));
-  } else {
-    running += 1;
-  }
-  try {
-    return await work();
-  } finally {
-    const next = waiting.shift();
-    // The place is handed on, not freed, so nobody slips in between.
-    if (next) next();
-    else running -= 1;
-  }
-}
+const inTurn = turnstile(AT_ONCE, MAY_WAIT);
 
 /** @throws AppError 'busy' when too many hashes wait already */
 export function hashPassword(password: string): Promise<string> {

@@ -22,7 +22,7 @@ import { searchEngine } from '../../server/search/engine-search.ts';
 import { reindex } from '../../server/search/reindex.ts';
 import { withThrowawayDatabase } from '../../server/start/throwaway-database.ts';
 import { diskStore } from '../../server/storage/file-store.ts';
-import { testConfig } from '../support/api.ts';
+import { testConfig } from '../support/test-config.ts';
 import { milliseconds, percentile, print, throughput, timeEach } from './measure.ts';
 
 /**
@@ -104,9 +104,18 @@ async function benchSearch(deps: Deps, port: number): Promise<void> {
     'copper matt no colour',
   ];
   const ask = (round: number): string => questions[round % questions.length] ?? '';
-  const whole = await timeEach(200, (round) =>
-    get(port, `/api/search?q=${encodeURIComponent(ask(round))}`),
-  );
+  const whole: number[] = [];
+  // In portions, because a visitor may ask only so often; the count of it is cleared between them.
+  for (let portion = 0; portion < 5; portion += 1) {
+    await deps.db('throttles').delete();
+    whole.push(
+      ...(await timeEach(
+        40,
+        (round) => get(port, `/api/search?q=${encodeURIComponent(ask(round))}`),
+        4,
+      )),
+    );
+  }
   const engine = await timeEach(200, (round) =>
     searchEngine(deps.config, readQuestion(ask(round)), {}),
   );
@@ -181,7 +190,6 @@ await withThrowawayDatabase(async (databaseUrl) => {
     store: diskStore(config.uploadsFolder),
   };
   try {
-    process.env['SPYHOLE_DATA'] = folder;
     await loadDemo(deps);
     await reindex(deps);
     const { server, port } = await listen(createApp(deps));

@@ -13,11 +13,14 @@ import type { Role } from '#shared/vocabulary/statuses.ts';
 import { sessionCookieName } from '../../server/accounts/session-cookie.ts';
 import { sessionHash } from '../../server/accounts/session-store.ts';
 import { createApp } from '../../server/app.ts';
-import { type Config, readConfig } from '../../server/config.ts';
+import type { Config } from '../../server/config.ts';
 import type { Deps } from '../../server/deps.ts';
 import { diskStore } from '../../server/storage/file-store.ts';
 import { aMember, type BuiltMember, type MemberTraits } from './builders.ts';
 import { test as databaseTest } from './database.ts';
+import { testConfig } from './test-config.ts';
+
+export { testConfig };
 
 /**
  * The real application on a free port, and clients that talk to it over HTTP as a browser does: own
@@ -87,20 +90,6 @@ export interface ApiOptions {
   /** Settings other than the test's own. */
   config?: Partial<Config>;
   deps?: Partial<Deps>;
-}
-
-export function testConfig(overrides: Partial<Config> = {}): Config {
-  const config = readConfig({
-    NODE_ENV: 'test',
-    PUBLIC_URL: 'http://127.0.0.1',
-    // The application is given its database; these are never opened unless a test says so.
-    DATABASE_URL: 'mysql://nobody@127.0.0.1:1/none',
-    MEILI_URL: 'http://127.0.0.1:1',
-    SMTP_URL: 'smtp://127.0.0.1:1',
-    SESSION_SECRET: 'a-secret-for-tests-only-0123456789abcdef',
-    LOG_LEVEL: 'info',
-  });
-  return { ...config, ...overrides };
 }
 
 /** A log that is kept in memory, to be asked about. */
