@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useState } from 'react';
+import { useDeferredValue, useEffect, useMemo, useRef, useState } from 'react';
 import { readTable } from '#shared/record/read-table.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
 import { RecordError } from '#shared/record/record-error.ts';
@@ -47,6 +47,12 @@ export function ChoiceForm({ source, onSource, unit, onConfirm, onCancel, busy =
   const asked = useDeferredValue(source);
   const read = useMemo(() => readUnder(asked, asked.choice), [asked]);
   const [everTouched, setEverTouched] = useState(false);
+  // It opens under what was pressed, and its own buttons come and go: the focus follows.
+  const heading = useRef<HTMLParagraphElement>(null);
+  const { leftOut } = source;
+  useEffect(() => {
+    heading.current?.focus();
+  }, [leftOut]);
 
   const change = (next: Partial<RecordChoice>): void => {
     setEverTouched(true);
@@ -64,7 +70,7 @@ export function ChoiceForm({ source, onSource, unit, onConfirm, onCancel, busy =
 
   return (
     <div className="@container space-y-4 border-y border-soot-2 py-4">
-      <p className="text-body font-[650]">
+      <p ref={heading} tabIndex={-1} className="text-body font-[650] outline-none">
         {source.source === 'file' ? source.fileName : 'The pasted table'}: is it read rightly?
       </p>
       {source.undetected !== null && !everTouched && (
@@ -178,7 +184,7 @@ export function ChoiceForm({ source, onSource, unit, onConfirm, onCancel, busy =
         >
           Yes, use it as the record
         </Button>
-        <Button onClick={onCancel}>Leave it</Button>
+        <Button onClick={onCancel}>Cancel</Button>
       </div>
     </div>
   );

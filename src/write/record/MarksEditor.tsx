@@ -126,7 +126,9 @@ function MarkLine({ mark, number, disabled, onMark, onRemove }: LineProps) {
       {disabled ? (
         <span />
       ) : (
-        <IconButton icon="remove" label={`Remove mark ${number}, ${words}`} onClick={onRemove} />
+        <span className="pt-1 touch:pt-0">
+          <IconButton icon="remove" label={`Remove mark ${number}, ${words}`} onClick={onRemove} />
+        </span>
       )}
     </li>
   );

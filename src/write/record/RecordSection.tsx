@@ -4,10 +4,8 @@ import { MAX_TYPED_ROWS } from '#shared/note/plan.ts';
 import { RecordError } from '#shared/record/record-error.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
 import { Button } from '../../ui/Button.tsx';
-import { ChoiceField } from '../../ui/ChoiceField.tsx';
 import { IssueList } from '../../ui/IssueList.tsx';
 import { Notice } from '../../ui/Notice.tsx';
-import { optionsOf } from '../../ui/options.ts';
 import { ProgressBar } from '../../ui/ProgressBar.tsx';
 import { useMessages } from '../../ui/useMessages.ts';
 import { useWriteForm } from '../form-context.ts';
@@ -24,9 +22,7 @@ import { StoredRecord } from './StoredRecord.tsx';
 import { TypedReadings } from './TypedReadings.tsx';
 import { useRecordSending } from './useRecordSending.ts';
 import { useRecordStatus } from './useRecordStatus.ts';
-
-const WAYS = { type: 'Type them', paste: 'Paste columns', file: 'Upload a file' } as const;
-type Way = keyof typeof WAYS;
+import { WayChoice, type Way } from './WayChoice.tsx';
 
 /** A table that waits to be confirmed; `again` is the stored record it is to be read anew for. */
 interface Candidate {
@@ -137,12 +133,13 @@ export function RecordSection() {
         )}
         {editable && (recordId === null || replacing) && sending.kind === 'idle' && (
           <div className="space-y-3">
-            <ChoiceField
-              label={recordId === null ? 'Readings' : 'Replace by'}
-              required
-              value={way}
-              onValue={(next) => next && setWay(next)}
-              options={optionsOf(WAYS).filter(({ value }) => recordId === null || value !== 'type')}
+            <WayChoice
+              label={
+                recordId === null ? 'How the readings come in' : 'How the new readings come in'
+              }
+              ways={recordId === null ? ['type', 'paste', 'file'] : ['paste', 'file']}
+              way={way}
+              onWay={setWay}
             />
             {way === 'paste' && candidate === null && (
               <PasteRows
@@ -199,7 +196,7 @@ export function RecordSection() {
                 <Button kind="main" icon="retry" onClick={sending.retry}>
                   Try again
                 </Button>
-                <Button onClick={dismiss}>Leave it</Button>
+                <Button onClick={dismiss}>Cancel</Button>
               </>
             }
           >
@@ -214,7 +211,7 @@ export function RecordSection() {
             {typedRows.length} typed readings are kept as well, and count only without this record.
           </p>
         )}
-        <DraftRecordChart record={status.record} />
+        {candidate === null && <DraftRecordChart record={status.record} />}
         <PinnedField pointer="/record/marks">
           <MarksEditor />
         </PinnedField>

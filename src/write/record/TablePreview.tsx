@@ -28,11 +28,13 @@ export function TablePreview({ table, unit, leftOut = [] }: Props) {
   const words = `${count} ${count === 1 ? 'reading' : 'readings'} over ${formatDuration(last - first)}, ${spanWords(table.readings, unit)}`;
   return (
     <div className="space-y-2 text-small">
-      <SmallGlowStrip
-        points={strip}
-        scaleMinutes={Math.max(1, last - first)}
-        alt={`Preview: ${words}`}
-      />
+      <div className="max-w-112">
+        <SmallGlowStrip
+          points={strip}
+          scaleMinutes={Math.max(1, last - first)}
+          alt={`Preview: ${words}`}
+        />
+      </div>
       <p className="font-[600]">{words}.</p>
       {table.secondProbe && <p>The second probe gave {table.secondProbe.length} readings.</p>}
       {(table.assumed ?? []).map((sentence) => (

@@ -113,7 +113,11 @@ export function TypedGrid(props: Props) {
           ? `${index + 1}:${column}`
           : event.key === 'ArrowUp'
             ? `${index - 1}:${column}`
-            : null;
+            : // Past the row's button, which the way back still meets.
+              event.key === 'Tab' && column === 'celsius' && index < rows.length
+              ? `${index + 1}:minute`
+              : null;
+    if (event.key === 'Tab' && index + 1 >= shown) return;
     if (target === null) return;
     event.preventDefault();
     focusOn(target);

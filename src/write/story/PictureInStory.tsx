@@ -57,7 +57,7 @@ export function PictureInStory({
           This picture is not among this note’s pictures any more. Remove it here.
         </p>
       )}
-      <div className="space-y-2 py-2 font-sans">
+      <div data-controls="" className="space-y-2 py-2 font-sans">
         <TextField
           label="What it shows"
           required

@@ -1,4 +1,4 @@
-import { MAX_PICTURE_BYTES, MAX_PICTURES, pictureUrl, type Picture } from '#shared/api/pictures.ts';
+import { MAX_PICTURES, pictureUrl, type Picture } from '#shared/api/pictures.ts';
 import { Button } from '../../ui/Button.tsx';
 import { LiveRegion } from '../../ui/LiveRegion.tsx';
 import { Notice } from '../../ui/Notice.tsx';
@@ -26,7 +26,7 @@ export function PictureUploads({ work }: Props) {
                 heading={file.name}
                 action={
                   <>
-                    {file.size <= MAX_PICTURE_BYTES && (
+                    {state.again && (
                       <Button
                         icon="retry"
                         label={`Try again: ${file.name}`}

@@ -1,5 +1,5 @@
-import { useEditorState, type Editor } from '@tiptap/react';
-import { useRef, useState, type KeyboardEvent } from 'react';
+import type { Editor } from '@tiptap/react';
+import { useEffect, useReducer, useRef, useState, type KeyboardEvent } from 'react';
 import { HISTORY_ACTS, TOOLBAR_GROUPS, type ToolbarAct } from './toolbar-acts.ts';
 
 interface Props {
@@ -31,11 +31,16 @@ export function StoryToolbar({ editor, onLink, onPictures, controls }: Props) {
     HISTORY_ACTS,
   ];
   const acts = groups.flat();
-  const state = useEditorState({
-    editor,
-    selector: ({ editor: now }) =>
-      acts.map((act) => `${act.isOn?.(now) ? 1 : 0}${(act.can?.(now) ?? true) ? 1 : 0}`).join(),
-  }).split(',');
+  // What holds at the cursor is asked anew whenever the editor has changed.
+  const [, lookAgain] = useReducer((times: number) => times + 1, 0);
+  useEffect(() => {
+    editor.on('create', lookAgain);
+    editor.on('transaction', lookAgain);
+    return () => {
+      editor.off('create', lookAgain);
+      editor.off('transaction', lookAgain);
+    };
+  }, [editor]);
   const [current, setCurrent] = useState(0);
   const bar = useRef<HTMLDivElement>(null);
 
@@ -70,9 +75,8 @@ export function StoryToolbar({ editor, onLink, onPictures, controls }: Props) {
         <div key={group[0]?.id} className="flex flex-wrap">
           {group.map((act) => {
             const index = acts.indexOf(act);
-            const flags = state[index] ?? '01';
-            const on = flags.startsWith('1');
-            const idle = flags.endsWith('0');
+            const on = act.isOn?.(editor) ?? false;
+            const idle = !(act.can?.(editor) ?? true);
             return (
               <button
                 key={act.id}

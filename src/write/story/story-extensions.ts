@@ -103,7 +103,11 @@ const Picture = Node.create({
     return ['figure', HTMLAttributes];
   },
   addNodeView() {
-    return ReactNodeViewRenderer(PictureInStory);
+    return ReactNodeViewRenderer(PictureInStory, {
+      // Fields and buttons of the picture are no business of the text around it.
+      stopEvent: ({ event }) =>
+        event.target instanceof Element && event.target.closest('[data-controls]') !== null,
+    });
   },
 });
 

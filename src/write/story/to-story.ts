@@ -38,13 +38,12 @@ const TOP: readonly string[] = [
 
 /**
  * The editor's document as a story: only the nodes, marks and attributes that a story has, so that
- * whatever was pasted or is added by an extension, the result can be kept. The empty paragraph that
- * the editor keeps at its end for writing on is no part of the story.
+ * whatever was pasted or is added by an extension, the result can be kept. Empty paragraphs at the
+ * end, where the editor keeps one for writing on, are no part of the story.
  */
 export function toStory(doc: EditorNode): Story {
   const content = blocksOf(doc.content ?? [], TOP);
-  const last = content[content.length - 1];
-  if (content.length > 1 && last?.type === 'paragraph' && last.content === undefined) content.pop();
+  while (content.length > 1 && isEmptyParagraph(content[content.length - 1])) content.pop();
   return { type: 'doc', content: content.length > 0 ? content : [{ type: 'paragraph' }] };
 }
 
@@ -55,6 +54,9 @@ export function toStory(doc: EditorNode): Story {
 export function fromStory(story: Story): EditorNode {
   return toStory(story);
 }
+
+const isEmptyParagraph = (block: StoryBlock | undefined): boolean =>
+  block?.type === 'paragraph' && block.content === undefined;
 
 function blocksOf(nodes: readonly EditorNode[], allowed: readonly string[]): StoryBlock[] {
   return nodes.flatMap((node) => {

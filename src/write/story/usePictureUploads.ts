@@ -1,5 +1,6 @@
 import { useEffect, useEffectEvent, useRef, useState } from 'react';
 import { MAX_PICTURE_BYTES, pictureSchema, type Picture } from '#shared/api/pictures.ts';
+import { ProblemError } from '../../http/client.ts';
 import { upload } from '../../http/upload.ts';
 
 export interface PictureUpload {
@@ -8,8 +9,16 @@ export interface PictureUpload {
   readonly state:
     | { readonly kind: 'waiting' }
     | { readonly kind: 'sending'; readonly share: number }
-    | { readonly kind: 'failed'; readonly reason: string };
+    | {
+        readonly kind: 'failed';
+        readonly reason: string;
+        /** Sent again it may go through; what the server refused it refuses again. */
+        readonly again: boolean;
+      };
 }
+
+/** Too large, wrong type, no picture: about the file, not about the way to the server. */
+const REFUSALS = [413, 415, 422];
 
 /**
  * Pictures on their way to the server, one after another in the order they were chosen in; each can
@@ -47,6 +56,7 @@ export function usePictureUploads(noteId: number, onPicture: (picture: Picture) 
         setState(id, {
           kind: 'failed',
           reason: error instanceof Error ? error.message : 'The upload did not work.',
+          again: !(error instanceof ProblemError && REFUSALS.includes(error.problem.status)),
         });
       }
     }
@@ -70,7 +80,7 @@ export function usePictureUploads(noteId: number, onPicture: (picture: Picture) 
           // What the server would refuse anyway is not sent first.
           state:
             file.size > MAX_PICTURE_BYTES
-              ? { kind: 'failed', reason: 'A picture may have at most 16 MiB.' }
+              ? { kind: 'failed', reason: 'A picture may have at most 16 MiB.', again: false }
               : { kind: 'waiting' },
         };
       });
