@@ -31,7 +31,7 @@ const OWN_PICTURE = /^\/media\/pictures\/[0-9a-f]{32}\/\d{1,5}\.webp$/;
 const OWN_PICTURES =
   /^\/media\/pictures\/[0-9a-f]{32}\/\d{1,5}\.webp \d{1,5}w(, \/media\/pictures\/[0-9a-f]{32}\/\d{1,5}\.webp \d{1,5}w)*$/;
 const SIZES = /^\(min-width: \d+rem\) \d+rem, 100vw$/;
-const LINK = /^(https?:\/\/|mailto:)[^\s\\]+$/i;
+const LINK = /^(https?:\/\/[^\s\\/?#@\p{Cc}\p{Cf}]+([/?#]|$)|mailto:)[^\s\\\p{Cc}\p{Cf}]*$/iu;
 const NUMBER = /^\d{1,5}$/;
 
 /** @type {Record<string, RegExp>} */
@@ -40,6 +40,7 @@ const ALLOWED_VALUES = {
   srcset: OWN_PICTURES,
   sizes: SIZES,
   href: LINK,
+  rel: /^noopener nofollow ugc$/,
   start: NUMBER,
   width: NUMBER,
   height: NUMBER,
@@ -58,6 +59,12 @@ purify.addHook('uponSanitizeAttribute', (node, data) => {
     (pattern === undefined || pattern.test(value)) &&
     (data.attrName !== 'class' || (CLASSES[element] ?? []).includes(value));
   if (!right) data.keepAttr = false;
+});
+purify.addHook('uponSanitizeElement', (node) => {
+  // An element made with `is` is written out with it even when the attribute has been removed.
+  if (node.nodeType === 1 && /** @type {Element} */ (node).hasAttribute('is')) {
+    /** @type {Element} */ (node).remove();
+  }
 });
 purify.addHook('afterSanitizeAttributes', (node) => {
   if (node.nodeName === 'A' && node.hasAttribute('href')) {
@@ -79,10 +86,10 @@ export function sanitise(html) {
   });
 }
 
-parentPort?.on('message', ({ id, html }) => {
+parentPort?.on('message', (html) => {
   try {
-    parentPort?.postMessage({ id, html: sanitise(html) });
+    parentPort?.postMessage(sanitise(html));
   } catch {
-    parentPort?.postMessage({ id, html: null });
+    parentPort?.postMessage(null);
   }
 });

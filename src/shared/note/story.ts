@@ -9,7 +9,7 @@ export const MAX_STORY_NODES = 2000;
 export const MAX_STORY_DEPTH = 20;
 export const MAX_STORY_BYTES = 200_000;
 
-const SAFE_LINK = /^(https?:\/\/|mailto:)[^\s\\]+$/i;
+const SAFE_LINK = /^(https?:\/\/|mailto:)[^\s\\\p{Cc}\p{Cf}]+$/iu;
 
 /** Only http, https and mailto, without credentials, spaces, backslashes or control characters. */
 export function isSafeLink(href: string): boolean {
