@@ -1,8 +1,10 @@
+import { join } from 'node:path';
 import { loadDemo } from '../../seeds/development/load-demo.ts';
 import { readConfig } from '../config.ts';
 import { openDatabase } from '../database/open-database.ts';
 import { createLog } from '../log.ts';
-import { withLocalSettings } from '../start/local-settings.ts';
+import { DATA_FOLDER, withLocalSettings } from '../start/local-settings.ts';
+import { makePrivateFolder, writePrivateJson } from '../start/private-files.ts';
 import { diskStore } from '../storage/file-store.ts';
 import { CommandError, runCommand, say } from './run-command.ts';
 
@@ -18,7 +20,9 @@ await runCommand(async () => {
       throw new CommandError('This database already has members: the demo is left out.');
     }
     const store = diskStore(config.uploadsFolder);
-    await loadDemo({ config, db, log: createLog(config), store });
+    const accounts = await loadDemo({ config, db, log: createLog(config), store });
+    makePrivateFolder(DATA_FOLDER);
+    writePrivateJson(join(DATA_FOLDER, 'demo-accounts.json'), accounts);
     say('The demo is loaded.');
   } finally {
     await db.destroy();

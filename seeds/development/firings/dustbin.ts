@@ -65,6 +65,28 @@ export const dustbin: readonly FiringTold[] = [
     ),
   },
   {
+    key: 'dustbin-2025-04-13',
+    kiln: 'dustbin',
+    author: 'imke',
+    date: '2025-04-13',
+    time: '10:00',
+    published: '2025-04-15',
+    title: 'A second survey, nothing altered: 709 °C',
+    set: { ...base, airCelsius: 11, gasUsedKg: 2.5 },
+    target: 985,
+    because: 'gave-up',
+    climb: { level: 713, rate: 45, giveUp: 60, by: 'logger-10' },
+    pieces: [bowls(unmelted)],
+    troubles: ['stall', 'dull-glaze'],
+    causes: ['cold-shelf'],
+    says: { stallCelsius: 709 },
+    story: story(
+      p(
+        'A measurement that cannot be repeated is an anecdote. Same kiln, same bowls, a fortnight later: 709 °C, and 168 °C at the outer face of the base against 171. The fibre is on order.',
+      ),
+    ),
+  },
+  {
     key: 'dustbin-2025-05-03',
     kiln: 'dustbin',
     author: 'imke',

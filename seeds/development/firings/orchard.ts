@@ -54,6 +54,27 @@ export const orchard: readonly FiringTold[] = [
     ),
   },
   {
+    key: 'orchard-2025-06-14',
+    kiln: 'orchard',
+    author: 'leocadia',
+    date: '2025-06-14',
+    time: '10:10',
+    published: '2025-06-17',
+    title: 'The same toast, the same 717',
+    set: { ...base, airCelsius: 20 },
+    target: 1000,
+    because: 'gave-up',
+    climb: { level: 721, rate: 46, giveUp: 58, by: 'logger-30' },
+    pieces: [tiles(unmelted)],
+    troubles: ['stall', 'dull-glaze'],
+    says: { stallCelsius: 717 },
+    story: story(
+      p(
+        'Meant to move the rack and was talked out of it by a wasp. Fired it exactly as last week and got exactly last week, plus one degree. Four plums, since it took a little longer to be sure.',
+      ),
+    ),
+  },
+  {
     key: 'orchard-2025-06-21',
     kiln: 'orchard',
     author: 'leocadia',

@@ -153,6 +153,8 @@ export const unpublished: readonly FiringTold[] = [
     time: '13:00',
     status: 'sent-back',
     title: 'A plate for the sluice-keeper',
+    reason:
+      'Two small questions about the cooling, Agnes, and it can go up. The crack is the interesting part.',
     set: {
       ...yard,
       burnerAngleDegrees: 70,
@@ -195,6 +197,8 @@ export const unpublished: readonly FiringTold[] = [
     time: '10:30',
     status: 'sent-back',
     title: 'Windfall firing',
+    reason:
+      'A good short note. One question about the leaves, since people search for what was changed.',
     set: {
       ...yard,
       burnerAngleDegrees: 45,

@@ -1,7 +1,7 @@
 import { crackleLines, inkCrackle } from './crackle.ts';
 import { penStroke, smooth, wander, type Point } from './lines.ts';
 import { between, normal, seeded, type Random } from './random.ts';
-import { noisePaint, sheet, tableGround, type Drawing } from './sheet.ts';
+import { noisePaint, OVER, sheet, tableGround, type Drawing } from './sheet.ts';
 import { bodyPath, drawVessel, onVessel, wrap, type Vessel } from './vessel.ts';
 
 /** Pots whose surface is smoke and carbon: horsehair, feather, slip-resist, dipped, saggar. */
@@ -373,13 +373,7 @@ function shelling(): Drawing {
     );
   });
   const shell = `<clipPath id="egg"><path d="${bodyPath(egg)}"/></clipPath><g clip-path="url(#egg)"><path d="${smooth(patch, true)}" transform="translate(-7 8)" fill="#1d1917" opacity="0.55" filter="url(#soft6)"/><path d="${smooth(patch, true)}" fill="#cfc3b1" filter="url(#rough)"/><path d="${smooth(patch, true)}" fill="#3b332d" filter="url(#speck)" opacity="0.8"/><path d="${bodyPath(egg)}" fill="url(#ps)" opacity="0.7"/></g>`;
-  return {
-    ...base,
-    svg: base.svg.replace(
-      '<rect width="1600" height="1200" filter="url(#grain)"',
-      `${shell}${shards}<rect width="1600" height="1200" filter="url(#grain)"`,
-    ),
-  };
+  return { ...base, svg: base.svg.replace(OVER, `${shell}${shards}`) };
 }
 
 export const smokePots: readonly (() => Drawing)[] = [

@@ -1,5 +1,5 @@
 /**
- * The sheet every drawing lies on: ground, light, shared filters, paper grain, and the small word
+ * The sheet every drawing lies on: ground, light, shared filters, and the small word
  * that says what it is.
  */
 export interface Drawing {
@@ -8,6 +8,9 @@ export interface Drawing {
   readonly height: number;
   readonly svg: string;
 }
+
+/** Where a drawing may lay something over everything but the corner word. */
+export const OVER = '<g/>';
 
 export const SOOT = '#2a2826';
 export const SOOT_2 = '#5d5954';
@@ -45,7 +48,6 @@ ${[2, 6, 14, 30, 60].map(blur).join('')}
 <filter id="smoke" x="-20%" y="-20%" width="140%" height="140%"><feTurbulence type="fractalNoise" baseFrequency="0.006 0.009" numOctaves="2" seed="${seed}" result="t"/><feDisplacementMap in="SourceGraphic" in2="t" scale="120" xChannelSelector="R" yChannelSelector="G"/><feGaussianBlur stdDeviation="13"/></filter>
 <filter id="ragged" x="-20%" y="-20%" width="140%" height="140%"><feTurbulence type="fractalNoise" baseFrequency="0.018" numOctaves="3" seed="${seed + 1}" result="t"/><feDisplacementMap in="SourceGraphic" in2="t" scale="26" xChannelSelector="R" yChannelSelector="G"/></filter>
 <filter id="rough" x="-5%" y="-5%" width="110%" height="110%"><feTurbulence type="fractalNoise" baseFrequency="0.035" numOctaves="2" seed="${seed + 2}" result="t"/><feDisplacementMap in="SourceGraphic" in2="t" scale="5" xChannelSelector="R" yChannelSelector="G"/></filter>
-<filter id="grain" x="0" y="0" width="100%" height="100%" color-interpolation-filters="sRGB"><feTurbulence type="fractalNoise" baseFrequency="0.8" numOctaves="2" seed="${seed + 3}"/><feColorMatrix type="matrix" values="0 0 0 0 0.15 0 0 0 0 0.14 0 0 0 0 0.12 1.1 0 0 0 -0.44"/></filter>
 <filter id="speck" x="0" y="0" width="100%" height="100%" color-interpolation-filters="sRGB"><feTurbulence type="fractalNoise" baseFrequency="0.32" numOctaves="2" seed="${seed + 4}"/><feColorMatrix type="matrix" values="0 0 0 0 0.13 0 0 0 0 0.11 0 0 0 0 0.1 5 0 0 0 -3.35"/></filter>`;
 
 export interface SheetOptions {
@@ -65,7 +67,7 @@ export function sheet(options: SheetOptions): Drawing {
   const { key, seed, width = 1600, height = 1200, ground, defs = '', body } = options;
   const svg = `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${width} ${height}">
 <defs>${sharedDefs(seed)}${defs}</defs>${ground}${body}
-<rect width="${width}" height="${height}" filter="url(#grain)" opacity="0.22"/>
+${OVER}
 <text x="${width - 34}" y="${height - 30}" text-anchor="end" font-family="DejaVu Serif, Georgia, serif" font-style="italic" font-size="25" fill="${options.wordColour ?? SOOT_2}" fill-opacity="0.85">drawing</text></svg>`;
   return { key, width, height, svg };
 }

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { demo, type DemoFiring } from '../../../seeds/development/demo.ts';
 import { allDrawings } from '../../../seeds/development/pictures/all-drawings.ts';
+import { drawnPicture, notDrawnYet } from '../../../seeds/development/pictures/drawn-pictures.ts';
 import { openChecks } from '#shared/note/checks/check.ts';
 import { kilnFieldsSchema, type KilnFields } from '#shared/note/kiln-fields.ts';
 import { noteFieldsSchema, type NoteFields } from '#shared/note/note-fields.ts';
@@ -207,8 +208,8 @@ describe('each note of the demo', () => {
 });
 
 describe('the evidence in the demo', () => {
-  const stall = cellsOf('stall', withReading);
-  const cell = (cells: typeof stall, change: Parameters<typeof stall.get>[0]) =>
+  type Cells = ReturnType<typeof cellsOf>;
+  const cell = (cells: Cells, change: Parameters<Cells['get']>[0]) =>
     cells.get(change) ?? { pairs: 0, gone: 0, members: 0 };
 
   test.each([
@@ -254,6 +255,12 @@ describe('the pictures of the demo', () => {
     expect(new Set(drawings.map(({ key }) => key)).size).toBe(drawings.length);
     expect(new Set(drawings.map(({ svg }) => svg)).size).toBe(drawings.length);
     expect(drawings.every(({ svg }) => svg.includes('>drawing</text>'))).toBe(true);
+  });
+
+  test('the files lie drawn as the drawings are now', () => {
+    expect(notDrawnYet().map(({ key }) => key)).toEqual([]);
+    for (const { key } of drawings)
+      expect(drawnPicture(key).subarray(0, 2).toString('hex')).toBe('ffd8');
   });
 
   test('the same seed draws the same picture', () => {
