@@ -1,6 +1,6 @@
 import { Link, useLocation } from 'react-router-dom';
 import { paths } from '#shared/paths.ts';
-import { ProblemError } from '../http/client.ts';
+import { OfflineError, ProblemError } from '../http/client.ts';
 import { Notice } from '../ui/Notice.tsx';
 import { faultsOf } from './form-faults.ts';
 
@@ -50,18 +50,24 @@ function wordsFor(
     const { title, detail, retryAfter, code } = error.problem;
     const wait =
       code === 'too-many' && retryAfter !== undefined ? ` That is at ${clockIn(retryAfter)}.` : '';
-    return { heading: title, text: detail === title ? (NEXT[code] ?? '') : `${detail}${wait}` };
+    // The heading is not said twice.
+    const rest = detail.startsWith(title)
+      ? detail.slice(title.length).replace(/^[.\s]+/, '')
+      : detail;
+    return { heading: title, text: rest === '' ? (NEXT[code] ?? '') : `${rest}${wait}` };
   }
   return {
     heading: 'This did not go through',
-    text: error instanceof Error ? error.message : 'Try again in a moment.',
+    text:
+      error instanceof OfflineError
+        ? error.message
+        : 'A part of this page broke. What you typed is still here; try again.',
   };
 }
 
 /** What to do about refusals whose title says it all. */
 const NEXT: Readonly<Record<string, string>> = {
   'wrong-credentials': 'Look at both once more; capitals count in the password.',
-  suspended: 'Write to the people who run this site if you think it is a mistake.',
   'sign-in-needed': 'Your session has ended. What you typed stays here until you leave the page.',
   'link-used': 'Each link works once and for a short time; only the newest of several works.',
   busy: 'Try again in a few seconds.',

@@ -6,7 +6,6 @@ import { ROLES } from '#shared/vocabulary/statuses.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
 import { NoteRows } from '../notes/NoteRows.tsx';
 import { dayWords } from '../notes/note-words.ts';
-import { LinkButton } from '../ui/LinkButton.tsx';
 import { Reading } from '../ui/Reading.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
 import { usePageTitle } from '../ui/usePageTitle.ts';
@@ -39,9 +38,9 @@ export function MemberPage() {
           <p className="max-w-measure font-story text-story whitespace-pre-line">{member.about}</p>
         )}
         {me?.id === member.id && (
-          <LinkButton to={paths.settings} kind="quiet">
+          <Link to={paths.settings} className="link text-small">
             Change this in your settings
-          </LinkButton>
+          </Link>
         )}
       </header>
       {member.kilns.length > 0 && (

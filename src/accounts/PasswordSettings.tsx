@@ -35,6 +35,7 @@ export function PasswordSettings({ me }: { readonly me: Me }) {
   });
   return (
     <SettingsForm
+      id="password"
       heading="Password"
       error={changing.error}
       fields={['/current', '/next']}
@@ -98,6 +99,7 @@ export function AddressSettings({ me }: { readonly me: Me }) {
   });
   return (
     <SettingsForm
+      id="address"
       heading="Address"
       lead={
         <>

@@ -40,14 +40,15 @@ export function ProfileSettings({ me }: { readonly me: Me }) {
   });
   return (
     <SettingsForm
+      id="your-page"
       heading="Your page"
       lead={
         <>
-          Everybody sees this, on{' '}
+          Everybody sees this: all of it on{' '}
           <Link to={paths.member(me.id)} className="link">
             your page
-          </Link>{' '}
-          and your name over your notes.
+          </Link>
+          , and your name over your notes.
         </>
       }
       error={saving.error}

@@ -30,6 +30,7 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
   });
   return (
     <SettingsForm
+      id="reading"
       heading="How you read and what is mailed"
       lead="Kept with your account, so it is the same on every device."
       error={saving.error}

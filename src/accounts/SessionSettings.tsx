@@ -31,6 +31,7 @@ export function SessionSettings({ me }: { readonly me: Me }) {
   });
   return (
     <SettingsSection
+      id="sessions"
       heading="Where you are signed in"
       lead="End what you do not know, and change your password then."
     >

@@ -2,17 +2,19 @@ import { useId, type ReactNode } from 'react';
 import { AccountForm } from './AccountForm.tsx';
 
 interface SectionProps {
+  /** Its fragment in the address of the page. */
+  readonly id: string;
   readonly heading: string;
   readonly lead?: ReactNode;
   readonly children: ReactNode;
 }
 
 /** A part of the settings under its heavy rule. */
-export function SettingsSection({ heading, lead, children }: SectionProps) {
-  const id = useId();
+export function SettingsSection({ id, heading, lead, children }: SectionProps) {
+  const headingId = useId();
   return (
-    <section aria-labelledby={id} className="space-y-2 border-t-2 border-soot pt-3">
-      <h2 id={id} className="text-section">
+    <section id={id} aria-labelledby={headingId} className="space-y-2 border-t-2 border-soot pt-3">
+      <h2 id={headingId} className="text-section">
         {heading}
       </h2>
       {lead && <p className="max-w-measure text-small text-soot-2">{lead}</p>}

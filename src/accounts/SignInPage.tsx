@@ -23,10 +23,10 @@ export function SignInPage() {
   const me = session.data?.me ?? null;
   if (me && session.isFetchedAfterMount) return <Navigate to={next} replace />;
   if (me) return <Skeleton words="Finding out whether you are signed in" shape="text" count={3} />;
-  return <SignInForm cameFrom={next === paths.front ? '' : next} />;
+  return <SignInForm cameFrom={next !== paths.front} />;
 }
 
-function SignInForm({ cameFrom }: { readonly cameFrom: string }) {
+function SignInForm({ cameFrom }: { readonly cameFrom: boolean }) {
   const client = useQueryClient();
   const [email, setEmail] = useState('');
   const [password, setPassword] = useState('');
@@ -37,12 +37,7 @@ function SignInForm({ cameFrom }: { readonly cameFrom: string }) {
   });
   const { error } = signingIn;
   return (
-    <AccountPage
-      title="Sign in"
-      lead={
-        cameFrom === '' ? undefined : 'The page you were going to is for members; it opens next.'
-      }
-    >
+    <AccountPage title="Sign in" lead={cameFrom ? 'You go on to where you were.' : undefined}>
       <AccountForm
         error={error}
         fields={['/email', '/password']}
@@ -75,7 +70,7 @@ function SignInForm({ cameFrom }: { readonly cameFrom: string }) {
           </Link>
         </FormFoot>
       </AccountForm>
-      <p className="border-t border-line pt-4 text-small">
+      <p className="text-small">
         Not a member yet?{' '}
         <Link to={paths.join} className="link">
           Join

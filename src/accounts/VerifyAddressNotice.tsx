@@ -29,7 +29,7 @@ export function VerifyAddressNotice() {
           <Button busy={sending.isPending} onClick={() => sending.mutate()}>
             Send the mail again
           </Button>
-          <Link to={paths.settings} className="link self-center text-small">
+          <Link to={`${paths.settings}#address`} className="link self-center text-small">
             Change the address
           </Link>
         </>

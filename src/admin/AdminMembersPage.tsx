@@ -120,11 +120,15 @@ function columnsFor(
     {
       key: 'name',
       heading: 'Name',
-      cell: (member) => (
-        <Link to={paths.member(member.id)} className="link break-words">
-          {member.name}
-        </Link>
-      ),
+      // Who has not confirmed an address has no page yet.
+      cell: (member) =>
+        member.emailVerified ? (
+          <Link to={paths.member(member.id)} className="link break-words">
+            {member.name}
+          </Link>
+        ) : (
+          <span className="break-words">{member.name}</span>
+        ),
     },
     {
       key: 'address',
