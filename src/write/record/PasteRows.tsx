@@ -21,7 +21,7 @@ export function PasteRows({ unit, onReadings, onTable }: Props) {
   const asked = useDeferredValue(text);
   const read = useMemo(() => (asked.trim() === '' ? null : readPasted(asked, unit)), [asked, unit]);
   return (
-    <div className="@container space-y-3">
+    <div className="@container space-y-3 [&_textarea]:max-h-64">
       <TextArea
         label="Pasted columns"
         hint={`A minute and a temperature a line, such as “12 310” or “0:12; 310”; °${unit} unless a line says otherwise. A whole table with column names works too.`}

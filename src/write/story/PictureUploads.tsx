@@ -96,7 +96,7 @@ export function UnplacedPictures({ pictures, onPlace, numberOf }: UnplacedProps)
         {pictures.map((picture) => (
           <li
             key={picture.name}
-            className="flex items-center justify-between gap-4 border-b border-line py-1.5"
+            className="grid max-w-measure grid-cols-[1fr_auto] items-center gap-4 border-b border-line py-1.5"
           >
             <img
               src={pictureUrl(picture.name, picture.widths[0] ?? picture.width)}

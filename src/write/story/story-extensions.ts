@@ -57,13 +57,17 @@ const Aside = Node.create({
     };
   },
   parseHTML() {
-    return [{ tag: 'aside[data-kind]', contentElement: '[data-content]' }];
+    return [{ tag: 'div[data-kind]', contentElement: '[data-content]' }];
   },
   renderHTML({ node, HTMLAttributes }) {
     const kind: AsideKind = node.attrs['kind'] === 'change' ? 'change' : 'caution';
     return [
-      'aside',
-      mergeAttributes(HTMLAttributes, { class: kind, 'aria-label': ASIDE_WORDS[kind] }),
+      'div',
+      mergeAttributes(HTMLAttributes, {
+        class: `story-aside ${kind}`,
+        role: 'note',
+        'aria-label': ASIDE_WORDS[kind],
+      }),
       ['p', { class: 'aside-label', contenteditable: 'false' }, ASIDE_WORDS[kind]],
       ['div', { 'data-content': '' }, 0],
     ];
