@@ -145,7 +145,8 @@ export function defineRoute<
     const admit: RequestHandler = async (request, _response, next) => {
       requireAccess(request.actor, spec.access);
       if (isUnsafe(spec.method)) checkOwnOrigin(request, deps.config.publicUrl);
-      if (spec.rate) await takeTry(deps.db, spec.rate, whoAsks(request));
+      // A create is counted when it is one: its repeats only ask for the first answer again.
+      if (spec.rate && !spec.idempotent) await takeTry(deps.db, spec.rate, whoAsks(request));
       next();
     };
     const run: RequestHandler = async (request, response) => {
@@ -169,6 +170,7 @@ export function defineRoute<
                     .digest('hex'),
                 },
                 async () => {
+                  if (spec.rate) await takeTry(trx, spec.rate, whoAsks(request));
                   const fresh = await handle(trx);
                   return fresh === undefined
                     ? reply(204, null)
