@@ -70,6 +70,11 @@ export async function problemOf(response: Response): Promise<Problem> {
   };
 }
 
+/** After signing in elsewhere the token is another one: the next change fetches it anew. */
+export function forgetToken(): void {
+  token = null;
+}
+
 /** The headers every change needs. */
 export async function changeHeaders(): Promise<Record<string, string>> {
   return { 'X-Spyhole-Token': await ownToken() };
@@ -84,11 +89,10 @@ export async function send<Schema extends z.ZodType>(
   sending: Sending<Schema>,
 ): Promise<z.output<Schema>> {
   const response = await sendOnce(sending);
-  // After signing in elsewhere the token is another one: fetch it anew, once.
   if (response.status === 403 && sending.method !== undefined && sending.method !== 'GET') {
     const problem = await problemOf(response.clone());
     if (problem.code === 'token-refused') {
-      token = null;
+      forgetToken();
       return readAnswer(await sendOnce(sending), sending.answer);
     }
   }

@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import { problemSchema } from '#shared/api/problem.ts';
-import { changeHeaders, OfflineError, ProblemError } from './client.ts';
+import { changeHeaders, forgetToken, OfflineError, ProblemError } from './client.ts';
 
 export interface UploadOptions<Schema extends z.ZodType> {
   readonly path: string;
@@ -15,6 +15,18 @@ export interface UploadOptions<Schema extends z.ZodType> {
 
 /** Sends one file with progress and a way to cancel, which fetch cannot tell of yet. */
 export async function upload<Schema extends z.ZodType>(
+  options: UploadOptions<Schema>,
+): Promise<z.output<Schema>> {
+  try {
+    return await uploadOnce(options);
+  } catch (error) {
+    if (!(error instanceof ProblemError) || error.problem.code !== 'token-refused') throw error;
+    forgetToken();
+    return uploadOnce(options);
+  }
+}
+
+async function uploadOnce<Schema extends z.ZodType>(
   options: UploadOptions<Schema>,
 ): Promise<z.output<Schema>> {
   const headers = await changeHeaders();
