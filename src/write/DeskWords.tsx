@@ -4,7 +4,7 @@ import { momentWords } from '../notes/note-words.ts';
 import { Button } from '../ui/Button.tsx';
 import { Notice } from '../ui/Notice.tsx';
 import { goToField } from './go-to-field.ts';
-import { RemarkNote } from './FieldMargin.tsx';
+import { RemarkNote, RemarkWords } from './FieldMargin.tsx';
 
 const DECIDED: Readonly<Partial<Record<Draft['status'], string>>> = {
   'sent-back': 'Sent back to you',
@@ -50,7 +50,11 @@ export function DeskWords({ draft }: { readonly draft: Draft }) {
                     {labelOf(remark.pointer)}
                   </Button>
                 )}
-                <RemarkNote remark={remark} />
+                {draft.abilities.edit ? (
+                  <RemarkNote remark={remark} />
+                ) : (
+                  <RemarkWords remark={remark} mended={remark.mended} />
+                )}
               </li>
             ))}
           </ul>

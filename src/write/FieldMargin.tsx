@@ -1,4 +1,5 @@
 import { useMutation } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
 import type { Remark } from '#shared/api/notes.ts';
 import { findingText, type Finding } from '#shared/firing/findings.ts';
 import { momentWords } from '../notes/note-words.ts';
@@ -23,12 +24,29 @@ export function RemarkNote({ remark }: { readonly remark: Remark }) {
   });
   const mended = tick.isPending ? tick.variables : remark.mended;
   return (
+    <RemarkWords remark={remark} mended={mended}>
+      <CheckField label="Mended" checked={mended} onChecked={(checked) => tick.mutate(checked)} />
+    </RemarkWords>
+  );
+}
+
+/** A remark as words alone: where the note cannot be edited there is nothing to tick. */
+export function RemarkWords({
+  remark,
+  mended,
+  children,
+}: {
+  readonly remark: Remark;
+  readonly mended: boolean;
+  readonly children?: ReactNode;
+}) {
+  return (
     <div className="border-l-4 border-verdigris bg-verdigris-tint px-3 py-2 text-small text-verdigris-ink">
       <p className="text-note">
         From the desk{remark.by ? `, ${remark.by.name}` : ''}, {momentWords(remark.at)}
       </p>
       <p className={`whitespace-pre-line ${mended ? 'line-through' : ''}`}>{remark.text}</p>
-      <CheckField label="Mended" checked={mended} onChecked={(checked) => tick.mutate(checked)} />
+      {children}
     </div>
   );
 }

@@ -64,6 +64,11 @@ export const test = base.extend<{ visiting: Visiting }>({
 
     const watch = (page: Page): void => {
       page.on('pageerror', (error) => faults.push(`script error: ${error.message}`));
+      page.on('console', (message) => {
+        // A refused request is part of many a story; a part of a page that broke is not.
+        const isAnswer = message.text().startsWith('Failed to load resource');
+        if (message.type() === 'error' && !isAnswer) faults.push(`console: ${message.text()}`);
+      });
       page.on('request', (request) => {
         const url = new URL(request.url());
         const isOwn = url.origin === baseUrl || ['data:', 'blob:'].includes(url.protocol);
@@ -124,6 +129,13 @@ export const test = base.extend<{ visiting: Visiting }>({
         return found;
       },
     });
+    const { SHOTS: shots } = process.env;
+    if (shots !== undefined && task.result?.state === 'fail') {
+      // Where each window stood when the test failed, for whoever asks for it.
+      for (const [index, page] of opened.flatMap((context) => context.pages()).entries()) {
+        await page.screenshot({ path: `${shots}/failed-${index}.png`, fullPage: true });
+      }
+    }
     for (const context of opened) await context.close();
     if (faults.length > 0) {
       throw new Error(`Faults in the browser in “${task.name}”:\n${faults.join('\n')}`);
