@@ -23,9 +23,9 @@ export function HowComputed({ changesShown }: { readonly changesShown: number })
           <strong className="font-[650]">The verdict</strong> compares each change with the firings
           in which no change is named (Newcombe’s interval for a difference, Statistics in Medicine
           17, 1998, 873–890). Many changes looked at together find something by chance, so the level
-          is 1 − 0.05/m for m changes shown in a table; with {changesShown === 1 ? 'one' : changesShown} shown
-          here that is {levelWords(changesShown)}. “Better” is said only if that interval leaves out
-          nought.
+          is 1 − 0.05/m for m changes shown in a table; with{' '}
+          {changesShown === 1 ? 'one' : changesShown} shown here that is {levelWords(changesShown)}.
+          “Better” is said only if that interval leaves out nought.
         </p>
         <p>
           <strong className="font-[650]">The order</strong> is by the lower end of the bar. A change

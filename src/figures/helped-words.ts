@@ -14,6 +14,9 @@ export const START_WORDS = { cold: 'Cold starts', hot: 'Hot starts' } as const;
 
 const points = (share: number): string => formatNumber(share * 100);
 
+const moreOrFewer = (share: number): string =>
+  `${points(Math.abs(share))} ${share < 0 ? 'fewer' : 'more'}`;
+
 const firingsBy = ({ gone, firings, members }: WhatHelpedRow): string =>
   `${String(gone)} of ${String(firings)} ${firings === 1 ? 'firing' : 'firings'} by ${String(members)} ${members === 1 ? 'member' : 'members'}`;
 
@@ -34,9 +37,8 @@ export function rowSentence(row: WhatHelpedRow, trouble: string): string {
   if (difference === null) {
     return `${counted}; there are too few firings with no change named to hold this against.`;
   }
-  const more = difference.share >= 0 ? 'more' : 'less';
-  const size = `${points(Math.abs(difference.share))} in a hundred ${more} often than with no change named`;
-  const between = `anything from ${points(difference.low)} to ${points(difference.high)} fits the counts`;
+  const size = `${moreOrFewer(difference.share)} in a hundred than with no change named`;
+  const between = `anything from ${moreOrFewer(difference.low)} to ${moreOrFewer(difference.high)} fits the counts`;
   switch (row.verdict) {
     case 'better':
       return `${counted}, ${size} (${between}): better than changing nothing.`;

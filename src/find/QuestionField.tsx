@@ -39,7 +39,7 @@ export function QuestionField({ initial = '', large = false, onAsk }: Props) {
   const navigate = useNavigate();
   const listId = useId();
   const typed = useDeferredValue(text);
-  const { data } = useQuery(findQueries.suggestions(typed));
+  const { data } = useQuery(findQueries.suggestions(open ? typed : ''));
   const suggestions = open && text.trim().length > 1 ? (data?.suggestions ?? []) : [];
 
   const ask = (question: string): void => {

@@ -15,9 +15,10 @@ export function ReadAs({ parts, onToggle }: Props) {
   // The pressed button turns into its opposite: the focus stays on it.
   useEffect(() => {
     if (pressed.current === null) return;
-    list.current
-      ?.querySelector<HTMLElement>(`[data-part="${CSS.escape(pressed.current)}"] button`)
-      ?.focus();
+    const item = [...(list.current?.children ?? [])].find(
+      (child) => child instanceof HTMLElement && child.dataset['part'] === pressed.current,
+    );
+    item?.querySelector('button')?.focus();
     pressed.current = null;
   }, [parts]);
   const toggle = (key: string): void => {

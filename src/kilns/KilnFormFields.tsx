@@ -17,17 +17,21 @@ import { SelectField } from '../ui/SelectField.tsx';
 import { TextArea } from '../ui/TextArea.tsx';
 import { KilnChoice, KilnLine, KilnMeasure, type KilnFormPart } from './KilnField.tsx';
 
-const zones = (): string[] => Intl.supportedValuesOf('timeZone');
+/** Four hundred names: asked for once. */
+const ZONES = Intl.supportedValuesOf('timeZone').map((value) => ({
+  value,
+  label: value.replace(/_/g, ' '),
+}));
 
 /** Every field of a kiln, those that do not belong to its shape and wall left out. */
 export function KilnFormFields({ form }: { readonly form: KilnFormPart }) {
   const { fields, change, units } = form;
   const litres = insideVolumeLitres(fields);
-  const known = zones();
-  const zoneOptions = [
-    ...(fields.timeZone === '' || known.includes(fields.timeZone) ? [] : [fields.timeZone]),
-    ...known,
-  ].map((zone) => ({ value: zone, label: zone.replace(/_/g, ' ') }));
+  const zone = fields.timeZone;
+  const zoneOptions =
+    zone === '' || ZONES.some(({ value }) => value === zone)
+      ? ZONES
+      : [{ value: zone, label: zone }, ...ZONES];
   return (
     <div className="space-y-8">
       <Fieldset legend="What it is">
@@ -98,7 +102,7 @@ export function KilnFormFields({ form }: { readonly form: KilnFormPart }) {
           label={KILN_LABELS.timeZone}
           hint="Firings are dated by the clock where the kiln stands."
           options={zoneOptions}
-          value={fields.timeZone === '' ? null : fields.timeZone}
+          value={zone === '' ? null : zone}
           onValue={(timeZone) => change({ timeZone: timeZone ?? '' })}
         />
         <TextArea

@@ -1,0 +1,89 @@
+import { screen, waitFor } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { afterEach, describe, expect, it, vi } from 'vitest';
+import { kilnPageSchema } from '#shared/api/kilns.ts';
+import { EditKilnPage } from '../../../src/kilns/EditKilnPage.tsx';
+import { kilnFields } from '../../support/notes.ts';
+import { answerFetch, ok, refused } from '../../support/page-fetch.ts';
+import { aMe, aSession, renderPages } from '../../support/render-pages.tsx';
+
+afterEach(() => vi.unstubAllGlobals());
+
+const ROUTES = [
+  { path: '/kilns/:id/edit', Component: EditKilnPage },
+  { path: '/kilns/:id', Component: () => <p>The kiln’s page</p> },
+];
+const aKiln = (version: number, traits = {}) =>
+  kilnPageSchema.parse({
+    id: 4,
+    version,
+    keeper: { id: 7, name: 'Marit Quell' },
+    fields: kilnFields(traits),
+    volumeLitres: 48,
+    picture: null,
+    removed: false,
+    lentTo: [],
+    abilities: { edit: true, lend: true, remove: true, fire: true },
+    versions: [],
+    firings: [],
+  });
+const SIGNED_IN = { 'GET /api/session': ok(aSession(aMe())) };
+
+describe('EditKilnPage', () => {
+  it('keeps what was typed when the kiln was altered elsewhere, and saves over it when told to', async () => {
+    let saves = 0;
+    const sent = answerFetch({
+      ...SIGNED_IN,
+      'GET /api/kilns/4': ok(aKiln(3)),
+      'PUT /api/kilns/4': () => {
+        saves += 1;
+        return saves === 1
+          ? refused(412, 'stale', 'A newer version was saved elsewhere', {
+              current: { version: 5, fields: kilnFields({ jet: '0.8' }) },
+            })
+          : ok(aKiln(6));
+      },
+    });
+    renderPages(ROUTES, '/kilns/4/edit');
+    const jet = await screen.findByLabelText('Jet');
+    await userEvent.type(jet, '1.2');
+    await userEvent.click(screen.getByRole('button', { name: 'Save the kiln' }));
+    expect(await screen.findByText(/altered elsewhere since you opened it/)).toBeVisible();
+    expect(screen.getByText(/They differ in: Jet\./)).toBeVisible();
+    expect(jet).toHaveValue('1.2');
+    await userEvent.click(screen.getByRole('button', { name: /^Keep mine/ }));
+    await userEvent.click(screen.getByRole('button', { name: 'Save the kiln' }));
+    expect(await screen.findByText('The kiln’s page')).toBeVisible();
+    expect(sent.filter(({ method }) => method === 'PUT').at(-1)?.body).toMatchObject({
+      fields: { jet: '1.2' },
+    });
+  });
+
+  it('sends nothing while a measure lies outside its range, and goes to that field', async () => {
+    const sent = answerFetch({ ...SIGNED_IN, 'GET /api/kilns/4': ok(aKiln(3)) });
+    renderPages(ROUTES, '/kilns/4/edit');
+    const flue = await screen.findByLabelText('Flue opening');
+    await userEvent.clear(flue);
+    await userEvent.type(flue, '9000');
+    await userEvent.click(screen.getByRole('button', { name: 'Save the kiln' }));
+    await waitFor(() => expect(flue).toHaveFocus());
+    expect(screen.getByText('Something above must be mended first.')).toBeVisible();
+    expect(sent.filter(({ method }) => method !== 'GET')).toEqual([]);
+  });
+
+  it('says beside the field when nobody bears the name it is lent to', async () => {
+    answerFetch({
+      ...SIGNED_IN,
+      'GET /api/kilns/4': ok(aKiln(3)),
+      'PUT /api/kilns/4/loans': refused(422, 'bad-input', 'Some of this cannot be kept', {
+        errors: [{ pointer: '/members/0', detail: 'There is no member called “Nobdoy”.' }],
+      }),
+    });
+    renderPages(ROUTES, '/kilns/4/edit');
+    const name = await screen.findByLabelText('Name of a member');
+    await userEvent.type(name, 'Nobdoy');
+    await userEvent.click(screen.getByRole('button', { name: 'Lend' }));
+    await waitFor(() => expect(name).toHaveAccessibleDescription(/no member called “Nobdoy”/));
+    expect(name).toHaveValue('Nobdoy');
+  });
+});
