@@ -1,18 +1,13 @@
 import { Worker } from 'node:worker_threads';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
-import type { TableReadings } from '#shared/record/read-table.ts';
 import { inTransaction } from '../database/transaction.ts';
 import type { Deps } from '../deps.ts';
+import type { ReadOutcome } from './read-bytes.ts';
 import { storeContent } from './record-content.ts';
 import { findRecordById, lockRecord, markFailed, markReady } from './record-repository.ts';
 
 const LIMIT_MILLISECONDS = 20_000;
 const MEMORY_MEGABYTES = 512;
-
-/** What the thread answers: readings, or what is wrong with the file. */
-export type ReadOutcome =
-  | { read: Omit<TableReadings, 'rowCount'> & { skippedCount: number }; error?: undefined }
-  | { read?: undefined; error: { message: string; line: number | null } };
 
 /** Reads the bytes on a thread of their own, so that no file can hold up the page server. */
 function readOnThread(bytes: Uint8Array, choice: RecordChoice): Promise<ReadOutcome> {
@@ -55,13 +50,22 @@ async function bytesOf(deps: Deps, key: string): Promise<Uint8Array | null> {
 /**
  * The outbox job `read-record`: turns the stored file into readings, or says why it cannot. Running
  * twice gives the same; a record chosen anew meanwhile is read by the job of that choice.
+ *
+ * @param read how the bytes are read: on a thread, unless the file is known to be harmless
  */
-export async function readRecord(deps: Deps, recordId: number): Promise<void> {
+export async function readRecord(
+  deps: Deps,
+  recordId: number,
+  read: (
+    bytes: Uint8Array,
+    choice: RecordChoice,
+  ) => ReadOutcome | Promise<ReadOutcome> = readOnThread,
+): Promise<void> {
   const record = await findRecordById(deps.db, recordId);
   if (record?.status !== 'reading' || record.storageKey === null) return;
   const bytes = await bytesOf(deps, record.storageKey);
   const outcome: ReadOutcome = bytes
-    ? await readOnThread(bytes, record.choice)
+    ? await read(bytes, record.choice)
     : { error: { message: 'The file is gone; upload it again.', line: null } };
   await inTransaction(deps.db, async (trx) => {
     // Chosen anew while this was read: the job of that choice reads it again.

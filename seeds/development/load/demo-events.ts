@@ -9,6 +9,7 @@ import { saveNote, startNote } from '../../../server/notes/draft-service.ts';
 import { handInNote } from '../../../server/notes/hand-in-note.ts';
 import { findNote, type NoteRecord } from '../../../server/notes/note-repository.ts';
 import { addNotePicture } from '../../../server/pictures/picture-service.ts';
+import { readBytes } from '../../../server/records/read-bytes.ts';
 import { readRecord } from '../../../server/records/read-record.ts';
 import { addRecord } from '../../../server/records/record-service.ts';
 import type { DemoFiring } from '../demo.ts';
@@ -126,7 +127,8 @@ async function uploadRecord(
     secondColumn: record.secondProbe ? 2 : null,
     unit: 'C',
   });
-  await readRecord(deps, recordId);
+  // The demo's own files need no thread of their own, and there are a hundred of them.
+  await readRecord(deps, recordId, readBytes);
   return recordId;
 }
 
