@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import type { Me } from '#shared/api/accounts.ts';
 import { paths } from '#shared/paths.ts';
+import { momentWords } from '../notes/note-words.ts';
 import { Button } from '../ui/Button.tsx';
 import { Dialog } from '../ui/Dialog.tsx';
 import { useMessages } from '../ui/useMessages.ts';
@@ -106,9 +107,7 @@ function UnsentList({ unsent }: { readonly unsent: Unsent }) {
         {unsent.map(({ noteId, work }) => (
           <li key={noteId} className="border-b border-line py-1.5 text-small">
             {work.fields.title || `A note without a title (${String(noteId)})`}
-            <span className="block text-note text-soot-2">
-              written {new Date(work.at).toLocaleString('en-GB')}
-            </span>
+            <span className="block text-note text-soot-2">written {momentWords(work.at)}</span>
           </li>
         ))}
       </ul>

@@ -81,6 +81,12 @@ function State({ state }: { readonly state: OutboxState }) {
   );
 }
 
+/** A time that is well past is one of a job that was given up. */
+function nextTryWords(nextTryAt: string): string {
+  const isPast = Date.now() - new Date(nextTryAt).getTime() > 5 * 60_000;
+  return isPast ? 'not by itself' : momentWords(nextTryAt);
+}
+
 const TOPICS: Readonly<Record<string, string>> = { mail: 'Mail', 'index-note': 'Search index' };
 
 function FailedJobs({ failed }: { readonly failed: OutboxState['failed'] }) {
@@ -130,22 +136,24 @@ function FailedJobs({ failed }: { readonly failed: OutboxState['failed'] }) {
               heading: 'Why',
               cell: ({ lastError }) => <span className="break-words">{lastError}</span>,
             },
-            { key: 'next', heading: 'Next try', cell: ({ nextTryAt }) => momentWords(nextTryAt) },
+            { key: 'next', heading: 'Next try', cell: ({ nextTryAt }) => nextTryWords(nextTryAt) },
             {
               key: 'act',
               heading: 'Act',
               cell: (job) => (
-                <Button
-                  kind="quiet"
-                  icon="retry"
-                  label={`Try now: ${TOPICS[job.topic] ?? job.topic} ${job.key}`}
-                  busy={retrying.isPending && retrying.variables === job.id}
-                  onClick={() => {
-                    if (!retrying.isPending) retrying.mutate(job.id);
-                  }}
-                >
-                  Try now
-                </Button>
+                <span className="whitespace-nowrap">
+                  <Button
+                    kind="quiet"
+                    icon="retry"
+                    label={`Try now: ${TOPICS[job.topic] ?? job.topic} ${job.key}`}
+                    busy={retrying.isPending && retrying.variables === job.id}
+                    onClick={() => {
+                      if (!retrying.isPending) retrying.mutate(job.id);
+                    }}
+                  >
+                    Try now
+                  </Button>
+                </span>
               ),
             },
           ]}

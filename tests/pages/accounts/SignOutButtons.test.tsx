@@ -5,21 +5,14 @@ import { emptyNoteFields } from '#shared/note/note-fields.ts';
 import { SignOutButtons } from '../../../src/accounts/SignOutButtons.tsx';
 import { unsentFileText } from '../../../src/accounts/unsent-file.ts';
 import { allUnsent, keepUnsent } from '../../../src/write/unsent-work.ts';
+import { giveDialogs } from '../../support/dialogs.ts';
 import { answerFetch, ok, refused } from '../../support/page-fetch.ts';
 import { aMe, aSession, renderPages } from '../../support/render-pages.tsx';
 
 const ME = aMe();
 const DONE = { 'DELETE /api/session': ok(aSession(null)) };
 
-beforeEach(() => {
-  // The browser's dialog, as far as this page uses it: the test environment has none.
-  HTMLDialogElement.prototype.showModal = function show() {
-    this.open = true;
-  };
-  HTMLDialogElement.prototype.close = function close() {
-    this.open = false;
-  };
-});
+beforeEach(giveDialogs);
 afterEach(() => {
   vi.unstubAllGlobals();
   localStorage.clear();
