@@ -83,6 +83,24 @@ export function NotebookEntry({ note, units, scaleMinutes, gap }: Props) {
               <Reading>{formatDuration(note.timeToTemperatureMinutes)}</Reading> to temperature
             </span>
           )}
+          {published && (
+            <>
+              <span className="text-soot-2">{' · '}</span>
+              {revising ? (
+                <Link className="link" to={paths.note(note.id, note.slug)}>
+                  The published note
+                </Link>
+              ) : (
+                <Link
+                  className="link"
+                  to={paths.write(note.id)}
+                  aria-label={`Revise “${note.title || 'Untitled'}”`}
+                >
+                  Revise
+                </Link>
+              )}
+            </>
+          )}
         </p>
         {note.changes.length > 0 && (
           <p className="text-small">Changed: {changeWords(note.changes)}</p>
@@ -94,18 +112,6 @@ export function NotebookEntry({ note, units, scaleMinutes, gap }: Props) {
             {note.decisionReason}
           </p>
         )}
-        <p className="flex flex-wrap gap-x-5 text-small">
-          {revising && (
-            <Link className="link" to={paths.note(note.id, note.slug)}>
-              The published note
-            </Link>
-          )}
-          {published && !revising && (
-            <Link className="link" to={paths.write(note.id)}>
-              Revise
-            </Link>
-          )}
-        </p>
       </div>
     </li>
   );

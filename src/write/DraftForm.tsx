@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { openChecks } from '#shared/note/checks/check.ts';
 import { findingText } from '#shared/firing/findings.ts';
 import { Notice } from '../ui/Notice.tsx';
@@ -9,6 +9,7 @@ import type { DraftKeeper, KeptDraft } from './draft-keeper.ts';
 import { FieldMargin } from './FieldMargin.tsx';
 import { findingsBeside } from './finding-places.ts';
 import { WriteFormContext, type FormKiln, type WriteForm } from './form-context.ts';
+import { goToField } from './go-to-field.ts';
 import { HandInSection } from './HandInSection.tsx';
 import { KilnChoiceSection } from './KilnChoiceSection.tsx';
 import { PiecesSection } from './PiecesSection.tsx';
@@ -42,6 +43,7 @@ interface Props {
 export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, acts }: Props) {
   const { fields, draft, state } = kept;
   const { reading, stored } = useNoteReading(fields, draft, kiln);
+  const [withAllBlanks, setWithAllBlanks] = useState(draft.status !== 'draft');
   const form = useMemo((): WriteForm => {
     const { checks } = reading;
     return {
@@ -56,7 +58,7 @@ export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, act
       reading,
       checks,
       issuesAt: (pointer) =>
-        settledIssues(checks, fields.checkAnswers, pointer).map(({ check, settled }) => ({
+        settledIssues(checks, fields, pointer, withAllBlanks).map(({ check, settled }) => ({
           kind: check.kind,
           text: check.text,
           settled,
@@ -70,7 +72,7 @@ export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, act
         return <FieldMargin findings={findings} remarks={remarks} />;
       },
     };
-  }, [fields, draft, keeper, units, kilns, kiln, reading]);
+  }, [fields, draft, keeper, units, kilns, kiln, reading, withAllBlanks]);
   const open = openChecks(form.checks, fields.checkAnswers);
 
   return (
@@ -123,7 +125,14 @@ export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, act
         <ResultSection />
         <ChangesSection />
         <StorySection />
-        <HandInSection acts={acts} emailVerified={emailVerified} />
+        <HandInSection
+          acts={acts}
+          emailVerified={emailVerified}
+          onGoTo={(pointer) => {
+            setWithAllBlanks(true);
+            goToField(pointer);
+          }}
+        />
       </div>
     </WriteFormContext>
   );

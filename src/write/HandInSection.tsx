@@ -9,7 +9,6 @@ import { Notice } from '../ui/Notice.tsx';
 import { CautionsToRead } from './CautionsToRead.tsx';
 import { CheckActs } from './CheckActs.tsx';
 import { useWriteForm } from './form-context.ts';
-import { goToField } from './go-to-field.ts';
 import { RemoveNoteButton } from './RemoveNoteButton.tsx';
 import type { DraftActs } from './useDraftActs.ts';
 import { WriteSection } from './WriteSection.tsx';
@@ -17,10 +16,11 @@ import { WriteSection } from './WriteSection.tsx';
 interface Props {
   readonly acts: DraftActs;
   readonly emailVerified: boolean;
+  readonly onGoTo: (pointer: string) => void;
 }
 
 /** What is still open, the cautions, and the way to the desk. */
-export function HandInSection({ acts, emailVerified }: Props) {
+export function HandInSection({ acts, emailVerified, onGoTo }: Props) {
   const { fields, draft, checks } = useWriteForm();
   const { abilities } = draft;
   const open = openChecks(checks, fields.checkAnswers);
@@ -45,6 +45,7 @@ export function HandInSection({ acts, emailVerified }: Props) {
                 key={`${check.code} ${check.pointer}`}
                 check={check}
                 answered={answered.includes(check)}
+                onGoTo={onGoTo}
               />
             ))}
           </ol>
@@ -89,29 +90,36 @@ function openWords(open: readonly Check[]): string {
   return `Still open: ${parts.join(', ')}.`;
 }
 
-function OpenCheck({ check, answered }: { readonly check: Check; readonly answered: boolean }) {
+function OpenCheck(props: {
+  readonly check: Check;
+  readonly answered: boolean;
+  readonly onGoTo: (pointer: string) => void;
+}) {
+  const { check, answered, onGoTo } = props;
   return (
-    <li className="flex gap-2.5 border-b border-line py-2.5 text-small">
+    <li className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-2.5 border-b border-line py-2 text-small sm:grid-cols-[auto_minmax(0,42rem)_1fr]">
       <Icon
         name={answered ? 'done' : check.kind}
         className={`mt-0.5 size-4.5 ${answered ? 'text-soot-2' : 'text-caution'}`}
       />
-      <div className="min-w-0 max-w-measure grow">
+      <div className="min-w-0">
         <p className={answered ? 'text-soot-2' : ''}>
           <strong className="font-[650]">
             {answered ? 'Answered' : check.kind === 'must-mend' ? 'Must mend' : 'Look again'}.
           </strong>{' '}
           {check.text}
         </p>
+        <CheckActs check={check} />
+      </div>
+      <span className="col-start-2 sm:col-start-3 sm:justify-self-end">
         <Button
           kind="quiet"
           label={`Go to it: ${check.text}`}
-          onClick={() => goToField(check.pointer)}
+          onClick={() => onGoTo(check.pointer)}
         >
           Go to it
         </Button>
-        <CheckActs check={check} />
-      </div>
+      </span>
     </li>
   );
 }

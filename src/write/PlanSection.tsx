@@ -94,13 +94,15 @@ function NoHold() {
   const issues = value ? [...field.issues, ...issuesAt('/plan/holdKeptMinutes')] : field.issues;
   return (
     <PinnedField pointer="/plan/noHold">
-      <CheckField
-        {...field}
-        issues={issues}
-        label="No hold: drawn or shut off as soon as it was there"
-        checked={value}
-        onChecked={set}
-      />
+      <div className="@2xl:pl-[11.75rem]">
+        <CheckField
+          {...field}
+          issues={issues}
+          label="No hold: drawn or shut off as soon as it was there"
+          checked={value}
+          onChecked={set}
+        />
+      </div>
     </PinnedField>
   );
 }

@@ -12,8 +12,8 @@ const ZONES: readonly string[] = Intl.supportedValuesOf('timeZone');
 
 /** Day, hour, and how the kiln stood at the start. */
 export function WhenSection() {
-  const { draft } = useWriteForm();
-  const { value: date, set: setDate, ...dateField } = useGroupField('when', 'date');
+  const { draft, change } = useWriteForm();
+  const { value: date, set: _set, ...dateField } = useGroupField('when', 'date');
   const { value: time, set: setTime, ...timeField } = useGroupField('when', 'startTime');
   return (
     <WriteSection id="when" title="When">
@@ -23,7 +23,13 @@ export function WhenSection() {
           required
           {...dateField}
           value={date ?? ''}
-          onValue={(next) => setDate(next || null)}
+          onValue={(next) =>
+            change((now) => ({
+              ...now,
+              // A day is a day somewhere: without a kiln's time zone, where this browser is.
+              when: { ...now.when, date: next || null, timeZone: now.when.timeZone || OWN_ZONE },
+            }))
+          }
         />
       </PinnedField>
       <PinnedField pointer="/when/startTime">

@@ -10,7 +10,7 @@ interface Props {
 /** The table of contents, always in reach, with how much each section still asks. */
 export function WriteContents({ openIn, children }: Props) {
   return (
-    <div className="sticky top-0 z-30 -mx-4 flex flex-wrap items-center justify-between gap-x-6 border-b border-soot-2 bg-ash px-4 sm:-mx-8 sm:px-8">
+    <div className="sticky top-0 z-30 flex flex-wrap items-center justify-between gap-x-6 border-y border-soot-2 bg-ash">
       <nav aria-label="Sections of this note" className="min-w-0 max-w-full overflow-x-auto">
         <ol className="flex gap-x-4 text-small whitespace-nowrap">
           {WRITE_SECTIONS.map(({ id, title }) => {
@@ -19,7 +19,7 @@ export function WriteContents({ openIn, children }: Props) {
               <li key={id}>
                 <a
                   href={`#section-${id}`}
-                  className="inline-flex min-h-11 items-center gap-1.5 text-soot underline decoration-line underline-offset-4 hover:decoration-verdigris"
+                  className="group inline-flex min-h-11 items-center gap-1.5 text-soot no-underline"
                   onClick={(event) => {
                     event.preventDefault();
                     const section = document.getElementById(`section-${id}`);
@@ -27,7 +27,9 @@ export function WriteContents({ openIn, children }: Props) {
                     section?.focus({ preventScroll: true });
                   }}
                 >
-                  {title}
+                  <span className="underline decoration-line underline-offset-4 group-hover:decoration-verdigris">
+                    {title}
+                  </span>
                   {open > 0 && (
                     <span className="reading text-note text-caution">
                       {open}

@@ -71,7 +71,7 @@ interface Props {
 function KeptNote({ latest, kilns, me, onAskAgain }: Props) {
   const { units } = useSession();
   const [kept, keeper] = useDraftKeeper(me.id, latest);
-  const acts = useDraftActs(keeper, latest.id, me.id);
+  const acts = useDraftActs(keeper, latest.id);
   const kiln = useFormKiln(kilns, kept);
   useNewerDraft(keeper, latest);
   if (kept.state.kind === 'conflict') {

@@ -5,7 +5,7 @@ import { z } from 'zod';
 import { OfflineError, ProblemError } from '../http/client.ts';
 import { saveDraft } from './draft-mutations.ts';
 import { sameFields } from './field-differences.ts';
-import { forgetUnsent, keepUnsent, unsentFor } from './unsent-work.ts';
+import { forgetUnsent, keepUnsent, unsentFor, type UnsentWork } from './unsent-work.ts';
 
 /** How long after the last key a save goes out, and how long until it is tried again. */
 const PAUSE_MILLISECONDS = 1200;
@@ -37,6 +37,8 @@ export interface KeptDraft {
   readonly state: SaveState;
 }
 
+const newWriter = (): string => crypto.randomUUID().slice(0, 8);
+
 const staleSchema = z.object({
   version: z.number(),
   savedAt: z.string(),
@@ -55,33 +57,41 @@ export class DraftKeeper {
   #timer: ReturnType<typeof setTimeout> | null = null;
   #saving: Promise<void> | null = null;
   #dirty = false;
+  /** This page's own name for the copies it keeps. */
+  readonly #writer = newWriter();
+  /** The page whose copy was taken up; its copy goes when this page's is through. */
+  #takenUp: string | null = null;
   /** Sent without an answer so far: a save may have arrived though its answer was lost. */
   #unheard: NoteFields[] = [];
 
   constructor(memberId: number, draft: Draft) {
     this.#memberId = memberId;
     this.#kept = { fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } };
-    const unsent = unsentFor(memberId, draft.id);
-    if (!unsent || !draft.abilities.edit) return;
-    if (sameFields(unsent.fields, draft.fields)) {
-      forgetUnsent(memberId, draft.id);
-      return;
+    if (!draft.abilities.edit) return;
+    for (const { writer, work } of unsentFor(memberId, draft.id)) {
+      // A copy that arrived after all. Any other is taken up by this page, the last written first.
+      if (sameFields(work.fields, draft.fields)) forgetUnsent(memberId, draft.id, writer);
+      else if (!this.#dirty) this.#takeUp(writer, work);
     }
+  }
+
+  #takeUp(writer: string, work: UnsentWork): void {
+    const { draft } = this.#kept;
     this.#dirty = true;
-    if (unsent.fromVersion === draft.version) {
-      this.#kept = { ...this.#kept, fields: unsent.fields, state: { kind: 'waiting' } };
-    } else {
-      this.#kept = {
-        ...this.#kept,
-        fields: unsent.fields,
-        state: {
-          kind: 'conflict',
-          theirs: draft.fields,
-          theirVersion: draft.version,
-          theirsAt: draft.savedAt,
-        },
-      };
-    }
+    this.#takenUp = writer;
+    this.#kept = {
+      ...this.#kept,
+      fields: work.fields,
+      state:
+        work.fromVersion === draft.version
+          ? { kind: 'waiting' }
+          : {
+              kind: 'conflict',
+              theirs: draft.fields,
+              theirVersion: draft.version,
+              theirsAt: draft.savedAt,
+            },
+    };
   }
 
   readonly subscribe = (listener: () => void): (() => void) => {
@@ -169,7 +179,7 @@ export class DraftKeeper {
     };
     if (choice === 'theirs') {
       this.#dirty = false;
-      forgetUnsent(this.#memberId, draft.id);
+      this.#forget();
       this.#set({ fields: state.theirs, draft, state: { kind: 'saved', at: state.theirsAt } });
       return;
     }
@@ -181,6 +191,7 @@ export class DraftKeeper {
   /** The note is removed: nothing is sent any more. */
   abandon(): void {
     this.#dirty = false;
+    this.#forget();
     this.close();
   }
 
@@ -198,11 +209,15 @@ export class DraftKeeper {
 
   #keepHere(fields: NoteFields): boolean {
     const { id, version } = this.#kept.draft;
-    return keepUnsent(this.#memberId, id, {
-      fromVersion: version,
-      at: new Date().toISOString(),
-      fields,
-    });
+    const work = { fromVersion: version, at: new Date().toISOString(), fields };
+    return keepUnsent(this.#memberId, id, work, this.#writer);
+  }
+
+  #forget(): void {
+    for (const writer of [this.#writer, this.#takenUp]) {
+      if (writer !== null) forgetUnsent(this.#memberId, this.#kept.draft.id, writer);
+    }
+    this.#takenUp = null;
   }
 
   #schedule(milliseconds: number): void {
@@ -235,7 +250,7 @@ export class DraftKeeper {
         this.#keepHere(this.#kept.fields);
         this.#schedule(PAUSE_MILLISECONDS);
       } else {
-        forgetUnsent(this.#memberId, draft.id);
+        this.#forget();
       }
     } catch (error) {
       this.#failed(error);
@@ -250,7 +265,7 @@ export class DraftKeeper {
         const { version, savedAt, fields } = current.data;
         const draft = { ...this.#kept.draft, version, savedAt, fields };
         this.#dirty = !sameFields(fields, this.#kept.fields);
-        if (!this.#dirty) forgetUnsent(this.#memberId, draft.id);
+        if (!this.#dirty) this.#forget();
         this.#set({
           ...this.#kept,
           draft,

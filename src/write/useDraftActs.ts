@@ -6,10 +6,9 @@ import { noteQueries } from '../notes/note-queries.ts';
 import { useMessages } from '../ui/useMessages.ts';
 import { handIn, removeNote, revise, takeBack } from './draft-mutations.ts';
 import type { DraftKeeper } from './draft-keeper.ts';
-import { forgetUnsent } from './unsent-work.ts';
 
 /** What an author does with a note as a whole. Each tells how it went and can be tried again. */
-export function useDraftActs(keeper: DraftKeeper, noteId: number, memberId: number) {
+export function useDraftActs(keeper: DraftKeeper, noteId: number) {
   const tell = useMessages();
   const client = useQueryClient();
   const navigate = useNavigate();
@@ -48,7 +47,6 @@ export function useDraftActs(keeper: DraftKeeper, noteId: number, memberId: numb
       mutationFn: () => removeNote(noteId),
       onSuccess: async (answer) => {
         keeper.abandon();
-        forgetUnsent(memberId, noteId);
         tell({ kind: 'done', text: answer.message });
         await navigate(paths.notebook);
         await refresh();

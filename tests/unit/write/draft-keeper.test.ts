@@ -115,13 +115,13 @@ describe('keeping a draft', () => {
     type(keeper, 'A');
     await pass(500);
     type(keeper, 'A windy day');
-    expect(unsentFor(MEMBER, NOTE)?.fields.title).toBe('A windy day');
+    expect(unsentFor(MEMBER, NOTE)[0]?.work.fields.title).toBe('A windy day');
     expect(server.saves).toEqual([]);
     await pass(1300);
     expect(server.saves).toEqual(['A windy day']);
     expect(keeper.current().state).toEqual({ kind: 'saved', at: '2026-05-02T10:00:02.000Z' });
     expect(keeper.hasUnsent).toBe(false);
-    expect(unsentFor(MEMBER, NOTE)).toBeNull();
+    expect(unsentFor(MEMBER, NOTE)).toEqual([]);
   });
 
   it('has one save under way at a time, each on top of the version before', async () => {
@@ -179,7 +179,7 @@ describe('keeping a draft', () => {
     keeper.settle('theirs');
     expect(keeper.current().fields.title).toBe('from the phone');
     expect(keeper.hasUnsent).toBe(false);
-    expect(unsentFor(MEMBER, NOTE)).toBeNull();
+    expect(unsentFor(MEMBER, NOTE)).toEqual([]);
     type(keeper, 'and on');
     await pass(1300);
     expect(server.saves).toEqual(['and on']);
@@ -223,6 +223,27 @@ describe('keeping a draft', () => {
     expect(keeper.current().state).toMatchObject({ kind: 'conflict', theirs: { title: 'newer' } });
   });
 
+  it('keeps two tabs’ copies apart: one tab’s save does not drop what the other has not sent', async () => {
+    const one = opened();
+    const other = opened();
+    type(one, 'first tab');
+    await pass(1300);
+    type(other, 'second tab');
+    await pass(1300);
+    expect(other.current().state.kind).toBe('conflict');
+    type(one, 'first tab again');
+    await pass(1300);
+    expect(server.saves).toEqual(['first tab', 'first tab again']);
+    expect(unsentFor(MEMBER, NOTE).map(({ work }) => work.fields.title)).toEqual(['second tab']);
+    const reopened = opened();
+    expect(reopened.current()).toMatchObject({
+      fields: { title: 'second tab' },
+      state: { kind: 'conflict', theirs: { title: 'first tab again' } },
+    });
+    reopened.settle('theirs');
+    expect(unsentFor(MEMBER, NOTE)).toEqual([]);
+  });
+
   it('does not bring one member’s unsent work to another', () => {
     keepUnsent(MEMBER + 1, NOTE, { fromVersion: 1, at: '', fields: titled('not mine') });
     expect(opened().current().fields.title).toBe('');
@@ -256,6 +277,6 @@ describe('keeping a draft', () => {
       reason: 'This note is handed in now.',
     });
     expect(fetchRefusing).toHaveBeenCalledTimes(1);
-    expect(unsentFor(MEMBER, NOTE)?.fields.title).toBe('too late');
+    expect(unsentFor(MEMBER, NOTE)[0]?.work.fields.title).toBe('too late');
   });
 });
