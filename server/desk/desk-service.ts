@@ -11,7 +11,7 @@ import { lockNote, moveNote, type NoteChange, type NoteRecord } from '../notes/n
 import { noteSubject } from '../notes/note-subject.ts';
 import { statusAfter, type NoteAct } from '../notes/note-status.ts';
 import { projectNote } from '../notes/projection.ts';
-import { findRevision } from '../notes/revision-repository.ts';
+import { findRevision, wasHandedIn } from '../notes/revision-repository.ts';
 import { nudgeOutbox } from '../outbox/nudge.ts';
 import { enqueue, type MailJob } from '../outbox/outbox.ts';
 import { decisionsOf, sendRemarks } from './remark-repository.ts';
@@ -42,7 +42,12 @@ async function tooLate(trx: Knex, note: NoteRecord): Promise<AppError> {
 
 async function lockForStaff(trx: Knex, actor: SignedIn, noteId: number): Promise<NoteRecord> {
   const note = await lockNote(trx, noteId);
-  if (!note || note.status === 'draft') throw new AppError('not-found');
+  if (!note) throw new AppError('not-found');
+  if (note.status === 'draft') {
+    // A draft that never was at the desk is its author's secret; of one that was, staff know.
+    if (!(await wasHandedIn(trx, noteId))) throw new AppError('not-found');
+    throw new AppError('wrong-status', 'The author has taken this note back to go on with it.');
+  }
   if (note.authorId === actor.id) {
     throw new AppError(
       'not-allowed',
@@ -69,7 +74,9 @@ export async function lockedClaim(trx: Knex, actor: SignedIn, noteId: number): P
     }
     throw new AppError(
       'wrong-status',
-      'Your claim on this note has lapsed. Take it again; your remarks are kept.',
+      note.claimedBy === actor.id
+        ? 'Your claim on this note has lapsed. Take it again; your remarks are kept.'
+        : 'Take this note onto your desk first.',
     );
   }
   if (note.handedInRevisionId === null) throw await tooLate(trx, note);

@@ -87,6 +87,14 @@ export async function findRevision(db: Knex, revisionId: number): Promise<Revisi
   return row ? toRevision(row) : null;
 }
 
+/** Whether the note has ever been handed in. */
+export async function wasHandedIn(db: Knex, noteId: number): Promise<boolean> {
+  const row = await db('note_revisions')
+    .where('note_revisions.note_id', noteId)
+    .first<{ id: number } | undefined>('note_revisions.id');
+  return row !== undefined;
+}
+
 /** Adds the note's next revision. The caller holds the note's row locked, so numbers do not race. */
 export async function insertRevision(trx: Knex, revision: NewRevision): Promise<number> {
   const last = await trx('note_revisions')

@@ -4,7 +4,7 @@ import { turnstile } from '../http/turnstile.ts';
 
 const LIMIT_MILLISECONDS = 2000;
 /** The first story also waits for the parser to load. */
-const FIRST_MILLISECONDS = 10_000;
+const FIRST_MILLISECONDS = 30_000;
 const MAX_BYTES = 400_000;
 const MAX_ELEMENTS = 2000;
 const MAX_DEPTH = 60;
