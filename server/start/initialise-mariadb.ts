@@ -44,6 +44,7 @@ export async function initialiseMariadb(
   rmSync(halfMade, { recursive: true, force: true });
   mkdirSync(halfMade, { recursive: true, mode: 0o700 });
   await bootstrap(mariadbd, halfMade, initialSql(share, credentials, grantAll));
+  rmSync(temporaryFolder(halfMade), { recursive: true, force: true });
   renameSync(halfMade, dataFolder);
 }
 
@@ -84,6 +85,7 @@ async function bootstrap(mariadbd: string, folder: string, sql: string): Promise
     '--bootstrap',
     ...runAsRoot(),
     `--datadir=${folder}`,
+    `--tmpdir=${temporaryFolder(folder)}`,
     '--log-warnings=0',
     '--enforce-storage-engine=',
     '--max-allowed-packet=8M',
@@ -103,6 +105,16 @@ async function bootstrap(mariadbd: string, folder: string, sql: string): Promise
   throw new StartFailure(
     explainLog(log) ?? `The database could not be created: ${errors[0] ?? 'it gave no reason.'}`,
   );
+}
+
+/**
+ * A folder for temporary tables beside the data, made when missing. In a shared one a second server
+ * that starts takes the first one's temporary tables for leftovers and removes them.
+ */
+export function temporaryFolder(dataFolder: string): string {
+  const folder = `${dataFolder}-tmp`;
+  mkdirSync(folder, { recursive: true, mode: 0o700 });
+  return folder;
 }
 
 /** MariaDB refuses to run as root unless told so; containers often have no other user. */

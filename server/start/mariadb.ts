@@ -9,6 +9,7 @@ import {
   initialiseMariadb,
   runAsRoot,
   type DatabaseCredentials,
+  temporaryFolder,
 } from './initialise-mariadb.ts';
 import { makePrivateFolder, readJsonFile, writePrivateJson } from './private-files.ts';
 import {
@@ -124,6 +125,7 @@ async function launch(
       '--no-defaults',
       ...runAsRoot(),
       `--datadir=${dataFolder}`,
+      `--tmpdir=${temporaryFolder(dataFolder)}`,
       `--pid-file=${pidPath}`,
       `--socket=${socketPath}`,
       '--bind-address=127.0.0.1',

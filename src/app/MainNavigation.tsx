@@ -5,6 +5,8 @@ import { useSession } from '../accounts/useSession.ts';
 interface Way {
   readonly to: string;
   readonly label: string;
+  /** Pages below this address count as being here; the address itself when left out. */
+  readonly below?: string;
 }
 
 /** Where one can go; the ways shown are those the server says this reader has. */
@@ -21,7 +23,7 @@ export function MainNavigation() {
         ]
       : []),
     ...(abilities.moderate ? [{ to: paths.desk, label: 'Desk' }] : []),
-    ...(abilities.administer ? [{ to: paths.adminMembers, label: 'Admin' }] : []),
+    ...(abilities.administer ? [{ to: paths.adminMembers, label: 'Admin', below: '/admin/' }] : []),
   ];
   const here = pathname === '/sign-in' ? '' : `${pathname}${search}`;
   return (
@@ -41,14 +43,16 @@ export function MainNavigation() {
   );
 }
 
-function Item({ to, label }: Way) {
+function Item({ to, label, below }: Way) {
+  const { pathname } = useLocation();
+  const isBelow = below !== undefined && pathname.startsWith(below);
   return (
     <li>
       <NavLink
         to={to}
         className={({ isActive }) =>
           `inline-flex min-h-11 items-center border-b-2 no-underline ${
-            isActive
+            isActive || isBelow
               ? 'border-verdigris font-[600] text-verdigris'
               : 'border-transparent text-soot-2 hover:text-soot'
           }`
