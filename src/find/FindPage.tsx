@@ -59,7 +59,11 @@ export function FindPage() {
   const read = useMemo(() => readAs(address.q, address.off, units), [address, units]);
   const parts = isSettled ? found.parts : read;
   const go = (next: FindAddress, keepPlace = true): void => {
-    setParams(new URLSearchParams(writeFindAddress(next)), { preventScrollReset: keepPlace });
+    setParams(new URLSearchParams(writeFindAddress(next)), {
+      preventScrollReset: keepPlace,
+      // A tick or a chip changes under the finger, not when the browser finds the time.
+      flushSync: true,
+    });
   };
 
   return (

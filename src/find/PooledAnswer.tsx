@@ -23,15 +23,23 @@ export function PooledAnswer({ pooled }: { readonly pooled: Pooled }) {
   const tried = pooled.rows.filter((row) => row.change !== null);
   const unchanged = pooled.rows.find((row) => row.change === null);
   const cautions = tried.flatMap(({ caution }) => (caution === null ? [] : [caution]));
+  const counted = (
+    <>
+      <Reading>{String(pooled.pairs)}</Reading> {pooled.pairs === 1 ? 'firing' : 'firings'} with “
+      {trouble}” ({SOURCE_WORDS[pooled.source]}, {pooled.startClass} starts)
+    </>
+  );
   return (
     <section aria-labelledby="pooled" className="space-y-2 border-y border-soot py-3">
       <h2 id="pooled" className="sr-only">
         What was tried next
       </h2>
       <p>
-        Of <Reading>{String(pooled.pairs)}</Reading> firings with “{trouble}” (
-        {SOURCE_WORDS[pooled.source]}, {pooled.startClass} starts) that have a next firing to
-        compare, what was tried next: {tried.length === 0 && 'no change often enough to say'}
+        {tried.length > 0 ? (
+          <>Of {counted} that have a next firing to compare, what was tried next: </>
+        ) : (
+          <>Too few to say what helped: {counted} so far, with a next firing to compare; </>
+        )}
         {tried.map((row) => (
           <span key={row.change}>
             <strong className="font-[650]">
@@ -45,7 +53,6 @@ export function PooledAnswer({ pooled }: { readonly pooled: Pooled }) {
             {'; '}
           </span>
         ))}
-        {tried.length === 0 && '; '}
         <strong className="font-[650]">no change named</strong>
         {unchanged && unchanged.firings > 0 ? (
           <>

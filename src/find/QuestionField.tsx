@@ -85,7 +85,7 @@ export function QuestionField({ initial = '', large = false, onAsk }: Props) {
           ref={field}
           aria-keyshortcuts="/"
           id={`${listId}-field`}
-          className={`field-corner min-w-0 grow ${large ? 'min-h-13! text-lead!' : ''}`}
+          className={`field-corner min-w-0 grow [&::-webkit-search-cancel-button]:appearance-none ${large ? 'min-h-13! text-lead!' : ''}`}
           type="search"
           role="combobox"
           aria-expanded={suggestions.length > 0}

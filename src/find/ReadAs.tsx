@@ -1,7 +1,7 @@
 import { useEffect, useRef } from 'react';
 import { Chip } from '../ui/Chip.tsx';
 import { Icon } from '../ui/Icon.tsx';
-import type { ReadAsPart } from './read-as.ts';
+import { chipWords, type ReadAsPart } from './read-as.ts';
 
 interface Props {
   readonly parts: readonly ReadAsPart[];
@@ -32,27 +32,39 @@ export function ReadAs({ parts, onToggle }: Props) {
         <p className="text-small">words to look for; no trouble, temperature or ware in it</p>
       ) : (
         <ul ref={list} className="flex flex-wrap gap-2">
-          {parts.map(({ key, label, off }) => (
-            <li key={key} data-part={key}>
-              {off ? (
-                <button
-                  type="button"
-                  aria-label={`Take ${label} in again`}
-                  onClick={() => toggle(key)}
-                  className="inline-flex min-h-8 items-center gap-2 border border-dashed border-soot-2 px-2.5 py-1 text-small text-soot-2 hover:border-verdigris hover:text-verdigris touch:min-h-11"
-                >
-                  <Icon name="add" className="size-3" />
-                  <s>{label}</s>
-                </button>
-              ) : (
-                <Chip onRemove={() => toggle(key)} removeLabel={`Leave ${label} out`}>
-                  {label}
-                </Chip>
-              )}
-            </li>
+          {parts.map((part) => (
+            <Part key={part.key} part={part} onToggle={() => toggle(part.key)} />
           ))}
         </ul>
       )}
     </div>
+  );
+}
+
+interface PartProps {
+  readonly part: ReadAsPart;
+  readonly onToggle: () => void;
+}
+
+function Part({ part, onToggle }: PartProps) {
+  const words = chipWords(part);
+  return (
+    <li data-part={part.key}>
+      {part.off ? (
+        <button
+          type="button"
+          aria-label={`Take ${words} in again`}
+          onClick={onToggle}
+          className="inline-flex min-h-8 items-center gap-2 border border-dashed border-soot-2 px-2.5 py-1 text-small text-soot-2 hover:border-verdigris hover:text-verdigris touch:min-h-11"
+        >
+          <Icon name="add" className="size-3" />
+          <s>{words}</s>
+        </button>
+      ) : (
+        <Chip onRemove={onToggle} removeLabel={`Leave ${words} out`}>
+          {words}
+        </Chip>
+      )}
+    </li>
   );
 }

@@ -15,6 +15,16 @@ export function readAs(q: string, off: readonly string[], units: Units): ReadAsP
   }));
 }
 
+const KIND_WORDS: Readonly<Partial<Record<string, string>>> = {
+  cause: 'cause: ',
+  change: 'change: ',
+};
+
+/** A part as its chip says it: a cause and a trouble may bear the same words. */
+export function chipWords({ kind, label }: ReadAsPart): string {
+  return `${KIND_WORDS[kind] ?? ''}${label}`;
+}
+
 /** True when a stall is among the troubles asked about and not switched off. */
 export function asksAboutStall(parts: readonly ReadAsPart[]): boolean {
   return parts.some(({ key, off }) => key === 'trouble:stall' && !off);

@@ -83,7 +83,11 @@ function NextLine({ row, units }: { readonly row: NoteRow; readonly units: Units
             )}
           </>
         )}
-        {outcome !== null && <strong className="font-[650]">; {outcome}</strong>}
+        {outcome !== null && (
+          <>
+            ; <strong className="font-[650]">{outcome}</strong>
+          </>
+        )}
       </span>
     </p>
   );

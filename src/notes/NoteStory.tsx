@@ -7,7 +7,8 @@ interface Props {
 export function NoteStory({ html }: Props) {
   if (html.trim() === '') return null;
   return (
-    <section aria-labelledby="story" className="space-y-3">
+    // Not named as a region: its asides may stand in no other landmark than the page’s main one.
+    <section className="space-y-3">
       <h2 id="story" className="text-section">
         Story
       </h2>
