@@ -113,7 +113,7 @@ async function writeFirst(page: Page): Promise<void> {
     { minute: 0, what: 'Lit' },
     { minute: STALLED.shutOffMinute, what: 'Shut off' },
   ]);
-  const stall = page.getByText(/^Levelled off at 700\s°C for 16/);
+  const stall = page.getByText(/^Levelled off at 700\s°C for 16\smin/);
   await stall.first().waitFor();
 
   // Said otherwise than measured: the server asks, and takes a sentence for an answer.
@@ -203,7 +203,7 @@ test('from joining to being found, and what the next firing changed', async ({ v
   await author.getByRole('link', { name: FIRST }).first().click();
   await author.getByText('Nearly there: one question.').waitFor();
   await form.field('result', 'What to do next time').fill('Fibre under the floor.');
-  await author.getByLabel('Mended').first().check();
+  await author.getByLabel('Mended').first().click();
   await author.getByText('All are mended.').waitFor();
   await form.saved();
   await handIn(author);
@@ -214,6 +214,7 @@ test('from joining to being found, and what the next firing changed', async ({ v
     await moderator.getByRole('link', { name: title }).click();
     await desk.getByRole('button', { name: 'Take it onto my desk' }).click();
     const decide = desk.getByRole('region', { name: 'Decide' });
+    await decide.waitFor();
     for (const box of await decide.getByRole('checkbox').all()) await box.check();
     await decide.getByRole('button', { name: 'Publish' }).click();
     await moderator.getByText('Decided. The author is told by mail.').waitFor();
@@ -244,7 +245,7 @@ test('from joining to being found, and what the next firing changed', async ({ v
     { minute: CURED.shutOffMinute, what: 'Shut off' },
   ]);
   await author
-    .getByText(/^Reached 1010\s°C in 3\d min/)
+    .getByText(/^Reached 1010\s°C in 32\smin/)
     .first()
     .waitFor();
   await addBowls(author, 'Matured');
