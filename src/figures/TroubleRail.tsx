@@ -20,7 +20,7 @@ export function TroubleRail({ shares, toTrouble }: Props) {
         Share of {shares.notes} notes by {shares.members} members that had each trouble, found in
         the record or named by the author.
       </p>
-      <ul className="grid gap-x-10 border-t border-soot sm:grid-cols-2 lg:grid-cols-3">
+      <ul className="grid grid-cols-1 gap-x-10 border-t border-soot sm:grid-cols-2 lg:grid-cols-3">
         {shares.troubles.map(({ trouble, notes }) => (
           <li key={trouble} className="border-b border-line">
             <Link
@@ -32,7 +32,7 @@ export function TroubleRail({ shares, toTrouble }: Props) {
               </span>
               <svg
                 aria-hidden="true"
-                className="h-2 min-w-0 grow"
+                className="h-2 w-0 grow"
                 viewBox="0 0 100 2"
                 preserveAspectRatio="none"
               >
