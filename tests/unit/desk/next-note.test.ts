@@ -49,13 +49,13 @@ describe('the next note at the desk', () => {
 
 describe('waitingWords', () => {
   it.each([
-    ['2026-05-01T10:00:20.000Z', 'waiting 0\u00a0min'],
+    ['2026-05-01T10:00:20.000Z', 'waiting less than a minute'],
     ['2026-05-01T10:59:59.000Z', 'waiting 59\u00a0min'],
     ['2026-05-01T11:00:00.000Z', 'waiting 1\u00a0h'],
     ['2026-05-03T09:59:00.000Z', 'waiting 47\u00a0h'],
     ['2026-05-04T10:00:00.000Z', 'waiting 3 days'],
     // A reader's clock that is slow.
-    ['2026-05-01T09:00:00.000Z', 'waiting 0\u00a0min'],
+    ['2026-05-01T09:00:00.000Z', 'waiting less than a minute'],
   ])('at %s says "%s"', (now, words) => {
     expect(waitingWords('2026-05-01T10:00:00.000Z', new Date(now))).toBe(words);
   });
