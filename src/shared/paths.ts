@@ -12,10 +12,9 @@ export const paths = {
   note: noteAddress,
   write: (noteId: number) => `/write/${String(noteId)}`,
   newNote: (options: { kilnId?: number; tried?: number } = {}) => {
-    const query = new URLSearchParams();
-    if (options.kilnId !== undefined) query.set('kiln', String(options.kilnId));
-    if (options.tried !== undefined) query.set('tried', String(options.tried));
-    const text = query.toString();
+    const text = Object.entries({ kiln: options.kilnId, tried: options.tried })
+      .flatMap(([name, id]) => (id === undefined ? [] : [`${name}=${String(id)}`]))
+      .join('&');
     return text ? `/write?${text}` : '/write';
   },
   preview: (noteId: number) => `/write/${String(noteId)}/preview`,

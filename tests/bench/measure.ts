@@ -7,7 +7,7 @@ export function percentile(times: readonly number[], share: number): number {
 /** Milliseconds of each of `rounds` runs, one after the other, after `warmUp` that do not count. */
 export async function timeEach(
   rounds: number,
-  work: (round: number) => Promise<unknown> | unknown,
+  work: (round: number) => unknown,
   warmUp = Math.ceil(rounds / 5),
 ): Promise<number[]> {
   for (let round = 0; round < warmUp; round += 1) await work(round);
