@@ -5,16 +5,18 @@ import { createHandlers } from './outbox/handlers.ts';
 import { startOutboxWorker } from './outbox/worker.ts';
 import { readRecord } from './records/read-record.ts';
 import { indexNote } from './search/index-note.ts';
+import { mendIndex } from './search/mend-index.ts';
 import { catchUpIndex } from './search/reindex.ts';
 
 const TRY_AGAIN_MILLISECONDS = 5000;
+const A_DAY_MILLISECONDS = 24 * 60 * 60_000;
 
 export interface Workers {
   /** Ends after the job under way. */
   stop: () => Promise<void>;
 }
 
-/** Starts what works beside the requests: the outbox, and one look at whether the index is whole. */
+/** Starts what works beside the requests: the outbox, and the look at whether the index is whole. */
 export function startWorkers(deps: Deps): Workers {
   const outbox = startOutboxWorker(deps, createHandlers(deps, { indexNote, readRecord }));
   const housekeeping = startHousekeeping(deps);
@@ -28,11 +30,14 @@ export function startWorkers(deps: Deps): Workers {
   };
 }
 
+/** Once at the start whether the index is whole, then once a day whether it is right. */
 async function catchUp(deps: Deps, signal: AbortSignal): Promise<void> {
+  let isCaughtUp = false;
   while (!signal.aborted) {
     try {
-      await catchUpIndex(deps);
-      return;
+      await (isCaughtUp ? mendIndex(deps) : catchUpIndex(deps));
+      isCaughtUp = true;
+      await sleep(A_DAY_MILLISECONDS, undefined, { signal }).catch(() => undefined);
     } catch (error) {
       deps.log.warn({ err: error }, 'the index is not caught up yet');
       await sleep(TRY_AGAIN_MILLISECONDS, undefined, { signal }).catch(() => undefined);

@@ -202,7 +202,12 @@ function makeClient(baseUrl: string, publicUrl: string): Client {
         get json() {
           return JSON.parse(text) as unknown;
         },
-        as: (schema) => schema.parse(JSON.parse(text)),
+        as: (schema) => {
+          const result = schema.safeParse(JSON.parse(text));
+          if (result.success) return result.data;
+          const got = `${method} ${url} was answered ${String(response.status)}`;
+          throw new Error(`${got}: ${text.slice(0, 1000)}`, { cause: result.error });
+        },
         get problem() {
           return problemSchema.parse(JSON.parse(text));
         },
