@@ -16,7 +16,7 @@ const DIST = path.resolve(import.meta.dirname, '../dist');
  * The whole web application. Order: request id, headers, health, built files, who asks, the API
  * and media routes, pages, and at the end the one place that answers problems.
  */
-export function createApp(deps: Deps): Express {
+export function createApp(deps: Deps, dist: string = DIST): Express {
   const { config, log } = deps;
   const app = express();
   app.disable('x-powered-by');
@@ -27,7 +27,7 @@ export function createApp(deps: Deps): Express {
   app.use(healthRouter(deps));
   app.use(
     '/assets',
-    express.static(path.join(DIST, 'assets'), { immutable: true, maxAge: '1y', index: false }),
+    express.static(path.join(dist, 'assets'), { immutable: true, maxAge: '1y', index: false }),
   );
 
   const api = express.Router();
@@ -43,7 +43,7 @@ export function createApp(deps: Deps): Express {
     throw new AppError('not-found');
   });
   app.use(api);
-  app.use(servePages(deps, DIST));
+  app.use(servePages(deps, dist));
   app.use(answerProblems(config.publicUrl, log));
   return app;
 }

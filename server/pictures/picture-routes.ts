@@ -77,19 +77,19 @@ export const pictureRoutes: readonly Route[] = [
       const tag = `"${params.name.slice(0, 16)}-${params.file}"`;
       // Files never change under their name. Public ones are asked about again after an hour, so
       // that a picture taken down is gone from caches soon; others stay with their one reader.
-      response.set({
+      const headers = {
         ETag: tag,
         'Cache-Control': isPublic
           ? 'public, max-age=3600, stale-while-revalidate=86400'
           : 'private, max-age=300',
         'Content-Security-Policy': "default-src 'none'; sandbox",
-        'X-Content-Type-Options': 'nosniff',
         'Accept-Ranges': 'none',
         ...(isPublic ? {} : { Vary: 'Cookie' }),
-      });
-      if (isKnown(request.get('If-None-Match'), tag)) return reply(304, null);
+      };
+      if (isKnown(request.get('If-None-Match'), tag)) return reply(304, null, headers);
       const file = await deps.store.read(`pictures/${params.name}/${params.file}`);
       if (!file) throw new AppError('not-found');
+      response.set(headers);
       response.type(params.file.endsWith('.webp') ? TYPES.webp : TYPES.jpg);
       response.set('Content-Length', String(file.size));
       file.stream.on('error', (error) => response.destroy(error)).pipe(response);

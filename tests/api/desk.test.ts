@@ -1,4 +1,4 @@
-import { describe, expect } from 'vitest';
+import { describe, expect, vi } from 'vitest';
 import { deskNoteSchema, deskQueueSchema } from '#shared/api/desk.ts';
 import { draftSchema, notePageSchema } from '#shared/api/notes.ts';
 import { kilnPageSchema } from '#shared/api/kilns.ts';
@@ -11,6 +11,9 @@ import {
   publishedNote,
   startNote,
 } from '../support/notes.ts';
+
+// Seconds alone, more where the machine is shared.
+vi.setConfig({ testTimeout: 90_000 });
 
 const deskPath = (noteId: number) => `/api/desk/notes/${String(noteId)}`;
 const decision = (revisionId: number, traits: object = {}) => ({

@@ -1,11 +1,14 @@
 import { once } from 'node:events';
 import { connect } from 'node:net';
-import { describe, expect } from 'vitest';
+import { describe, expect, vi } from 'vitest';
 import type { Picture } from '#shared/api/pictures.ts';
 import type { Story } from '#shared/note/story.ts';
 import { test, type Api, type Client } from '../support/api.ts';
 import { addKiln, completeFields, decideOn, handIn, startNote } from '../support/notes.ts';
 import { keptPicture, plainPicture, storedFiles, uploadPicture } from '../support/pictures.ts';
+
+// Seconds alone, more where the machine is shared.
+vi.setConfig({ testTimeout: 90_000 });
 
 const storyWith = (...pictures: Picture[]): Story => ({
   type: 'doc',

@@ -1,5 +1,5 @@
 import { gzipSync, deflateSync } from 'node:zlib';
-import { describe, expect } from 'vitest';
+import { describe, expect, vi } from 'vitest';
 import { pictureSchema } from '#shared/api/pictures.ts';
 import { test } from '../support/api.ts';
 import { startNote } from '../support/notes.ts';
@@ -11,6 +11,9 @@ import {
   uploadPicture,
 } from '../support/pictures.ts';
 import { slowUpload } from '../support/slow-upload.ts';
+
+// Seconds alone, more where the machine is shared.
+vi.setConfig({ testTimeout: 90_000 });
 
 const bytes = (text: string) => new Uint8Array(Buffer.from(text));
 const SVG =

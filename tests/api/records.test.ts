@@ -1,4 +1,4 @@
-import { describe, expect } from 'vitest';
+import { describe, expect, vi } from 'vitest';
 import { notePageSchema } from '#shared/api/notes.ts';
 import { recordPointsSchema, recordSchema } from '#shared/api/records.ts';
 import { createHandlers } from '../../server/outbox/handlers.ts';
@@ -13,6 +13,9 @@ import {
   uploadRecord,
 } from '../support/records.ts';
 import { slowUpload } from '../support/slow-upload.ts';
+
+// Seconds alone, more where the machine is shared.
+vi.setConfig({ testTimeout: 90_000 });
 
 /** A plain climb, `count` readings. */
 function climb(count: number, line = (minute: number, celsius: number) => `${minute},${celsius}`) {
