@@ -181,7 +181,7 @@ CREATE TABLE `outbox` (
   `created_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
   PRIMARY KEY (`id`),
   UNIQUE KEY `outbox_dedupe_unique` (`topic`,`dedupe_key`),
-  KEY `outbox_due_index` (`done_at`,`given_up_at`,`available_at`,`id`)
+  KEY `outbox_due_index` (`topic`,`done_at`,`given_up_at`,`available_at`,`id`)
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
 CREATE TABLE `pictures` (

@@ -50,7 +50,7 @@ const promise = (db: Knex, noteId: number, key: string): Promise<void> =>
 const rows = (db: Knex): Promise<JobRow[]> => db<JobRow>('outbox').orderBy('id').select();
 
 async function until(holds: () => boolean | Promise<boolean>): Promise<void> {
-  const deadline = Date.now() + 8000;
+  const deadline = Date.now() + 25_000;
   while (!(await holds())) {
     if (Date.now() > deadline) throw new Error('It did not come to that.');
     await sleep(20);
