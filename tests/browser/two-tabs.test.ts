@@ -5,6 +5,7 @@ import { draftSchema } from '#shared/api/notes.ts';
 import { test, type Visiting } from './browser.ts';
 import { noteForm } from './write-a-note.ts';
 
+const PATIENTLY = { timeout: 20_000 };
 const NOT_SENT = 'Not sent: kept in this browser';
 
 const title = (page: Page) => noteForm(page).field('story', 'Title');
@@ -48,7 +49,7 @@ describe('what was typed is never lost', () => {
     await title(second).waitFor();
 
     await title(first).fill('Told in the first tab');
-    await expect.poll(() => titleAtServer(first, address)).toBe('Told in the first tab');
+    await expect.poll(() => titleAtServer(first, address), PATIENTLY).toBe('Told in the first tab');
     await title(second).fill('Told in the second tab');
     await second.getByRole('heading', { name: 'Two versions of this note' }).waitFor();
     const both = second.getByRole('row', { name: /Title/ });
@@ -58,7 +59,9 @@ describe('what was typed is never lost', () => {
     expect(await titleAtServer(second, address)).toBe('Told in the first tab');
 
     await second.getByRole('button', { name: 'Keep mine' }).click();
-    await expect.poll(() => titleAtServer(second, address)).toBe('Told in the second tab');
+    await expect
+      .poll(() => titleAtServer(second, address), PATIENTLY)
+      .toBe('Told in the second tab');
     expect(await title(second).inputValue()).toBe('Told in the second tab');
 
     // Now the first one is behind, and takes what the other has.
@@ -79,7 +82,7 @@ describe('what was typed is never lost', () => {
     const again = await openAgain(context, address);
     await title(again).waitFor();
     expect(await title(again).inputValue()).toBe('Typed and shut');
-    await expect.poll(() => titleAtServer(again, address)).toBe('Typed and shut');
+    await expect.poll(() => titleAtServer(again, address), PATIENTLY).toBe('Typed and shut');
   });
 
   test('two tabs shut with unsent words keep both', async ({ visiting }) => {
@@ -92,7 +95,10 @@ describe('what was typed is never lost', () => {
     await first.close();
     await second.close();
     await context.setOffline(false);
+    // The last written is sent; the other one is laid beside it when the note is opened next.
     const again = await openAgain(context, address);
+    await expect.poll(() => titleAtServer(again, address), PATIENTLY).toBe('From the other');
+    await again.reload();
     await again.getByRole('heading', { name: 'Two versions of this note' }).waitFor();
     const row = again.getByRole('row', { name: /Title/ });
     expect(await row.textContent()).toContain('From the one');
@@ -105,7 +111,7 @@ describe('what was typed is never lost', () => {
     const { context, page, address } = await openDraft(visiting);
     await typeOffline(context, page, 'Written in a field');
     await context.setOffline(false);
-    await expect.poll(() => titleAtServer(page, address)).toBe('Written in a field');
+    await expect.poll(() => titleAtServer(page, address), PATIENTLY).toBe('Written in a field');
     await page
       .getByText(/^Saved \d/)
       .first()
