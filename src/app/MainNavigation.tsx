@@ -19,6 +19,7 @@ export function MainNavigation() {
     ...(abilities.write
       ? [
           { to: paths.notebook, label: 'Notebook' },
+          { to: paths.kilns, label: 'Kilns' },
           { to: paths.newNote(), label: 'Write' },
         ]
       : []),
