@@ -3,6 +3,7 @@ import type { Knex } from 'knex';
 import { purgeAccounts } from './accounts/purge-accounts.ts';
 import type { Deps } from './deps.ts';
 import { purgeOutbox } from './outbox/job-repository.ts';
+import { sweepUploads } from './storage/sweep-uploads.ts';
 
 const EVERY_MILLISECONDS = 10 * 60_000;
 
@@ -22,12 +23,15 @@ export async function tidyUp(db: Knex): Promise<void> {
 }
 
 /** Tidies up every ten minutes until it is stopped. */
-export function startHousekeeping(deps: Pick<Deps, 'db' | 'log'>): { stop: () => Promise<void> } {
+export function startHousekeeping(deps: Pick<Deps, 'db' | 'log' | 'store'>): {
+  stop: () => Promise<void>;
+} {
   const stopping = new AbortController();
   const work = (async () => {
     while (!stopping.signal.aborted) {
       try {
         await tidyUp(deps.db);
+        await sweepUploads(deps);
       } catch (error) {
         deps.log.error({ event: 'housekeeping', err: error }, 'could not tidy up');
       }

@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import { mkdir, open, rename, rm, rmdir, stat } from 'node:fs/promises';
+import { mkdir, open, readdir, rename, rm, rmdir, stat } from 'node:fs/promises';
 import path from 'node:path';
 import type { Readable } from 'node:stream';
 
@@ -14,6 +14,10 @@ export interface FileStore {
   /** Null when there is no such file. */
   read(key: string): Promise<{ stream: Readable; size: number } | null>;
   remove(prefix: string): Promise<void>;
+  /** Keys directly below a folder (`pictures`, `records`) that were last written before `before`. */
+  listOlder(folder: string, before: Date): Promise<string[]>;
+  /** Removes a key unless it has been written again since `before`. */
+  removeOlder(key: string, before: Date): Promise<void>;
 }
 
 const KEY = /^[a-z]+\/[0-9a-f]{16,64}(\/[a-z0-9]{1,20}\.[a-z]{2,5})?$/;
@@ -24,6 +28,10 @@ export function diskStore(folder: string): FileStore {
   const locate = (key: string): string => {
     if (!KEY.test(key)) throw new Error('A storage key has a fixed form.');
     return path.join(root, key);
+  };
+  const isOlder = async (file: string, before: Date): Promise<boolean> => {
+    const found = await stat(file).catch(() => null);
+    return found !== null && found.mtimeMs < before.getTime();
   };
   return {
     async put(key, bytes) {
@@ -65,6 +73,20 @@ export function diskStore(folder: string): FileStore {
       // The folder of a picture goes with its last file; rmdir leaves one alone that is not empty.
       const parent = path.dirname(locate(prefix));
       if (path.dirname(path.dirname(parent)) === root) await rmdir(parent).catch(() => undefined);
+    },
+    async listOlder(folder, before) {
+      const names = await readdir(path.join(root, folder)).catch(() => []);
+      const keys: string[] = [];
+      for (const name of names) {
+        if (await isOlder(path.join(root, folder, name), before)) keys.push(`${folder}/${name}`);
+      }
+      return keys;
+    },
+    async removeOlder(key, before) {
+      // Parts of writes that were cut short end otherwise than keys, but are as removable.
+      const target = locate(key.replace(/\.[0-9a-f]{12}\.part$/, ''));
+      const file = path.join(path.dirname(target), path.basename(key));
+      if (await isOlder(file, before)) await rm(file, { recursive: true, force: true });
     },
   };
 }
