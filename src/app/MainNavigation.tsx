@@ -28,8 +28,10 @@ export function MainNavigation() {
   ];
   const here = pathname === '/sign-in' ? '' : `${pathname}${search}`;
   return (
-    <nav aria-label="Main" className="ml-auto">
-      <ul className="flex flex-wrap items-center justify-end gap-x-5 text-small">
+    <nav aria-label="Main" className={`ml-auto ${me ? 'max-sm:-mt-2 max-sm:w-full' : ''}`}>
+      <ul
+        className={`flex flex-wrap items-center gap-x-5 text-small ${me ? 'justify-start sm:justify-end' : 'justify-end'}`}
+      >
         {ways.map((way) => (
           <Item key={way.label} {...way} />
         ))}

@@ -17,7 +17,9 @@ export function NothingFound({ address, loosen, onLeaveOut, onClearFilters }: Pr
   const ticked = tickedCount(address);
   return (
     <EmptyState
-      title="No note fits all of this"
+      title={
+        ticked === 0 && loosen.length === 0 ? 'No note has these words' : 'No note fits all of this'
+      }
       action={
         <>
           {ticked > 0 && (

@@ -89,13 +89,15 @@ export function NotePieces({
             key: 'form',
             heading: 'Form',
             cell: (piece) =>
-              `${piece.count !== null && piece.count > 1 ? `${String(piece.count)} × ` : ''}${piece.form === null ? 'piece' : FORMS[piece.form].toLowerCase()}`,
+              `${piece.count !== null && piece.count > 1 ? `${String(piece.count)}\u00a0×\u00a0` : ''}${piece.form === null ? 'piece' : FORMS[piece.form].toLowerCase()}`,
           },
           { key: 'ware', heading: 'Ware', cell: (piece) => wareWords(piece, units) },
           { key: 'glaze', heading: 'Glaze and route', cell: glazeWords },
           { key: 'result', heading: 'Result', cell: resultWords },
           { key: 'cracks', heading: 'Cracks', cell: crackWords },
-          { key: 'remark', heading: 'Remark', cell: (piece) => piece.remark },
+          ...(pieces.some(({ remark }) => remark !== '')
+            ? [{ key: 'remark', heading: 'Remark', cell: (piece: Piece) => piece.remark }]
+            : []),
         ]}
       />
     </section>

@@ -33,10 +33,12 @@ export function NoteView({ page, units, recordOf = 'published', aside }: Props) 
   const { row, fields, kiln } = page;
   const troubles = troubleWords(row, units);
   return (
-    <article className="space-y-12">
-      <header className="space-y-5">
+    <article className="space-y-12 print:space-y-5">
+      <header className="space-y-5 print:space-y-2.5">
         <div className="space-y-2">
-          <h1 className="max-w-[26ch] text-title sm:text-face">{row.title || 'Untitled'}</h1>
+          <h1 className="max-w-[26ch] text-title sm:text-face print:max-w-none print:text-title">
+            {row.title || 'Untitled'}
+          </h1>
           <p className="text-small text-soot-2">
             {page.author ? (
               <Link to={paths.member(page.author.id)} className="link">

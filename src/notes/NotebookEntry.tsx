@@ -34,7 +34,7 @@ export function NotebookEntry({ note, units, scaleMinutes, gap }: Props) {
   const open = stillOpen(note);
   const inWork = isInWork(note);
   return (
-    <li className="relative grid gap-x-8 gap-y-2 border-b border-line py-4 pl-6 sm:grid-cols-[8rem_minmax(0,14rem)_minmax(0,1fr)]">
+    <li className="relative grid gap-x-8 gap-y-2 border-b border-line py-4 pl-6 sm:grid-cols-[9.5rem_minmax(0,14rem)_minmax(0,1fr)]">
       {/* The line runs through; each firing is a tick on it. */}
       <span
         aria-hidden="true"

@@ -78,11 +78,10 @@ export function NotebookPage() {
 function KilnLine(props: { readonly group: KilnNotes; readonly scaleMinutes: number }) {
   const { kiln, notes } = props.group;
   const { units } = useSession();
-  const id = `kiln-${String(kiln?.id ?? 'none')}`;
   return (
-    <section aria-labelledby={id} className="space-y-3">
+    <div className="space-y-3">
       <div className="flex flex-wrap items-baseline justify-between gap-x-6">
-        <h2 id={id} className="text-section">
+        <h2 className="text-section">
           {kiln ? (
             <Link className="link" to={paths.kiln(kiln.id)}>
               {kiln.name}
@@ -108,6 +107,6 @@ function KilnLine(props: { readonly group: KilnNotes; readonly scaleMinutes: num
           />
         ))}
       </ol>
-    </section>
+    </div>
   );
 }

@@ -10,11 +10,16 @@ export function changeWords(changes: readonly Change[]): string {
   return changes.map((change) => CHANGES[change].toLowerCase()).join(', ');
 }
 
-/** A day as people say it: "14 September 2026"; the day of the firing, in no time zone. */
+/**
+ * A day as people say it: "14 September 2026"; the day of the firing, in no time zone. It stays on
+ * one line.
+ */
 export function dayWords(day: string): string {
   const date = new Date(`${day}T12:00:00Z`);
   if (Number.isNaN(date.getTime())) return '';
-  return new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeZone: 'UTC' }).format(date);
+  return new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeZone: 'UTC' })
+    .format(date)
+    .replaceAll(' ', '\u00a0');
 }
 
 /** A moment in the reader's own time zone. */

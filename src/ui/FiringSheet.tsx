@@ -34,9 +34,12 @@ export function FiringSheet({ groups, blanks = 'leave-out', headingLevel = 3 }: 
     .filter((group) => group.rows.length > 0);
   return (
     <div className="@container border-t-2 border-soot">
-      <div className="gap-x-10 @3xl:columns-2 @6xl:columns-3">
+      <div className="gap-x-10 @3xl:columns-2 @6xl:columns-3 print:columns-3 print:gap-x-6">
         {shown.map((group) => (
-          <section key={group.heading} className="break-inside-avoid pt-3 pb-2">
+          <section
+            key={group.heading}
+            className="break-inside-avoid pt-3 pb-2 print:pt-1.5 print:pb-1"
+          >
             <Heading className="border-b border-line pb-1 text-note font-[650] tracking-normal">
               {group.heading}
             </Heading>
@@ -44,7 +47,7 @@ export function FiringSheet({ groups, blanks = 'leave-out', headingLevel = 3 }: 
               {group.rows.map((row) => (
                 <div
                   key={row.label}
-                  className="grid grid-cols-[minmax(7rem,2fr)_3fr] items-baseline gap-x-4 border-b border-line py-1.5"
+                  className="grid grid-cols-[minmax(7rem,2fr)_3fr] items-baseline gap-x-4 border-b border-line py-1.5 print:gap-x-2 print:py-0.5"
                 >
                   <dt className="text-soot-2">{row.label}</dt>
                   <dd className={row.reading ? 'reading text-small whitespace-normal' : 'min-w-0'}>

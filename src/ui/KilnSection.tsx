@@ -24,7 +24,7 @@ export function KilnSection({ kiln, alt = kilnInWords(kiln) }: Props) {
             groundHatch={`url(#${id}-ground)`}
           />
           <p aria-hidden="true" className="pt-1 text-note text-soot-2">
-            Cut through
+            Cut through; measures in mm
           </p>
         </div>
         <div className="w-full max-w-[20rem]">

@@ -9,7 +9,7 @@ export function SkipLink({
   return (
     <a
       href={to}
-      className="fixed left-3 top-3 z-50 -translate-y-24 bg-verdigris px-4 py-3 font-[550] text-on-verdigris focus:translate-y-0"
+      className="not-in-print fixed left-3 top-3 z-50 -translate-y-24 bg-verdigris px-4 py-3 font-[550] text-on-verdigris focus:translate-y-0"
     >
       {children}
     </a>

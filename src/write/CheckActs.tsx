@@ -15,7 +15,7 @@ export function CheckActs({ check }: { readonly check: Check }) {
   return (
     <div className="@container text-soot">
       {offer && (
-        <p className="pt-1">
+        <p className="-ml-1 pt-1">
           <Button
             kind="quiet"
             label={`${offer.label}: ${check.text}`}

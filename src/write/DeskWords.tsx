@@ -42,13 +42,15 @@ export function DeskWords({ draft }: { readonly draft: Draft }) {
             {remarks.map((remark) => (
               <li key={remark.id}>
                 {draft.abilities.edit && remark.pointer !== '' && (
-                  <Button
-                    kind="quiet"
-                    label={`Go to the field: ${labelOf(remark.pointer)}`}
-                    onClick={() => goToField(remark.pointer)}
-                  >
-                    {labelOf(remark.pointer)}
-                  </Button>
+                  <span className="-ml-1">
+                    <Button
+                      kind="quiet"
+                      label={`Go to the field: ${labelOf(remark.pointer)}`}
+                      onClick={() => goToField(remark.pointer)}
+                    >
+                      {labelOf(remark.pointer)}
+                    </Button>
+                  </span>
                 )}
                 {draft.abilities.edit ? (
                   <RemarkNote remark={remark} />

@@ -1,6 +1,7 @@
 import { useMemo, useState } from 'react';
 import { openChecks } from '#shared/note/checks/check.ts';
-import { findingText } from '#shared/firing/findings.ts';
+import type { NoteFields } from '#shared/note/note-fields.ts';
+import { pieceTroubles } from '#shared/note/note-troubles.ts';
 import { Notice } from '../ui/Notice.tsx';
 import { ChangesSection } from './ChangesSection.tsx';
 import { CheckActs } from './CheckActs.tsx';
@@ -10,18 +11,21 @@ import { FieldMargin } from './FieldMargin.tsx';
 import { findingsBeside } from './finding-places.ts';
 import { WriteFormContext, type FormKiln, type WriteForm } from './form-context.ts';
 import { goToField } from './go-to-field.ts';
+import { FormSlice } from './FormSlice.tsx';
 import { HandInSection } from './HandInSection.tsx';
 import { KilnChoiceSection } from './KilnChoiceSection.tsx';
 import { PiecesSection } from './PiecesSection.tsx';
 import { PlanSection } from './PlanSection.tsx';
+import { ReadOffList } from './ReadOffList.tsx';
 import { RecordSection } from './record/RecordSection.tsx';
 import { ReductionSection } from './ReductionSection.tsx';
 import { ResultSection } from './ResultSection.tsx';
-import { SavedLine } from './SavedLine.tsx';
+import { isTroubled, SavedLine } from './SavedLine.tsx';
 import { SetUpSection } from './SetUpSection.tsx';
 import { SpokenFindings } from './SpokenFindings.tsx';
 import { StorySection } from './story/StorySection.tsx';
 import { StripSoFar } from './StripSoFar.tsx';
+import { saidUnder } from './said-under.ts';
 import { settledIssues } from './settled-issues.ts';
 import type { DraftActs } from './useDraftActs.ts';
 import { useNoteReading } from './useNoteReading.ts';
@@ -37,10 +41,34 @@ interface Props {
   readonly units: WriteForm['units'];
   readonly emailVerified: boolean;
   readonly acts: DraftActs;
+  /** Saved elsewhere meanwhile: shows the two versions. */
+  readonly onSeeBoth: () => void;
 }
 
+/** What the sections after the pieces show of them, as texts to compare. */
+const routesOf = ({ pieces }: NoteFields): string =>
+  pieces.map(({ route, recipe }) => `${String(route)} ${String(recipe === null)}`).join();
+const troublesSaid = ({ pieces }: NoteFields): string => pieces.flatMap(pieceTroubles).join();
+
+/** How far the acts at the end of the form have come. */
+const progressOf = ({ handIn, remove }: DraftActs): readonly unknown[] => [
+  handIn.isPending,
+  handIn.error,
+  remove.isPending,
+  remove.error,
+];
+
 /** The whole form of a draft, read while it is typed. */
-export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, acts }: Props) {
+export function DraftForm({
+  kept,
+  keeper,
+  kilns,
+  kiln,
+  units,
+  emailVerified,
+  acts,
+  onSeeBoth,
+}: Props) {
   const { fields, draft, state } = kept;
   const { reading, stored } = useNoteReading(fields, draft, kiln);
   const [withAllBlanks, setWithAllBlanks] = useState(draft.status !== 'draft');
@@ -50,7 +78,7 @@ export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, act
       fields,
       draft,
       keeper,
-      change: (update) => keeper.change(update),
+      change: keeper.change,
       units,
       editable: draft.abilities.edit,
       kilns,
@@ -73,6 +101,11 @@ export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, act
       },
     };
   }, [fields, draft, keeper, units, kilns, kiln, reading, withAllBlanks]);
+  const slice = (prefixes: readonly string[], ...reads: readonly unknown[]) => ({
+    form,
+    reads,
+    said: saidUnder(form, prefixes),
+  });
   const open = openChecks(form.checks, fields.checkAnswers);
 
   return (
@@ -91,48 +124,76 @@ export function DraftForm({ kept, keeper, kilns, kiln, units, emailVerified, act
               This is a revision. The published note stays up until this one is published.
             </Notice>
           )}
-          <DeskWords draft={draft} />
-          <StripSoFar stored={stored} />
+          <FormSlice {...slice([])}>
+            <DeskWords draft={draft} />
+          </FormSlice>
+          <FormSlice {...slice([], fields.record, fields.plan, reading.reading, stored)}>
+            <StripSoFar stored={stored} />
+          </FormSlice>
         </header>
-        <WriteContents openIn={countBySection(open.map(({ pointer }) => pointer))}>
-          <SavedLine state={state} onRetry={() => void keeper.flush()} />
+        <WriteContents
+          openIn={countBySection(open.map(({ pointer }) => pointer))}
+          isLong={isTroubled(state)}
+        >
+          <SavedLine state={state} onRetry={() => void keeper.flush()} onSeeBoth={onSeeBoth} />
         </WriteContents>
         <SpokenFindings />
-        <WhenSection />
-        <KilnChoiceSection />
-        <SetUpSection />
-        <PlanSection />
-        <div id="section-record" tabIndex={-1} data-pointer="/record" className="scroll-mt-28">
-          <RecordSection />
-          {reading.findings.length > 0 && (
-            <div className="max-w-measure pt-6">
-              <h3 className="text-body">What is read off it</h3>
-              <ul className="text-small">
-                {reading.findings.map((finding) => (
-                  <li
-                    key={`${finding.code}-${String(finding.fromMinute)}`}
-                    className={`border-b border-line py-1.5 ${finding.trouble ? 'font-[600]' : ''}`}
-                  >
-                    {findingText(finding, units)}
-                  </li>
-                ))}
-              </ul>
-            </div>
+        <FormSlice {...slice(['/when'], fields.when)}>
+          <WhenSection />
+        </FormSlice>
+        <FormSlice {...slice(['/kilnId'], fields.kilnId)}>
+          <KilnChoiceSection />
+        </FormSlice>
+        <FormSlice {...slice(['/setUp'], fields.setUp)}>
+          <SetUpSection />
+        </FormSlice>
+        <FormSlice {...slice(['/plan'], fields.plan, reading.reading === null)}>
+          <PlanSection />
+        </FormSlice>
+        <FormSlice
+          {...slice(['/record'], fields.record, fields.plan.targetCelsius, reading.reading)}
+        >
+          <div id="section-record" tabIndex={-1} data-pointer="/record" className="scroll-mt-28">
+            <RecordSection />
+            <ReadOffList />
+          </div>
+        </FormSlice>
+        <FormSlice {...slice(['/pieces'], fields.pieces)}>
+          <PiecesSection />
+        </FormSlice>
+        <FormSlice {...slice(['/reduction'], fields.reduction, routesOf(fields))}>
+          <ReductionSection />
+        </FormSlice>
+        <FormSlice {...slice(['/result'], fields.result, troublesSaid(fields))}>
+          <ResultSection />
+        </FormSlice>
+        <FormSlice
+          {...slice(
+            ['/changes', '/triedNoteId'],
+            fields.changes,
+            fields.changesNotMeant,
+            fields.triedNoteId,
           )}
-        </div>
-        <PiecesSection />
-        <ReductionSection />
-        <ResultSection />
-        <ChangesSection />
-        <StorySection />
-        <HandInSection
-          acts={acts}
-          emailVerified={emailVerified}
-          onGoTo={(pointer) => {
-            setWithAllBlanks(true);
-            goToField(pointer);
-          }}
-        />
+        >
+          <ChangesSection />
+        </FormSlice>
+        <FormSlice {...slice(['/title', '/story'], fields.title, fields.story)}>
+          <StorySection />
+        </FormSlice>
+        <FormSlice
+          form={form}
+          reads={[fields.cautionsRead, fields.checkAnswers, ...progressOf(acts)]}
+          said={JSON.stringify(form.checks)}
+        >
+          <HandInSection
+            acts={acts}
+            emailVerified={emailVerified}
+            onGoTo={(pointer) => {
+              setWithAllBlanks(true);
+              goToField(pointer);
+            }}
+          />
+        </FormSlice>
       </div>
     </WriteFormContext>
   );

@@ -25,7 +25,9 @@ export function RemarkNote({ remark }: { readonly remark: Remark }) {
   const mended = tick.isPending ? tick.variables : remark.mended;
   return (
     <RemarkWords remark={remark} mended={mended}>
-      <CheckField label="Mended" checked={mended} onChecked={(checked) => tick.mutate(checked)} />
+      <div className="-mb-2 text-body">
+        <CheckField label="Mended" checked={mended} onChecked={(checked) => tick.mutate(checked)} />
+      </div>
     </RemarkWords>
   );
 }
@@ -41,7 +43,7 @@ export function RemarkWords({
   readonly children?: ReactNode;
 }) {
   return (
-    <div className="border-l-4 border-verdigris bg-verdigris-tint px-3 py-2 text-small text-verdigris-ink">
+    <div className="border-l-4 border-verdigris bg-verdigris-tint px-3 pt-2 text-small text-verdigris-ink">
       <p className="text-note">
         From the desk{remark.by ? `, ${remark.by.name}` : ''}, {momentWords(remark.at)}
       </p>

@@ -35,7 +35,7 @@ export function HandInSection({ acts, emailVerified, onGoTo }: Props) {
       lead="A moderator reads it before it is published: whether it is complete, consistent, kind and not dangerous."
     >
       <div className="space-y-6">
-        <p aria-live="polite" className="font-[600]">
+        <p id="still-open" aria-live="polite" className="font-[600]">
           {openWords(open)}
         </p>
         {listed.length > 0 && (
@@ -67,6 +67,7 @@ export function HandInSection({ acts, emailVerified, onGoTo }: Props) {
             kind="main"
             busy={acts.handIn.isPending}
             disabled={open.length > 0 || !abilities.handIn}
+            describedBy="still-open"
             onClick={() => acts.handIn.mutate()}
           >
             Hand in

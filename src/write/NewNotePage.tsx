@@ -2,7 +2,7 @@ import { useMutation, useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link, useNavigate, useSearchParams } from 'react-router-dom';
 import { paths } from '#shared/paths.ts';
-import { newIdempotencyKey } from '../http/client.ts';
+import { useRepeatKey } from '../http/useRepeatKey.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
 import { noteQueries } from '../notes/note-queries.ts';
 import { Button } from '../ui/Button.tsx';
@@ -12,7 +12,7 @@ import { Skeleton } from '../ui/Skeleton.tsx';
 import { usePageTitle } from '../ui/usePageTitle.ts';
 import { DescribeKiln } from './DescribeKiln.tsx';
 import { startNote } from './draft-mutations.ts';
-import { formKilnQueries } from './my-kilns.ts';
+import { kilnQueries } from '../kilns/kiln-queries.ts';
 
 const idIn = (text: string | null): number | null =>
   text !== null && /^[1-9]\d{0,14}$/.test(text) ? Number(text) : null;
@@ -22,17 +22,18 @@ export function NewNotePage() {
   usePageTitle('Write a note');
   const [search] = useSearchParams();
   const navigate = useNavigate();
-  const kilns = useQuery(formKilnQueries.mine());
+  const kilns = useQuery(kilnQueries.mine());
   const askedKiln = idIn(search.get('kiln'));
   const triedNoteId = idIn(search.get('tried'));
   const tried = useQuery({ ...noteQueries.page(triedNoteId ?? 0), enabled: triedNoteId !== null });
   const [chosen, setChosen] = useState<number | null>(null);
   const [describing, setDescribing] = useState(false);
-  const [key] = useState(newIdempotencyKey);
+  const keyFor = useRepeatKey();
   const start = useMutation({
-    // One key for each choice: pressed twice it is one note, chosen anew it is another request.
-    mutationFn: (kilnId: number | null) =>
-      startNote({ kilnId, triedNoteId, key: `${key}-${String(kilnId ?? 0)}` }),
+    mutationFn: (kilnId: number | null) => {
+      const body = { kilnId, triedNoteId };
+      return startNote({ ...body, key: keyFor(body) });
+    },
     onSuccess: (draft) => navigate(paths.write(draft.id), { replace: true }),
   });
   if (kilns.isPending) return <Skeleton words="Your kilns are being fetched" shape="text" />;

@@ -4,8 +4,10 @@ import { IssueList } from '../ui/IssueList.tsx';
 import { RowsEditor } from '../ui/RowsEditor.tsx';
 import { blankPiece, copyOfPiece } from './blank-piece.ts';
 import { useWriteForm } from './form-context.ts';
+import { FormSlice } from './FormSlice.tsx';
 import { PieceRow } from './PieceRow.tsx';
 import { PinnedField } from './PinnedField.tsx';
+import { saidUnder } from './said-under.ts';
 import { WriteSection } from './WriteSection.tsx';
 
 interface Row {
@@ -23,7 +25,8 @@ function nameOf({ piece }: Row, index: number): string {
 
 /** What was in the kiln, and what became of it: a row for each kind of piece. */
 export function PiecesSection() {
-  const { fields, change, issuesAt, marginAt } = useWriteForm();
+  const form = useWriteForm();
+  const { fields, change, issuesAt, marginAt } = form;
   return (
     <WriteSection
       id="pieces"
@@ -41,8 +44,26 @@ export function PiecesSection() {
           nameOf={nameOf}
           most={MAX_PIECES}
           addWords="Add a row of pieces"
-          renderRow={(row, put, index) => (
-            <PieceRow piece={row.piece} index={index} onPiece={(piece) => put({ ...row, piece })} />
+          renderRow={({ piece }, _put, index) => (
+            <FormSlice
+              form={form}
+              reads={[piece, index]}
+              said={saidUnder(form, [`/pieces/${String(index)}`])}
+            >
+              <PieceRow
+                piece={piece}
+                index={index}
+                // From the newest rows, not from those this row was drawn with.
+                onPiece={(next) =>
+                  change((now) => ({
+                    ...now,
+                    pieces: now.pieces.map((each, at) =>
+                      at === index && each.key === piece.key ? next : each,
+                    ),
+                  }))
+                }
+              />
+            </FormSlice>
           )}
         />
       </PinnedField>

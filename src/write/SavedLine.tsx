@@ -6,6 +6,7 @@ import type { SaveState } from './draft-keeper.ts';
 interface Props {
   readonly state: SaveState;
   readonly onRetry: () => void;
+  readonly onSeeBoth: () => void;
 }
 
 function clockOf(iso: string): string {
@@ -26,16 +27,21 @@ export function savedWords(state: SaveState): string {
         ? 'Not sent: kept in this browser'
         : 'Not sent, and this browser keeps nothing: leave this page open';
     case 'conflict':
-      return 'Saved elsewhere too';
+      return 'Saved elsewhere too, so nothing is sent';
     case 'refused':
       return `Not saved: ${state.reason}`;
   }
 }
 
+/** Whether saving has more to say than when it was done. */
+export function isTroubled({ kind }: SaveState): boolean {
+  return kind === 'unsent' || kind === 'refused' || kind === 'conflict';
+}
+
 /** When the work was last saved, or why it was not. Trouble is spoken; every save is not. */
-export function SavedLine({ state, onRetry }: Props) {
+export function SavedLine({ state, onRetry, onSeeBoth }: Props) {
   const words = savedWords(state);
-  const isTrouble = state.kind === 'unsent' || state.kind === 'refused';
+  const isTrouble = isTroubled(state);
   return (
     <p className="flex flex-wrap items-center gap-x-3 text-small">
       <span
@@ -44,7 +50,12 @@ export function SavedLine({ state, onRetry }: Props) {
         {isTrouble && <Icon name="look-again" />}
         {words}
       </span>
-      {isTrouble && (
+      {state.kind === 'conflict' && (
+        <Button kind="quiet" onClick={onSeeBoth}>
+          See both versions
+        </Button>
+      )}
+      {isTrouble && state.kind !== 'conflict' && (
         <Button kind="quiet" icon="retry" onClick={onRetry}>
           Send again
         </Button>

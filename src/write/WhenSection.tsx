@@ -1,9 +1,10 @@
+import { memo } from 'react';
 import { START_CLASSES } from '#shared/vocabulary/kiln.ts';
 import { DateField } from '../ui/DateField.tsx';
 import { SelectField } from '../ui/SelectField.tsx';
 import { TimeField } from '../ui/TimeField.tsx';
 import { Measure, OneOf } from './GroupFields.tsx';
-import { useGroupField, useWriteForm } from './form-context.ts';
+import { useGroupField, useWriteForm, type WriteForm } from './form-context.ts';
 import { PinnedField } from './PinnedField.tsx';
 import { WriteSection } from './WriteSection.tsx';
 
@@ -56,18 +57,31 @@ export function WhenSection() {
   );
 }
 
+/** Four hundred zones are not drawn anew with every key typed beside them. */
+const ZoneField = memo(function ZoneField(props: {
+  readonly zone: string;
+  readonly change: WriteForm['change'];
+  readonly disabled: boolean;
+}) {
+  const names = [...new Set([OWN_ZONE, props.zone, ...ZONES])].filter((name) => name !== '');
+  return (
+    <SelectField
+      label="Time zone of the kiln"
+      disabled={props.disabled}
+      value={props.zone || null}
+      onValue={(next) =>
+        props.change((now) => ({ ...now, when: { ...now.when, timeZone: next ?? '' } }))
+      }
+      options={names.map((name) => ({ value: name, label: name.replace(/_/g, ' ') }))}
+    />
+  );
+});
+
 function TimeZone() {
-  const { value, set, ...field } = useGroupField('when', 'timeZone');
-  const names = [...new Set([OWN_ZONE, value, ...ZONES])].filter((name) => name !== '');
+  const { fields, change, editable } = useWriteForm();
   return (
     <PinnedField pointer="/when/timeZone">
-      <SelectField
-        label="Time zone of the kiln"
-        {...field}
-        value={value || null}
-        onValue={(next) => set(next ?? '')}
-        options={names.map((name) => ({ value: name, label: name.replace(/_/g, ' ') }))}
-      />
+      <ZoneField zone={fields.when.timeZone} change={change} disabled={!editable} />
     </PinnedField>
   );
 }

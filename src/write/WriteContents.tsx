@@ -3,15 +3,22 @@ import { WRITE_SECTIONS, type WriteSectionId } from './write-sections.ts';
 
 interface Props {
   readonly openIn: ReadonlyMap<WriteSectionId, number>;
+  /** Saving has more to say than a few words. */
+  readonly isLong: boolean;
   /** How saving stands. */
   readonly children: ReactNode;
 }
 
 /** The table of contents, always in reach, with how much each section still asks. */
-export function WriteContents({ openIn, children }: Props) {
+export function WriteContents({ openIn, isLong, children }: Props) {
   return (
-    <div className="sticky top-0 z-30 flex flex-wrap items-center justify-between gap-x-6 border-y border-soot-2 bg-ash">
-      <nav aria-label="Sections of this note" className="min-w-0 max-w-full overflow-x-auto">
+    <div
+      className={`sticky top-0 z-30 flex items-center justify-between gap-x-6 border-y border-soot-2 bg-ash ${isLong ? 'flex-wrap' : ''}`}
+    >
+      <nav
+        aria-label="Sections of this note"
+        className="relative min-w-0 max-w-full overflow-x-auto"
+      >
         <ol className="flex gap-x-4 text-small whitespace-nowrap">
           {WRITE_SECTIONS.map(({ id, title }) => {
             const open = openIn.get(id) ?? 0;
@@ -42,7 +49,7 @@ export function WriteContents({ openIn, children }: Props) {
           })}
         </ol>
       </nav>
-      <div className="py-1.5">{children}</div>
+      <div className="shrink-0 py-1.5">{children}</div>
     </div>
   );
 }

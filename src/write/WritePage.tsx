@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useEffect } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { useParams } from 'react-router-dom';
 import type { Me } from '#shared/api/accounts.ts';
 import type { Kiln } from '#shared/api/kilns.ts';
@@ -13,7 +13,7 @@ import { ConflictScreen } from './ConflictScreen.tsx';
 import { DraftForm } from './DraftForm.tsx';
 import type { DraftKeeper } from './draft-keeper.ts';
 import type { FormKiln } from './form-context.ts';
-import { formKilnQueries } from './my-kilns.ts';
+import { kilnQueries } from '../kilns/kiln-queries.ts';
 import { ReadOnlyDraft } from './ReadOnlyDraft.tsx';
 import { useDraftActs } from './useDraftActs.ts';
 import { useDraftKeeper } from './useDraftKeeper.ts';
@@ -26,7 +26,7 @@ export function WritePage() {
   const { me } = useSession();
   // Never from a cache: a form must stand on what the server has now.
   const draft = useQuery({ ...noteQueries.draft(noteId), gcTime: 0 });
-  const kilns = useQuery(formKilnQueries.mine());
+  const kilns = useQuery(kilnQueries.mine());
   usePageTitle(draft.data ? draft.data.fields.title || 'A new note' : null);
   const failed = [draft, kilns].find(({ isError, data }) => isError && data === undefined);
   if (failed) {
@@ -69,12 +69,16 @@ interface Props {
 }
 
 function KeptNote({ latest, kilns, me, onAskAgain }: Props) {
-  const { units } = useSession();
+  const { temperature, system } = useSession().units;
+  // One object as long as it says the same: parts of the form are drawn anew when it changes.
+  const units = useMemo(() => ({ temperature, system }), [temperature, system]);
   const [kept, keeper] = useDraftKeeper(me.id, latest);
   const acts = useDraftActs(keeper, latest.id);
   const kiln = useFormKiln(kilns, kept);
   useNewerDraft(keeper, latest);
-  if (kept.state.kind === 'conflict') {
+  // Never under the typist's hands: the form stays until its author asks to see both versions.
+  const [seesBoth, setSeesBoth] = useState(kept.state.kind === 'conflict');
+  if (kept.state.kind === 'conflict' && seesBoth) {
     return (
       <ConflictScreen
         mine={kept.fields}
@@ -83,6 +87,7 @@ function KeptNote({ latest, kilns, me, onAskAgain }: Props) {
         units={units}
         onSettle={(choice) => {
           keeper.settle(choice);
+          setSeesBoth(false);
           if (choice === 'theirs') onAskAgain();
         }}
       />
@@ -100,6 +105,7 @@ function KeptNote({ latest, kilns, me, onAskAgain }: Props) {
       units={units}
       emailVerified={me.emailVerified}
       acts={acts}
+      onSeeBoth={() => setSeesBoth(true)}
     />
   );
 }
@@ -118,7 +124,7 @@ function useNewerDraft(keeper: DraftKeeper, latest: Draft): void {
 function useFormKiln(kilns: readonly Kiln[], { fields }: KeptDraft): FormKiln | null {
   const mine = kilns.find(({ id }) => id === fields.kilnId) ?? null;
   const other = useQuery({
-    ...formKilnQueries.one(fields.kilnId ?? 0),
+    ...kilnQueries.page(fields.kilnId ?? 0),
     enabled: fields.kilnId !== null && mine === null,
   });
   if (fields.kilnId === null) return null;

@@ -111,7 +111,7 @@ export class DraftKeeper {
   }
 
   /** Changes what is on the screen; kept here at once, sent soon. */
-  change(update: (fields: NoteFields) => NoteFields): void {
+  readonly change = (update: (fields: NoteFields) => NoteFields): void => {
     const fields = update(this.#kept.fields);
     if (fields === this.#kept.fields) return;
     this.#dirty = true;
@@ -128,7 +128,7 @@ export class DraftKeeper {
             : { kind: 'waiting' },
     });
     if (state.kind !== 'conflict') this.#schedule(PAUSE_MILLISECONDS);
-  }
+  };
 
   /** Sends now what is waiting, and resolves when the server has it or has said why not. */
   async flush(): Promise<void> {

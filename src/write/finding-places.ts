@@ -13,7 +13,12 @@ const PLACES: Readonly<Partial<Record<FindingCode, string>>> = {
   'uneven-heat': '/result/troubles',
 };
 
+/** The field beside which a finding is told, if any. */
+export function placeOfFinding({ code }: Finding): string | null {
+  return PLACES[code] ?? null;
+}
+
 /** The findings told beside the field at a pointer. */
 export function findingsBeside(pointer: string, findings: readonly Finding[]): Finding[] {
-  return findings.filter(({ code }) => PLACES[code] === pointer);
+  return findings.filter((finding) => placeOfFinding(finding) === pointer);
 }

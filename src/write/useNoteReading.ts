@@ -2,11 +2,15 @@ import { useQuery } from '@tanstack/react-query';
 import { useDeferredValue, useMemo } from 'react';
 import type { Draft } from '#shared/api/notes.ts';
 import type { StripPoints } from '#shared/api/note-rows.ts';
+import { findingsOf } from '#shared/firing/findings.ts';
+import { readFiring } from '#shared/firing/read-firing.ts';
+import { checkNote } from '#shared/note/checks/check-note.ts';
 import type { Check } from '#shared/note/checks/check.ts';
 import type { NoteFields } from '#shared/note/note-fields.ts';
-import { readNote, type NoteReading, type StoredReadings } from '#shared/note/read-note.ts';
+import { readingsOf, type NoteReading, type StoredReadings } from '#shared/note/read-note.ts';
 import { noteQueries } from '../notes/note-queries.ts';
 import type { FormKiln } from './form-context.ts';
+import { completeReadings } from './record/typed-rows.ts';
 
 /** Today where the kiln stands, `YYYY-MM-DD`; an unknown zone counts as this browser's. */
 export function todayIn(timeZone: string): string {
@@ -62,25 +66,48 @@ export function useNoteReading(
     };
   }, [sent]);
 
+  // The firing is read anew only when something it is read from was typed.
+  const { record, plan, when } = settled;
+  const kilnFields = kiln?.fields ?? null;
+  const { targetCelsius, drawnBecause } = plan;
+  const { startClass } = when;
+  const firing = useMemo(
+    () =>
+      readFiring({
+        readings: stored ? stored.readings : completeReadings(record.typedRows),
+        secondProbe: stored?.secondProbe ?? null,
+        marks: record.marks,
+        targetCelsius,
+        fuel: kilnFields?.fuel ?? null,
+        startClass,
+        drawnBecause,
+        probe: kilnFields?.probe ?? null,
+        answers: record.levelAnswers,
+      }),
+    [stored, record, targetCelsius, drawnBecause, startClass, kilnFields],
+  );
+  const findings = useMemo(() => (firing ? findingsOf(firing) : []), [firing]);
+
   const reading = useMemo((): NoteReading => {
     const { proposedChanges } = draft;
     if (recordId !== null && stored === null) {
       return { reading: null, findings: draft.findings, checks: checksOf(draft), proposedChanges };
     }
-    const kilnFields = kiln?.fields ?? null;
-    const read = readNote({
+    const checks = checkNote({
       fields: settled,
       kiln: kilnFields,
-      stored,
+      reading: firing,
+      hasRecord: readingsOf(settled, stored).length > 0,
       // The checks ask only whether there was an earlier firing; its differences the server tells.
       earlier: draft.earlier && kilnFields ? { fields: settled, kiln: kilnFields } : null,
       today: todayIn(settled.when.timeZone),
     });
     return {
-      ...read,
-      checks: read.checks.filter((check) => check.forModerators !== true),
+      reading: firing,
+      findings,
+      checks: checks.filter((check) => check.forModerators !== true),
       proposedChanges,
     };
-  }, [settled, stored, recordId, kiln, draft]);
+  }, [settled, stored, recordId, kilnFields, draft, firing, findings]);
   return { reading, stored };
 }
