@@ -45,7 +45,12 @@ export function Layout() {
         <MainNavigation />
       </header>
       <OfflineNotice />
-      <main ref={main} id="main" tabIndex={-1} className="grow py-6 outline-none sm:py-10">
+      <main
+        ref={main}
+        id="main"
+        tabIndex={-1}
+        className="grow py-6 outline-none sm:py-10 print:py-0"
+      >
         <Suspense fallback={<Skeleton words="The page is being fetched" shape="text" />}>
           <Outlet />
         </Suspense>

@@ -38,7 +38,7 @@ export function FiringSheet({ groups, blanks = 'leave-out', headingLevel = 3 }: 
         {shown.map((group) => (
           <section
             key={group.heading}
-            className="break-inside-avoid pt-3 pb-2 print:pt-1.5 print:pb-1"
+            className="break-inside-avoid pt-3 pb-2 print:break-inside-auto print:pt-1 print:pb-1"
           >
             <Heading className="border-b border-line pb-1 text-note font-[650] tracking-normal">
               {group.heading}
@@ -47,7 +47,7 @@ export function FiringSheet({ groups, blanks = 'leave-out', headingLevel = 3 }: 
               {group.rows.map((row) => (
                 <div
                   key={row.label}
-                  className="grid grid-cols-[minmax(7rem,2fr)_3fr] items-baseline gap-x-4 border-b border-line py-1.5 print:gap-x-2 print:py-0.5"
+                  className="grid grid-cols-[minmax(7rem,2fr)_3fr] items-baseline gap-x-4 break-inside-avoid border-b border-line py-1.5 print:gap-x-2 print:py-px"
                 >
                   <dt className="text-soot-2">{row.label}</dt>
                   <dd className={row.reading ? 'reading text-small whitespace-normal' : 'min-w-0'}>

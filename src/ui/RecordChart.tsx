@@ -15,18 +15,21 @@ import { ReadOffFlag } from './ReadOffFlag.tsx';
 import { ReadingsTable } from './ReadingsTable.tsx';
 import { useWidth } from './useWidth.ts';
 
+/** So low that sheet, strip and chart of a note share one page. */
+const PAPER_PLOT_PX = 170;
+
 /** A record as temperature over time: ink with its heat beneath, read off by pointer or arrows. */
 export function RecordChart(props: RecordChartProps) {
   const { points, alt, unit = 'C', targetCelsius = null, secondProbe, overlay } = props;
   const id = useId();
-  const [ref, width] = useWidth<HTMLDivElement>();
+  const [ref, width, onPaper] = useWidth<HTMLDivElement>();
   const [minute, setMinute] = useState<number | null>(null);
   if (points.length < 2) {
     return <p className="border-y border-line py-4 text-small text-soot-2">{alt}</p>;
   }
   const shownMarks = props.marks ?? [];
   const labels = chartLabels(props, width);
-  const frame = chartFrame(props, width, labels.lanes);
+  const frame = chartFrame(props, width, labels.lanes, onPaper ? PAPER_PLOT_PX : undefined);
   const { xOf, yOf, plot } = frame;
   const spoken = (at: number) => {
     const second = secondProbe ? celsiusAt(secondProbe, at) : null;

@@ -38,7 +38,12 @@ function minuteToX(props: RecordChartProps, width: number) {
 }
 
 /** Where everything of a chart lies, at a width, under so many lanes of labels. */
-export function chartFrame(props: RecordChartProps, width: number, lanes: number): ChartFrame {
+export function chartFrame(
+  props: RecordChartProps,
+  width: number,
+  lanes: number,
+  plotHeight = Math.round(Math.min(360, Math.max(220, width * 0.4))),
+): ChartFrame {
   const { points, secondProbe, overlay, targetCelsius, unit = 'C' } = props;
   const { start, end } = minuteRange(props);
   let low = 0;
@@ -53,7 +58,6 @@ export function chartFrame(props: RecordChartProps, width: number, lanes: number
   const lowDegrees = Math.floor(fromCelsius(low, unit) / round) * round;
   const highDegrees = Math.ceil((fromCelsius(high, unit) + round * 0.3) / round) * round;
   const top = lanes * LANE_HEIGHT + 8;
-  const plotHeight = Math.round(Math.min(360, Math.max(220, width * 0.4)));
   const bottom = top + plotHeight;
   return {
     height: bottom + CHART_MARGIN.bottom,

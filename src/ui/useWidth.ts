@@ -11,6 +11,7 @@ const PAPER_PX = 688;
  */
 export function useWidth<T extends Element>(fallback = 720) {
   const [width, setWidth] = useState(fallback);
+  const [onPaper, setOnPaper] = useState(false);
   const ref = useCallback((element: T | null) => {
     if (!element || typeof ResizeObserver === 'undefined') return;
     let onScreen: number | null = null;
@@ -23,10 +24,14 @@ export function useWidth<T extends Element>(fallback = 720) {
     });
     const toPaper = (): void => {
       printing = true;
-      flushSync(() => setWidth(PAPER_PX));
+      flushSync(() => {
+        setWidth(PAPER_PX);
+        setOnPaper(true);
+      });
     };
     const toScreen = (): void => {
       printing = false;
+      setOnPaper(false);
       if (onScreen !== null) setWidth(onScreen);
     };
     observer.observe(element);
@@ -38,5 +43,5 @@ export function useWidth<T extends Element>(fallback = 720) {
       window.removeEventListener('afterprint', toScreen);
     };
   }, []);
-  return [ref, width] as const;
+  return [ref, width, onPaper] as const;
 }
