@@ -81,17 +81,19 @@ export function JoinPage() {
           issues={issuesAt(error, '/password')}
         />
         <HouseRules />
-        <CheckField
-          label="I agree to the house rules, and to others reading and quoting my published notes under the licence"
-          required
-          checked={agreed}
-          onChecked={setAgreed}
-          issues={
-            issuesAt(error, '/agreed').length > 0 && !agreed
-              ? [{ kind: 'must-mend', text: 'Joining needs your agreement to both.' }]
-              : []
-          }
-        />
+        <div className="@2xl:pl-[11.75rem]">
+          <CheckField
+            label="I agree to the house rules, and to others reading and quoting my published notes under the licence"
+            required
+            checked={agreed}
+            onChecked={setAgreed}
+            issues={
+              issuesAt(error, '/agreed').length > 0 && !agreed
+                ? [{ kind: 'must-mend', text: 'Joining needs your agreement to both.' }]
+                : []
+            }
+          />
+        </div>
         <FormFoot>
           <Button type="submit" kind="main" busy={joining.isPending}>
             Join

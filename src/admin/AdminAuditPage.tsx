@@ -78,14 +78,18 @@ const COLUMNS: readonly Column<Entry>[] = [
     heading: 'Who',
     cell: ({ actor }) =>
       actor ? (
-        <Link to={paths.member(actor.id)} className="link break-words">
+        <Link to={paths.member(actor.id)} className="link whitespace-nowrap">
           {actor.name}
         </Link>
       ) : (
         'the command line'
       ),
   },
-  { key: 'act', heading: 'Act', cell: ({ act }) => ACTS[act] ?? act },
+  {
+    key: 'act',
+    heading: 'Act',
+    cell: ({ act }) => <span className="sm:whitespace-nowrap">{ACTS[act] ?? act}</span>,
+  },
   { key: 'target', heading: 'On', cell: ({ target }) => <Target {...target} /> },
   {
     key: 'reason',

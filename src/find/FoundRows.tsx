@@ -33,11 +33,9 @@ function Found({ hit: { why, passage } }: { readonly hit: Hit }) {
       )}
       {passage !== null && passage.length > 0 && (
         <p className="font-story text-small">
-          …
           {passage.map((piece, index) =>
             piece.hit ? <mark key={index}>{piece.text}</mark> : piece.text,
           )}
-          …
         </p>
       )}
     </>

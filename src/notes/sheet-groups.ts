@@ -107,7 +107,7 @@ function recipeGroup({ reduction, pieces }: Fields, units: Units): SheetGroup {
       figure(
         'Burped',
         joined(
-          shown(reduction.burpedTimes, (times) => (times === 0 ? 'not' : `${String(times)} ×`)),
+          shown(reduction.burpedTimes, (times) => (times === 0 ? 'no' : `${String(times)} ×`)),
           shown(
             reduction.burpedFirstAfterSeconds,
             (seconds) => `first after ${formatSeconds(seconds)}`,

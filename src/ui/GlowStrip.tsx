@@ -89,7 +89,7 @@ export function GlowStrip({ points, alt, targetCelsius, hold, marks = [], unit =
           role="img"
           aria-label={alt}
           viewBox={`0 0 ${width} ${height}`}
-          className="ink-drawing block h-auto w-full"
+          className="ink-drawing block h-auto w-full overflow-visible"
         >
           <defs>
             <HeatGradient id={gradientId} points={points} xOf={xOf} />

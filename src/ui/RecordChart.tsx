@@ -50,7 +50,7 @@ export function RecordChart(props: RecordChartProps) {
           role="img"
           aria-label={alt}
           viewBox={`0 0 ${width} ${frame.height}`}
-          className="ink-drawing block h-auto w-full"
+          className="ink-drawing block h-auto w-full overflow-visible"
         >
           <ChartAxes frame={frame} unit={unit} />
           <ChartStretches

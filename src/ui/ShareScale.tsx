@@ -6,7 +6,7 @@ export function ShareScale({ heading }: { readonly heading: string }) {
     <div
       className={`grid items-end gap-x-6 border-b border-soot py-1.5 text-note text-soot-2 ${SHARE_COLUMNS}`}
     >
-      <span>{heading}</span>
+      <span className="text-balance">{heading}</span>
       <span aria-hidden="true" className="flex justify-between px-1">
         <span className="reading -translate-x-1/2">0</span>
         <span className="reading">50</span>

@@ -85,12 +85,14 @@ export function PieceRow(props: PieceProps) {
       </FoldedGroup>
       <OneOfAt label="After the draw" terms={ROUTES} required {...at('route')} />
       {piece.route !== null && piece.route !== 'air-only' && (
-        <CheckField
-          label="This row had a recipe of its own after the draw"
-          hint="Else the shared one under “After the draw” holds for it."
-          checked={piece.recipe !== null}
-          onChecked={(own) => onPiece({ ...piece, recipe: own ? blankRecipe() : null })}
-        />
+        <div className="@2xl:pl-[11.75rem]">
+          <CheckField
+            label="This row had a recipe of its own after the draw"
+            hint="Else the shared one under “After the draw” holds for it."
+            checked={piece.recipe !== null}
+            onChecked={(own) => onPiece({ ...piece, recipe: own ? blankRecipe() : null })}
+          />
+        </div>
       )}
       {piece.recipe && (
         <div className="border-l-2 border-line pl-4">
