@@ -153,7 +153,7 @@ export function DraftForm({
         <FormSlice
           {...slice(['/record'], fields.record, fields.plan.targetCelsius, reading.reading)}
         >
-          <div id="section-record" tabIndex={-1} data-pointer="/record" className="scroll-mt-28">
+          <div data-pointer="/record">
             <RecordSection />
             <ReadOffList />
           </div>

@@ -37,9 +37,7 @@ export function KilnChoiceSection() {
     kiln.volumeLitres === null ? null : formatChamber(kiln.volumeLitres, units),
     kiln.fields.wall === null ? null : WALLS[kiln.fields.wall].toLowerCase(),
     FUELS[kiln.fields.fuel].toLowerCase(),
-    kiln.fields.probe === null || kiln.fields.probe === 'none'
-      ? 'no probe'
-      : `type ${kiln.fields.probe} probe`,
+    probeWords(kiln.fields.probe),
   ];
   return (
     <WriteSection
@@ -88,6 +86,12 @@ export function KilnChoiceSection() {
       )}
     </WriteSection>
   );
+}
+
+/** Not said is not none. */
+function probeWords(probe: KilnFields['probe']): string | null {
+  if (probe === null) return null;
+  return probe === 'none' ? 'no probe' : `type ${probe} probe`;
 }
 
 function nameWithKeeper(

@@ -15,7 +15,7 @@ export function WriteSection({ id, title, lead, children }: Props) {
       id={`section-${id}`}
       tabIndex={-1}
       aria-labelledby={`heading-${id}`}
-      className="@container min-w-0 scroll-mt-28 border-t-2 border-soot pt-3 outline-none"
+      className="@container min-w-0 scroll-mt-4 border-t-2 border-soot pt-3 outline-none"
     >
       <h2 id={`heading-${id}`} className="text-section">
         {title}
