@@ -20,7 +20,8 @@ const ELEMENTS = {
   strong: [],
   em: [],
   a: ['href', 'rel'],
-  aside: ['class'],
+  // A note, because an aside of its own would be a landmark within the page's main one.
+  aside: ['class', 'role'],
   figure: [],
   figcaption: [],
   img: ['src', 'srcset', 'sizes', 'alt', 'width', 'height', 'loading'],
@@ -45,6 +46,7 @@ const ALLOWED_VALUES = {
   width: NUMBER,
   height: NUMBER,
   loading: /^lazy$/,
+  role: /^note$/,
 };
 
 const { window } = new JSDOM('');

@@ -85,7 +85,7 @@ export function storyMarkup(story: Story, pictures: readonly Picture[]): string 
         return '<hr>';
       case 'aside': {
         const kind = block.attrs?.['kind'] === 'caution' ? 'caution' : 'change';
-        return `<aside class="${kind}"><p class="aside-label">${ASIDES[kind] ?? ''}</p>${children(block)}</aside>`;
+        return `<aside class="${kind}" role="note"><p class="aside-label">${ASIDES[kind] ?? ''}</p>${children(block)}</aside>`;
       }
       case 'picture':
         return pictureMarkup(block);

@@ -51,7 +51,7 @@ describe('the sanitiser', () => {
     const story = [
       '<h3>Before</h3><p>A <strong>bright</strong> <em>orange</em>.<br>Then</p>',
       '<ul><li><p>one</p></li></ul><ol start="3"><li><p>three</p></li></ol><hr>',
-      '<aside class="caution"><p class="aside-label">Caution</p><p>x</p></aside>',
+      '<aside class="caution" role="note"><p class="aside-label">Caution</p><p>x</p></aside>',
       `<figure><img src="${OWN}" srcset="${OWN} 480w, ${OWN} 960w" sizes="(min-width: 48rem) 42rem, 100vw" alt="a &amp; b" width="480" height="320" loading="lazy"><figcaption>c</figcaption></figure>`,
       '<p><a href="https://example.org/a?b=c&amp;d#e" rel="noopener nofollow ugc">there</a></p>',
       '<p><a href="mailto:potter@example.org" rel="noopener nofollow ugc">mail</a></p>',

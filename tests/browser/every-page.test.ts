@@ -102,7 +102,6 @@ describe('every page is sound in both themes, on a phone and on a wide screen', 
       paths.find('zzzz qqqq'),
       paths.find(),
       paths.newest,
-      `/notes/${found.id}`,
       paths.note(found.id, found.slug),
       paths.kiln(found.kiln.id),
       paths.member(found.author.id),
@@ -117,6 +116,11 @@ describe('every page is sound in both themes, on a phone and on a wide screen', 
       '/nowhere',
     ]);
     expect(await examineAll(visiting, {}, addresses)).toEqual([]);
+
+    // Its address without words is the same page.
+    note([`/notes/${found.id}`]);
+    await page.goto(`/notes/${found.id}`);
+    await page.getByRole('heading', { name: found.title, level: 1 }).waitFor();
   });
 
   test('for a member', async ({ visiting }) => {

@@ -42,15 +42,30 @@ async function typeOffline(context: BrowserContext, page: Page, words: string): 
   await page.getByText(NOT_SENT).first().waitFor();
 }
 
+const SAVES = '**/api/notes/*/draft';
+
+/** Types a title while this tab alone does not reach the server: it neither sends nor hears. */
+async function typeUnheard(page: Page, words: string): Promise<void> {
+  await page.route(SAVES, (route) => route.abort());
+  await title(page).fill(words);
+  await page.getByText(NOT_SENT).first().waitFor();
+}
+
+async function hearAgain(page: Page): Promise<void> {
+  await page.unroute(SAVES);
+  await page.getByRole('button', { name: 'Send again' }).click();
+}
+
 describe('what was typed is never lost', () => {
   test('of two tabs the later one is shown both versions and chooses', async ({ visiting }) => {
     const { context, page: first, address } = await openDraft(visiting);
     const second = await openAgain(context, address);
     await title(second).waitFor();
 
+    await typeUnheard(second, 'Told in the second tab');
     await title(first).fill('Told in the first tab');
     await expect.poll(() => titleAtServer(first, address), PATIENTLY).toBe('Told in the first tab');
-    await title(second).fill('Told in the second tab');
+    await hearAgain(second);
     await second.getByRole('heading', { name: 'Two versions of this note' }).waitFor();
     const both = second.getByRole('row', { name: /Title/ });
     expect(await both.textContent()).toContain('Told in the second tab');
@@ -58,6 +73,7 @@ describe('what was typed is never lost', () => {
     // Nothing of it went over the other one.
     expect(await titleAtServer(second, address)).toBe('Told in the first tab');
 
+    await typeUnheard(first, 'Told in the first tab again');
     await second.getByRole('button', { name: 'Keep mine' }).click();
     await expect
       .poll(() => titleAtServer(second, address), PATIENTLY)
@@ -65,7 +81,7 @@ describe('what was typed is never lost', () => {
     expect(await title(second).inputValue()).toBe('Told in the second tab');
 
     // Now the first one is behind, and takes what the other has.
-    await title(first).fill('Told in the first tab again');
+    await hearAgain(first);
     await first.getByRole('heading', { name: 'Two versions of this note' }).waitFor();
     await first.getByRole('button', { name: 'Take the other' }).click();
     await title(first).waitFor();
