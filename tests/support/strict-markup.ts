@@ -14,7 +14,7 @@ const ALLOWED: Readonly<Record<string, readonly string[]>> = {
   STRONG: [],
   EM: [],
   A: ['href', 'rel'],
-  ASIDE: ['class'],
+  ASIDE: ['class', 'role'],
   FIGURE: [],
   FIGCAPTION: [],
   IMG: ['src', 'srcset', 'sizes', 'alt', 'width', 'height', 'loading'],
@@ -22,6 +22,7 @@ const ALLOWED: Readonly<Record<string, readonly string[]>> = {
 const XHTML = 'http://www.w3.org/1999/xhtml';
 const PICTURE = String.raw`/media/pictures/[0-9a-f]{32}/\d{1,5}\.webp`;
 const VALUES: Readonly<Record<string, RegExp>> = {
+  role: /^note$/,
   class: /^(aside-label|caution|change)$/,
   start: /^\d{1,5}$/,
   width: /^\d{1,5}$/,
