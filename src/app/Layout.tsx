@@ -3,12 +3,12 @@ import { Link, Outlet, ScrollRestoration, useLocation, useNavigation } from 'rea
 import { paths } from '#shared/paths.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { applyThemeChoice, storedThemeChoice } from '../ui/theme.ts';
-import { Skeleton } from '../ui/Skeleton.tsx';
 import { SkipLink } from '../ui/SkipLink.tsx';
 import { SpyholeMark } from '../ui/SpyholeMark.tsx';
 import { ThemeSwitch } from '../ui/ThemeSwitch.tsx';
 import { MainNavigation } from './MainNavigation.tsx';
 import { OfflineNotice } from './OfflineNotice.tsx';
+import { PageComing } from './PageComing.tsx';
 
 /** The frame of every page: name, ways to go, the page itself, and the lines at the foot. */
 export function Layout() {
@@ -51,7 +51,7 @@ export function Layout() {
         tabIndex={-1}
         className="grow py-6 outline-none sm:py-10 print:py-0"
       >
-        <Suspense fallback={<Skeleton words="The page is being fetched" shape="text" />}>
+        <Suspense fallback={<PageComing />}>
           <Outlet />
         </Suspense>
       </main>

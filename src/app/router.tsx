@@ -2,6 +2,7 @@ import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 import type { ComponentType } from 'react';
 import type { PagePattern } from '#shared/paths.ts';
 import { Layout } from './Layout.tsx';
+import { PageComing } from './PageComing.tsx';
 import { NotFoundPage } from '../http/NotFoundPage.tsx';
 import { RouteErrorPage } from './RouteErrorPage.tsx';
 
@@ -46,6 +47,7 @@ const PAGES: Readonly<Record<Exclude<PagePattern, '/workbench'>, Page>> = {
 const routes: RouteObject[] = Object.entries(PAGES).map(([path, page]) => ({
   path,
   lazy: async () => ({ Component: await page() }),
+  HydrateFallback: PageComing,
   ErrorBoundary: RouteErrorPage,
 }));
 
@@ -56,6 +58,7 @@ if (import.meta.env.DEV) {
     lazy: async () => ({
       Component: (await import('../workbench/WorkbenchPage.tsx')).WorkbenchPage,
     }),
+    HydrateFallback: PageComing,
   });
 }
 
