@@ -143,12 +143,16 @@ function Results({ found, address, isSettled, hasTemperature, go }: ResultsProps
   const sorts = optionsOf(FIND_SORTS).filter(
     ({ value }) => value !== 'nearest' || hasTemperature || address.sort === 'nearest',
   );
+  // What to do about it is the one heading then.
+  const isNothing = found.total === 0 && (isAsked || ticked > 0);
   return (
-    <section aria-labelledby="found" className="space-y-4">
+    <section aria-label="Notes" className="space-y-4">
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
-        <h2 id="found" className="text-section">
-          {isAsked || ticked > 0 ? `${noteCount(found.total)} found` : 'Newest notes'}
-        </h2>
+        {!isNothing && (
+          <h2 className="text-section">
+            {isAsked || ticked > 0 ? `${noteCount(found.total)} found` : 'Newest notes'}
+          </h2>
+        )}
         {!isSettled && <BusyMark words="Looking again" />}
         {isAsked && !found.plain && found.total > 1 && (
           <SelectField
@@ -180,7 +184,7 @@ function Results({ found, address, isSettled, hasTemperature, go }: ResultsProps
           aria-busy={!isSettled}
         >
           {found.hits.length > 0 && <FoundRows hits={found.hits} units={units} />}
-          {found.total === 0 && (isAsked || ticked > 0) && (
+          {isNothing && (
             <NothingFound
               address={address}
               loosen={found.loosen}
@@ -188,7 +192,7 @@ function Results({ found, address, isSettled, hasTemperature, go }: ResultsProps
               onClearFilters={() => go(withoutFacets(address))}
             />
           )}
-          {found.total === 0 && !isAsked && ticked === 0 && <p>No notes are published yet.</p>}
+          {found.total === 0 && !isNothing && <p>No notes are published yet.</p>}
           {found.total > 0 && found.hits.length === 0 && (
             <p>
               There is no page {address.page} of these.{' '}

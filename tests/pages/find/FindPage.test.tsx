@@ -123,7 +123,12 @@ describe('FindPage', () => {
       [`GET ${QUESTION}&off=temperature`]: ok(anAnswer({ parts: withOff('temperature') })),
     });
     const { router } = renderPages(ROUTES, '/find?q=stalled+at+700');
-    await userEvent.click(await screen.findByRole('button', { name: /Leave out.*12 notes/ }));
+    const loosen = await screen.findByRole('button', { name: /Leave out.*12 notes/ });
+    // One heading says it, not a count above and words below.
+    const notes = within(screen.getByRole('region', { name: 'Notes' }));
+    const headings = notes.getAllByRole('heading');
+    expect(headings.map((heading) => heading.textContent)).toEqual(['No note fits all of this']);
+    await userEvent.click(loosen);
     await waitFor(() => expect(router.state.location.search).toContain('off=temperature'));
   });
 
