@@ -3,6 +3,7 @@ import { chartPoints } from '#shared/firing/strip.ts';
 import type { KilnFields } from '#shared/note/kiln-fields.ts';
 import type { NoteFields } from '#shared/note/note-fields.ts';
 import { readNote, type NoteReading, type StoredReadings } from '#shared/note/read-note.ts';
+import { todayAtKiln } from '#shared/note/today-at-kiln.ts';
 import type { Neighbour } from '#shared/api/notes.ts';
 import { findKiln } from '../kilns/kiln-repository.ts';
 import { loadContent } from '../records/record-content.ts';
@@ -22,9 +23,6 @@ export interface DraftReading extends NoteReading {
   readonly stored: StoredReadings | null;
   readonly earlier: Neighbour | null;
 }
-
-/** Today in UTC, `YYYY-MM-DD`. */
-export const today = (): string => new Date().toISOString().slice(0, 10);
 
 /** Loads what a working copy refers to and reads it: whole for handing in, thinned while typing. */
 export async function readDraft(
@@ -67,7 +65,7 @@ export async function readDraft(
     kiln: kiln?.fields ?? null,
     stored,
     earlier: earlier?.firing ?? null,
-    today: today(),
+    today: todayAtKiln(fields, kiln?.fields ?? null),
   });
   return {
     ...reading,

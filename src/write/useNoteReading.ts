@@ -8,25 +8,10 @@ import { checkNote } from '#shared/note/checks/check-note.ts';
 import type { Check } from '#shared/note/checks/check.ts';
 import type { NoteFields } from '#shared/note/note-fields.ts';
 import { readingsOf, type NoteReading, type StoredReadings } from '#shared/note/read-note.ts';
+import { todayAtKiln } from '#shared/note/today-at-kiln.ts';
 import { noteQueries } from '../notes/note-queries.ts';
 import type { FormKiln } from './form-context.ts';
 import { completeReadings } from './record/typed-rows.ts';
-
-/** Today where the kiln stands, `YYYY-MM-DD`; an unknown zone counts as this browser's. */
-export function todayIn(timeZone: string): string {
-  const day = (zone: string | undefined) =>
-    new Intl.DateTimeFormat('en-CA', {
-      ...(zone === undefined ? {} : { timeZone: zone }),
-      year: 'numeric',
-      month: '2-digit',
-      day: '2-digit',
-    }).format(new Date());
-  try {
-    return day(timeZone || undefined);
-  } catch {
-    return day(undefined);
-  }
-}
 
 /** The server's checks as plain checks. */
 function checksOf(draft: Draft): Check[] {
@@ -100,7 +85,7 @@ export function useNoteReading(
       hasRecord: readingsOf(settled, stored).length > 0,
       // The checks ask only whether there was an earlier firing; its differences the server tells.
       earlier: draft.earlier && kilnFields ? { fields: settled, kiln: kilnFields } : null,
-      today: todayIn(settled.when.timeZone),
+      today: todayAtKiln(settled, kilnFields),
     });
     return {
       reading: firing,
