@@ -8,6 +8,7 @@ import { readJson } from '../database/read-json.ts';
 import { findKilnVersion } from '../kilns/kiln-repository.ts';
 import type { StoredRow } from './published-repository.ts';
 import { findRevision } from './revision-repository.ts';
+import { IN_OWN_SERIES } from './note-status.ts';
 import { slugOf } from './slug.ts';
 
 /** Where a firing stands in its kiln's order: by day, start time, then note. */
@@ -57,15 +58,26 @@ function beside<Query extends Knex.QueryBuilder>(
   return query;
 }
 
+/** A neighbour, and its place in the order as text that sorts like it. */
+interface Placed {
+  readonly neighbour: Neighbour;
+  readonly place: string;
+}
+const placeKey = ({ firedOn, noteId }: Neighbour, time: string | null): string =>
+  `${firedOn} ${(time ?? '').padEnd(5)} ${String(noteId).padStart(16, '0')}`;
+
 async function publishedNeighbour(
   db: Knex,
   place: PlaceInSeries,
   side: Side,
-): Promise<Neighbour | null> {
+): Promise<Placed | null> {
   const rows = await beside(
-    db('published_firings').select<{ note_id: number; fired_on: Date; note_row: unknown }[]>(
+    db('published_firings').select<
+      { note_id: number; fired_on: Date; fired_at_time: string | null; note_row: unknown }[]
+    >(
       'published_firings.note_id',
       'published_firings.fired_on',
+      'published_firings.fired_at_time',
       'published_firings.note_row',
     ),
     'published_firings',
@@ -76,7 +88,7 @@ async function publishedNeighbour(
   const row = rows[0];
   if (!row) return null;
   const stored = readJson(row.note_row) as StoredRow;
-  return {
+  const neighbour: Neighbour = {
     noteId: row.note_id,
     slug: stored.slug,
     title: stored.title,
@@ -88,27 +100,32 @@ async function publishedNeighbour(
     timeToTemperatureMinutes: stored.timeToTemperatureMinutes,
     changes: stored.changes,
   };
+  return { neighbour, place: placeKey(neighbour, row.fired_at_time) };
 }
 
-/** The author's own note beside this one that nobody else sees yet. */
+/** The author's own note beside this one that has no readers yet. */
 async function ownUnpublishedNeighbour(
   db: Knex,
   place: PlaceInSeries,
   side: Side,
   authorId: number,
-): Promise<Neighbour | null> {
+): Promise<Placed | null> {
   const rows = await beside(
     db('notes')
       .whereNull('notes.removed_at')
       .whereNull('notes.published_revision_id')
+      .whereIn('notes.status', [...IN_OWN_SERIES])
       .where('notes.author_id', authorId)
       .whereNot('notes.id', place.noteId)
-      .select<{ id: number; fired_on: Date; status: NoteStatus; draft: unknown }[]>(
-        'notes.id',
-        'notes.fired_on',
-        'notes.status',
-        'notes.draft',
-      ),
+      .select<
+        {
+          id: number;
+          fired_on: Date;
+          fired_at_time: string | null;
+          status: NoteStatus;
+          draft: unknown;
+        }[]
+      >('notes.id', 'notes.fired_on', 'notes.fired_at_time', 'notes.status', 'notes.draft'),
     'notes',
     'notes.id',
     place,
@@ -116,8 +133,8 @@ async function ownUnpublishedNeighbour(
   );
   const row = rows[0];
   if (!row) return null;
-  const draft = readJson(row.draft) as NoteFields;
-  return {
+  const draft = { ...emptyNoteFields(), ...(readJson(row.draft) as NoteFields) };
+  const neighbour: Neighbour = {
     noteId: row.id,
     slug: slugOf(draft.title),
     title: draft.title,
@@ -129,12 +146,13 @@ async function ownUnpublishedNeighbour(
     timeToTemperatureMinutes: draft.plan.timeToTemperatureMinutes,
     changes: draft.changes.map(({ change }) => change),
   };
+  return { neighbour, place: placeKey(neighbour, row.fired_at_time) };
 }
 
-const placeKey = (neighbour: Neighbour): string =>
-  `${neighbour.firedOn} ${String(neighbour.noteId).padStart(16, '0')}`;
-
-/** The nearer of the published neighbour and, for the author, an unpublished one of their own. */
+/**
+ * The firing before or after this place in its kiln's series: the nearer of the published one and,
+ * for the author, a living one of their own that has no readers yet (`IN_OWN_SERIES`).
+ */
 export async function neighbourOf(
   db: Knex,
   place: PlaceInSeries,
@@ -145,10 +163,10 @@ export async function neighbourOf(
     publishedNeighbour(db, place, side),
     readerId === null ? null : ownUnpublishedNeighbour(db, place, side, readerId),
   ]);
-  if (!published || !own) return published ?? own;
+  if (!published || !own) return (published ?? own)?.neighbour ?? null;
   const ownIsNearer =
-    side === 'earlier' ? placeKey(own) > placeKey(published) : placeKey(own) < placeKey(published);
-  return ownIsNearer ? own : published;
+    side === 'earlier' ? own.place > published.place : own.place < published.place;
+  return (ownIsNearer ? own : published).neighbour;
 }
 
 /** The earlier firing with its fields and kiln, for checks and proposed changes. */

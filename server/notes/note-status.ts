@@ -36,6 +36,18 @@ export function statusAfter(act: NoteAct, from: NoteStatus): NoteStatus | null {
   return transition.from.includes(from) ? transition.to : null;
 }
 
+/**
+ * Statuses in which a note that is not published still stands in its author's series: as the
+ * earlier or the next firing of a kiln, to compare with. One that was declined or taken down does
+ * not, until its author opens it again.
+ */
+export const IN_OWN_SERIES: readonly NoteStatus[] = [
+  'draft',
+  'sent-back',
+  'handed-in',
+  'on-the-desk',
+];
+
 /** The statuses an act may start from, for the condition of its UPDATE. */
 export function statusesBefore(act: NoteAct): readonly NoteStatus[] {
   return TRANSITIONS[act].from;
