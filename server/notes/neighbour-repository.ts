@@ -8,6 +8,7 @@ import { readJson } from '../database/read-json.ts';
 import { findKilnVersion } from '../kilns/kiln-repository.ts';
 import type { StoredRow } from './published-repository.ts';
 import { findRevision } from './revision-repository.ts';
+import { stripsOfNotes } from './note-strips.ts';
 import { IN_OWN_SERIES } from './note-status.ts';
 import { slugOf } from './slug.ts';
 
@@ -134,14 +135,15 @@ async function ownUnpublishedNeighbour(
   const row = rows[0];
   if (!row) return null;
   const draft = { ...emptyNoteFields(), ...(readJson(row.draft) as NoteFields) };
+  const strips = await stripsOfNotes(db, [{ id: row.id, status: row.status, draft }]);
   const neighbour: Neighbour = {
     noteId: row.id,
     slug: slugOf(draft.title),
     title: draft.title,
     firedOn: dayOf(row.fired_on),
     status: row.status,
-    strip: null,
-    stripWords: '',
+    strip: strips.get(row.id)?.strip ?? null,
+    stripWords: strips.get(row.id)?.stripWords ?? '',
     peakCelsius: draft.plan.peakCelsius,
     timeToTemperatureMinutes: draft.plan.timeToTemperatureMinutes,
     changes: draft.changes.map(({ change }) => change),

@@ -10,6 +10,7 @@ import { noteSubject } from './note-subject.ts';
 import type { NoteToShow } from './note-presenter.ts';
 import { findRevision, type Revision } from './revision-repository.ts';
 import { openRemarkCounts, lastDecisionReasons } from '../desk/remark-repository.ts';
+import { stripsOfNotes } from './note-strips.ts';
 import { slugOf } from './slug.ts';
 import { revisionSummaries } from './notebook-repository.ts';
 
@@ -56,13 +57,14 @@ export async function readNotebook(db: Knex, actor: SignedIn): Promise<Notebook>
   const notes = await notesOf(db, actor.id);
   const ids = notes.map((note) => note.id);
   const kilnIds = [...new Set(notes.map((note) => note.kilnId))].filter((id) => id !== null);
-  const [kilns, remarks, reasons, summaries] = await Promise.all([
+  const [kilns, remarks, reasons, summaries, strips] = await Promise.all([
     db('kilns')
       .whereIn('kilns.id', kilnIds)
       .select<{ id: number; name: string }[]>('kilns.id', 'kilns.name'),
     openRemarkCounts(db, ids),
     lastDecisionReasons(db, ids),
     revisionSummaries(db, ids),
+    stripsOfNotes(db, notes),
   ]);
   const kilnNames = new Map(kilns.map((kiln) => [kiln.id, kiln.name]));
   return {
@@ -82,8 +84,8 @@ export async function readNotebook(db: Knex, actor: SignedIn): Promise<Notebook>
             : null,
         firedOn: note.firedOn,
         savedAt: note.draftSavedAt.toISOString(),
-        strip: summary?.strip ?? null,
-        stripWords: summary?.stripWords ?? '',
+        strip: strips.get(note.id)?.strip ?? null,
+        stripWords: strips.get(note.id)?.stripWords ?? '',
         openChecks: summary ? openChecks(summary.checks, note.draft.checkAnswers).length : 0,
         openRemarks: remarks.get(note.id) ?? 0,
         peakCelsius: note.draft.plan.peakCelsius,

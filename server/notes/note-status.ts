@@ -36,6 +36,10 @@ export function statusAfter(act: NoteAct, from: NoteStatus): NoteStatus | null {
   return transition.from.includes(from) ? transition.to : null;
 }
 
+/** Statuses in which the working copy is its author's to write in. */
+const BEING_WRITTEN: readonly NoteStatus[] = ['draft', 'sent-back'];
+export const isBeingWritten = (status: NoteStatus): boolean => BEING_WRITTEN.includes(status);
+
 /**
  * Statuses in which a note that is not published still stands in its author's series: as the
  * earlier or the next firing of a kiln, to compare with. One that was declined or taken down does
