@@ -1,36 +1,54 @@
-import { selectByNames, selects } from './attribute-selection.ts';
+import { createSelector, selects } from './attribute-selection.ts';
 import { formatText, type FormatOptions } from './highlight.ts';
-import { isJsonObject, type Json, type JsonObject } from './json.ts';
+import { isJsonObject, setMember, type Json, type JsonObject } from './json.ts';
 import type { SearchRequest } from './search-request.ts';
 import type { TextMatcher } from './text-matcher.ts';
 
-/** The document as asked for, with `_formatted` and `_matchesPosition` where wanted. */
-export function formatHit(
-  source: JsonObject,
+export type HitFormatter = (source: JsonObject) => JsonObject;
+
+/**
+ * Makes the function that shows a document as the request asks for it, with `_formatted` and
+ * `_matchesPosition` where wanted. `matcher` is made only if something has to be marked.
+ */
+export function createHitFormatter(
   request: SearchRequest,
   displayed: readonly string[],
-  matcher: TextMatcher,
-): JsonObject {
-  const hit: JsonObject = { ...selectByNames(source, displayed, request.attributesToRetrieve) };
+  matcher: () => TextMatcher,
+): HitFormatter {
+  const retrieved = createSelector(displayed, request.attributesToRetrieve);
   const crops = parseCrops(request);
-  if (request.attributesToHighlight.length > 0 || crops.length > 0) {
-    const shown = [
-      ...request.attributesToRetrieve,
-      ...request.attributesToHighlight,
-      ...crops.map((crop) => crop.attribute),
-    ];
-    const part = selectByNames(source, displayed, shown);
-    hit['_formatted'] = formatObject(part, '', request, crops, matcher);
+  const isFormatted = request.attributesToHighlight.length > 0 || crops.length > 0;
+  if (!isFormatted && !request.showMatchesPosition) {
+    return (source) => ({ ...retrieved(source) });
   }
-  if (request.showMatchesPosition) {
-    const positions = new Map<string, Json[]>();
-    collectPositions(selectByNames(source, displayed), '', [], matcher, positions);
-    hit['_matchesPosition'] = Object.fromEntries(positions);
-  }
-  return hit;
+  const shown = createSelector(displayed, [
+    ...request.attributesToRetrieve,
+    ...request.attributesToHighlight,
+    ...crops.map((crop) => crop.attribute),
+  ]);
+  const visible = createSelector(displayed);
+  const format: Formatting = { matcher: matcher(), request, crops, optionsOf: new Map() };
+  return (source) => {
+    const hit: JsonObject = { ...retrieved(source) };
+    if (isFormatted) hit['_formatted'] = formatObject(shown(source), '', format);
+    if (request.showMatchesPosition) {
+      const positions = new Map<string, Json[]>();
+      collectPositions(visible(source), '', [], format.matcher, positions);
+      hit['_matchesPosition'] = Object.fromEntries(positions);
+    }
+    return hit;
+  };
 }
 
 type Crop = { attribute: string; length: number };
+
+type Formatting = {
+  matcher: TextMatcher;
+  request: SearchRequest;
+  crops: readonly Crop[];
+  /** By attribute, found out once for all hits. */
+  optionsOf: Map<string, FormatOptions>;
+};
 
 function parseCrops(request: SearchRequest): Crop[] {
   return request.attributesToCrop.map((entry) => {
@@ -42,36 +60,38 @@ function parseCrops(request: SearchRequest): Crop[] {
   });
 }
 
-function optionsFor(name: string, request: SearchRequest, crops: readonly Crop[]): FormatOptions {
+function optionsFor(name: string, { request, crops, optionsOf }: Formatting): FormatOptions {
+  const known = optionsOf.get(name);
+  if (known !== undefined) return known;
   const crop =
     crops.find((each) => each.attribute !== '*' && selects([each.attribute], name)) ??
     crops.find((each) => each.attribute === '*');
-  return {
+  const options: FormatOptions = {
     highlight: selects(request.attributesToHighlight, name)
       ? { preTag: request.highlightPreTag, postTag: request.highlightPostTag }
       : null,
     crop: crop === undefined ? null : { length: crop.length, marker: request.cropMarker },
   };
+  optionsOf.set(name, options);
+  return options;
 }
 
-function formatObject(
-  object: JsonObject,
-  prefix: string,
-  request: SearchRequest,
-  crops: readonly Crop[],
-  matcher: TextMatcher,
-): JsonObject {
-  const format = (name: string, value: Json): Json => {
-    if (typeof value === 'string' || typeof value === 'number') {
-      return formatText(String(value), matcher, optionsFor(name, request, crops));
-    }
-    if (Array.isArray(value)) return value.map((item) => format(name, item));
-    if (isJsonObject(value)) return formatObject(value, `${name}.`, request, crops, matcher);
-    return value;
-  };
-  return Object.fromEntries(
-    Object.entries(object).map(([key, value]) => [key, format(prefix + key, value)]),
-  );
+function formatObject(object: JsonObject, prefix: string, formatting: Formatting): JsonObject {
+  const formatted: JsonObject = {};
+  for (const key of Object.keys(object)) {
+    setMember(formatted, key, formatValue(prefix + key, object[key] ?? null, formatting));
+  }
+  return formatted;
+}
+
+/** Numbers become text; null and booleans stay as they are. */
+function formatValue(name: string, value: Json, formatting: Formatting): Json {
+  if (typeof value === 'string' || typeof value === 'number') {
+    return formatText(String(value), formatting.matcher, optionsFor(name, formatting));
+  }
+  if (Array.isArray(value)) return value.map((item) => formatValue(name, item, formatting));
+  if (isJsonObject(value)) return formatObject(value, `${name}.`, formatting);
+  return value;
 }
 
 /** Where the query matches, in bytes of UTF-8; `indices` say which element of a list. */

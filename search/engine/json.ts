@@ -7,6 +7,20 @@ export function isJsonObject(value: unknown): value is JsonObject {
   return typeof value === 'object' && value !== null && !Array.isArray(value);
 }
 
+/** Sets a member by any name; `__proto__`, too, is a name like others in JSON. */
+export function setMember(target: JsonObject, name: string, value: Json): void {
+  if (name === '__proto__') {
+    Object.defineProperty(target, name, {
+      value,
+      enumerable: true,
+      configurable: true,
+      writable: true,
+    });
+  } else {
+    target[name] = value;
+  }
+}
+
 export function isStringArray(value: unknown): value is string[] {
   return Array.isArray(value) && value.every((item) => typeof item === 'string');
 }

@@ -94,6 +94,19 @@ export function keySecret(masterKey: string, uid: string): string {
   return createHmac('sha256', masterKey).update(uid).digest('hex');
 }
 
+/** Digests of secrets already derived, by master key and uid; only as many as there were keys. */
+const digests = new Map<string, string>();
+
+function digestOfKey(masterKey: string, uid: string): string {
+  const name = `${uid} ${masterKey}`;
+  let known = digests.get(name);
+  if (known === undefined) {
+    known = digest(keySecret(masterKey, uid));
+    digests.set(name, known);
+  }
+  return known;
+}
+
 function digest(secret: string): string {
   return createHash('sha256').update(secret).digest('hex');
 }
@@ -122,7 +135,7 @@ export function identify(
   const offered = digest(secret);
   if (offered === digest(masterKey)) return { master: true, key: null };
   for (const key of keys) {
-    if (digest(keySecret(masterKey, key.uid)) === offered) {
+    if (digestOfKey(masterKey, key.uid) === offered) {
       if (key.expiresAt !== null && Date.parse(key.expiresAt) <= Date.now()) throw invalidApiKey();
       return { master: false, key };
     }

@@ -1,5 +1,5 @@
 import type { StoredIndex } from './engine-state.ts';
-import { selectByNames } from './attribute-selection.ts';
+import { createSelector } from './attribute-selection.ts';
 import type { Engine } from './engine.ts';
 import { EngineError } from './errors.ts';
 import { compileFilter } from './filter-compile.ts';
@@ -112,7 +112,7 @@ function fetchDocuments(engine: Engine, stored: StoredIndex, body: JsonObject): 
   if (index === undefined) return { results: [], offset: 0, limit: 20, total: 0 };
   const offset = readCount(body['offset'], 'offset', 'invalid_document_offset') ?? 0;
   const limit = readCount(body['limit'], 'limit', 'invalid_document_limit') ?? 20;
-  const fields = readNames(body['fields'], 'fields') ?? ['*'];
+  const select = createSelector(readNames(body['fields'], 'fields') ?? ['*']);
   const sort = parseSort(readNames(body['sort'], 'sort') ?? [], index, 'invalid_document_sort');
   const ids = readIds(body['ids']);
   const target = filterTarget(index.settings, stored.uid, 'invalid_document_filter');
@@ -138,7 +138,7 @@ function fetchDocuments(engine: Engine, stored: StoredIndex, body: JsonObject): 
   return {
     results: numbers
       .slice(offset, offset + limit)
-      .map((number) => selectByNames(index.documents[number]?.source ?? {}, fields)),
+      .map((number) => select(index.documents[number]?.source ?? {})),
     offset,
     limit,
     total: numbers.length,
@@ -233,7 +233,7 @@ export const documentRoutes: readonly Route[] = [
         throw new EngineError('document_not_found', `Document \`${id}\` not found.`);
       }
       const fields = readNames(query.get('fields'), 'fields') ?? ['*'];
-      return { status: 200, body: selectByNames(document, fields) };
+      return { status: 200, body: createSelector(fields)(document) };
     },
   },
   {

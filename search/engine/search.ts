@@ -4,7 +4,7 @@ import { distributeFacets, facetAttributes } from './facets.ts';
 import { compileFilter } from './filter-compile.ts';
 import { evaluateFilter } from './filter-evaluate.ts';
 import { filterTarget } from './filter-target.ts';
-import { formatHit } from './format-hit.ts';
+import { createHitFormatter } from './format-hit.ts';
 import type { Json, JsonObject } from './json.ts';
 import { findDocuments, type Found, type SearchScope } from './find-documents.ts';
 import { liveDocuments } from './live-documents.ts';
@@ -44,12 +44,11 @@ export function search(index: SearchIndex, indexUid: string, request: SearchRequ
     total = matches.length;
   }
 
-  const matcher = createTextMatcher(found.graph, index.tokenise, (word) =>
-    index.vocabulary.numberOf.has(word),
+  const format = createHitFormatter(request, index.settings.displayedAttributes, () =>
+    createTextMatcher(found.graph, index.tokenise, (word) => index.vocabulary.numberOf.has(word)),
   );
   const hits = matches.slice(paging.start, paging.end).map((match): JsonObject => {
-    const source = index.documents[match.document]?.source ?? {};
-    const hit = formatHit(source, request, index.settings.displayedAttributes, matcher);
+    const hit = format(index.documents[match.document]?.source ?? {});
     if (request.showRankingScore) hit['_rankingScore'] = score(match).score;
     if (request.showRankingScoreDetails) hit['_rankingScoreDetails'] = score(match).details;
     return hit;

@@ -68,6 +68,13 @@ const keyOf = (rule: ThrottleRule, subject: string): string =>
  */
 export async function takeTry(db: Knex, rule: ThrottleRule, subject: string): Promise<void> {
   const key = keyOf(rule, subject);
+  // The usual case in one statement: a window is open and there is room in it.
+  const counted = await db('throttles')
+    .where({ key_hash: key })
+    .where('count', '<', rule.limit)
+    .where('window_ends_at', '>', db.raw('NOW(3)'))
+    .increment('count', 1);
+  if (counted > 0) return;
   const waitSeconds = await inTransaction(db, async (trx) => {
     await trx.raw(
       `INSERT INTO throttles (key_hash, count, window_ends_at) VALUES (?, 0, NOW(3))

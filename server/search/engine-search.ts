@@ -12,17 +12,29 @@ import {
   type TierRequest,
 } from '#shared/question/search-request.ts';
 import type { Config } from '../config.ts';
-import { HIT_BEGINS, HIT_ENDS } from './passage.ts';
 import { searchingClient } from './search-client.ts';
 
 /** Hits asked for per query: pages are made from the joined list. */
 const MOST_PER_QUERY = 200;
-const PASSAGE_WORDS = 28;
+
+/** What putting hits in order needs to know; what is shown of a page's few is asked for after. */
+const FIELDS_TO_ORDER_BY = [
+  'noteId',
+  'outcome',
+  'stallC',
+  'sagC',
+  'peakC',
+  'firedOn',
+  'publishedAt',
+] as const satisfies (keyof NoteDocument)[];
+type Ordered = Pick<NoteDocument, (typeof FIELDS_TO_ORDER_BY)[number]>;
 
 export interface EngineHit extends OrderableHit {
   readonly tier: Tier;
-  readonly document: NoteDocument;
-  readonly marked: string | undefined;
+  readonly document: Ordered;
+  /** The words it was found by; empty where the filter alone found it. */
+  readonly q: string;
+  readonly strategy: TierRequest['strategy'];
 }
 export interface EngineAnswer {
   readonly hits: EngineHit[];
@@ -50,7 +62,7 @@ function facetFilter(chosen: ChosenFacets, without?: FindFacet): Filter | null {
 }
 
 /** Where the temperature asked about stands in a note, for nearness. */
-function levelsFor(reading: QuestionReading, document: NoteDocument): number[] {
+function levelsFor(reading: QuestionReading, document: Ordered): number[] {
   const levels = [
     ...(reading.trouble.includes('stall') ? document.stallC : []),
     ...(reading.trouble.includes('sag') ? document.sagC : []),
@@ -59,27 +71,26 @@ function levelsFor(reading: QuestionReading, document: NoteDocument): number[] {
   return document.peakC === null ? [] : [document.peakC];
 }
 
-interface Asked {
-  readonly tier: Tier;
+interface Asked extends Pick<EngineHit, 'tier' | 'q' | 'strategy'> {
   readonly foundBy: number;
   readonly query: MultiSearchQuery;
 }
 
 function queriesOf(request: TierRequest | null, ticked: Filter | null): Asked[] {
   if (!request) return [];
+  const { tier, strategy } = request;
   return request.texts.map((q, foundBy) => ({
-    tier: request.tier,
+    tier,
+    q,
+    strategy,
     foundBy,
     query: {
       indexUid: NOTES_INDEX,
       q,
       filter: filterText(bothFilters(request.filter, ticked)),
-      matchingStrategy: request.strategy,
+      matchingStrategy: strategy,
       limit: MOST_PER_QUERY,
-      attributesToHighlight: ['title', 'story'],
-      attributesToCrop: [`story:${String(PASSAGE_WORDS)}`],
-      highlightPreTag: HIT_BEGINS,
-      highlightPostTag: HIT_ENDS,
+      attributesToRetrieve: [...FIELDS_TO_ORDER_BY],
     },
   }));
 }
@@ -124,22 +135,20 @@ export async function searchEngine(
       query: countQuery([facet], facet),
     })),
   ];
-  const { results } = await client.multiSearch<{ queries: MultiSearchQuery[] }, NoteDocument>({
+  const { results } = await client.multiSearch<{ queries: MultiSearchQuery[] }, Ordered>({
     queries: [...asked.map((each) => each.query), ...counts.map((each) => each.query)],
   });
-  const hits = asked.flatMap(({ tier, foundBy }, index) =>
-    (results[index]?.hits ?? []).map((hit): EngineHit => {
-      const { _formatted, ...document } = hit;
-      return {
-        tier,
-        foundBy,
-        document,
-        marked: typeof _formatted?.story === 'string' ? _formatted.story : undefined,
-        outcome: document.outcome,
-        levelsC: levelsFor(reading, document),
-        firedOn: document.firedOn,
-      };
-    }),
+  const hits = asked.flatMap(({ tier, foundBy, q, strategy }, index) =>
+    (results[index]?.hits ?? []).map((document): EngineHit => ({
+      tier,
+      foundBy,
+      q,
+      strategy,
+      document,
+      outcome: document.outcome,
+      levelsC: levelsFor(reading, document),
+      firedOn: document.firedOn,
+    })),
   );
   const facets: EngineAnswer['facets'] = {};
   counts.forEach((count, index) => {

@@ -14,6 +14,7 @@ import { publishedRows } from '../notes/published-repository.ts';
 import { chosenFacets, countClose, searchEngine, type EngineHit } from './engine-search.ts';
 import { hitWords, passageOf } from './passage.ts';
 import { plainSearch } from './plain-search.ts';
+import { readShownHits, type ShownHit } from './shown-hits.ts';
 
 const A_PAGE = 20;
 const TIERS: readonly Tier[] = ['close', 'same-trouble', 'by-words'];
@@ -78,29 +79,28 @@ export async function find(
   const ordered = inOrder(answer.hits, asked, query.sort);
   const shown = ordered.slice((query.page - 1) * A_PAGE, query.page * A_PAGE);
   // Only what is published now is shown, whatever the index still holds.
-  const rows = new Map(
-    (
-      await publishedRows(
-        db,
-        shown.map((hit) => hit.document.noteId),
-      )
-    ).map((row) => [row.id, row]),
-  );
+  const [published, details] = await Promise.all([
+    publishedRows(
+      db,
+      shown.map((hit) => hit.document.noteId),
+    ),
+    readShownHits(deps.config, shown).catch((error: unknown) => {
+      deps.log.warn({ err: error }, 'the engine is away: hits without passages');
+      return new Map<number, ShownHit>();
+    }),
+  ]);
+  const rows = new Map(published.map((row) => [row.id, row]));
   const hits = shown.flatMap((hit): Hit[] => {
     const note = rows.get(hit.document.noteId);
     if (!note) return [];
-    const passage = passageOf(hit.marked);
-    return [
-      {
-        note,
-        tier: hit.tier,
-        why:
-          query.q.trim() === ''
-            ? ''
-            : whyFound(asked, hit.document, hit.tier, units, hitWords(passage)),
-        passage,
-      },
-    ];
+    // A note changed this very moment may be missing here: it is shown without the reason.
+    const told = details.get(note.id);
+    const passage = passageOf(told?.marked);
+    const why =
+      told === undefined || query.q.trim() === ''
+        ? ''
+        : whyFound(asked, told.found, hit.tier, units, hitWords(passage));
+    return [{ note, tier: hit.tier, why, passage }];
   });
   return {
     parts,
