@@ -1,5 +1,5 @@
 import { describe, expect, vi } from 'vitest';
-import { deskNoteSchema } from '#shared/api/desk.ts';
+import { DESK_QUESTIONS, deskNoteSchema } from '#shared/api/desk.ts';
 import type { NoteStatus } from '#shared/vocabulary/statuses.ts';
 import { test, type Api } from '../support/api.ts';
 import { addKiln, completeFields, handIn, ifMatch, startNote } from '../support/notes.ts';
@@ -53,7 +53,7 @@ describe('two at once', () => {
         decision: kind,
         revisionId,
         reason: 'Because.',
-        checklist: [],
+        checklist: DESK_QUESTIONS,
       });
     const seen = new Set<string>();
     for (let round = 0; round < 20; round += 1) {
@@ -94,7 +94,7 @@ describe('two at once', () => {
             decision: 'publish',
             revisionId,
             reason: '',
-            checklist: [],
+            checklist: DESK_QUESTIONS,
           }),
       ];
       if (round % 2 === 0) acts.reverse();
@@ -208,7 +208,7 @@ describe('the table of what may follow what', () => {
             decision: name,
             revisionId,
             reason: 'Because.',
-            checklist: [],
+            checklist: DESK_QUESTIONS,
           });
       }
     };

@@ -1,5 +1,5 @@
 import { describe, expect, vi } from 'vitest';
-import { deskNoteSchema, deskQueueSchema } from '#shared/api/desk.ts';
+import { DESK_QUESTIONS, deskNoteSchema, deskQueueSchema } from '#shared/api/desk.ts';
 import { draftSchema, notePageSchema } from '#shared/api/notes.ts';
 import { kilnPageSchema } from '#shared/api/kilns.ts';
 import { test, type Api, type Client } from '../support/api.ts';
@@ -20,7 +20,7 @@ const decision = (revisionId: number, traits: object = {}) => ({
   decision: 'publish',
   revisionId,
   reason: '',
-  checklist: [],
+  checklist: DESK_QUESTIONS,
   ...traits,
 });
 
@@ -146,6 +146,48 @@ describe('a decision', () => {
     expect((await ada.delete(`${path}/remarks/${String(back.remarks[0]?.id ?? 0)}`)).status).toBe(
       409,
     );
+  });
+
+  test('to publish needs every question of the checklist, whatever asks for it', async ({
+    api,
+  }) => {
+    const { author, ada, id, path } = await waitingNote(api);
+    const { revisionId } = await claim(ada, id);
+    const crossed = {
+      some: DESK_QUESTIONS.slice(1),
+      none: [],
+      oneFiveTimes: Array(5).fill('kind'),
+    };
+    for (const [which, checklist] of Object.entries(crossed)) {
+      const answer = await ada.post(`${path}/decision`, decision(revisionId, { checklist }));
+      expect([which, answer.status, answer.problem.code]).toEqual([which, 422, 'bad-input']);
+      expect(answer.problem.errors).toEqual([
+        {
+          pointer: '/checklist',
+          detail: 'Cross every question of the checklist to publish.',
+        },
+      ]);
+    }
+    const unasked = { decision: 'publish', revisionId, reason: '' };
+    expect((await ada.post(`${path}/decision`, unasked)).problem.errors?.[0]?.pointer).toBe(
+      '/checklist',
+    );
+    expect((await claim(ada, id)).status).toBe('on-the-desk');
+    // What was asked is kept with the decision.
+    expect((await ada.post(`${path}/decision`, decision(revisionId))).status).toBe(200);
+    const kept = await api.db('audit_log').where({ act: 'published' }).select('after_value');
+    expect(JSON.stringify(kept)).toContain('theirs');
+    // To send back or to decline asks for a reason, and for nothing to be crossed.
+    expect((await author.post(`/api/notes/${String(id)}/revise`)).status).toBe(200);
+    const draft = (await author.get(`/api/notes/${String(id)}/draft`)).as(draftSchema);
+    await handIn(author, draft, draft.fields);
+    const again = await claim(ada, id);
+    const back = decision(again.revisionId, {
+      decision: 'send-back',
+      reason: 'Almost.',
+      checklist: [],
+    });
+    expect((await ada.post(`${path}/decision`, back)).status).toBe(200);
   });
 
   test('is made on the revision that was read, never on a newer one', async ({ api }) => {

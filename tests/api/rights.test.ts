@@ -1,4 +1,5 @@
 import { describe, expect } from 'vitest';
+import { DESK_QUESTIONS } from '#shared/api/desk.ts';
 import { ROUTES } from '../../server/routes.ts';
 import type { Access } from '../../server/http/define-route.ts';
 import { test, type Api, type Client } from '../support/api.ts';
@@ -228,7 +229,12 @@ describe('rights on one thing', () => {
     api,
   }) => {
     const { owner, moderator, draft } = await twoMembers(api);
-    const decision = { decision: 'publish', revisionId: 1, reason: '', checklist: [] };
+    const decision = {
+      decision: 'publish',
+      revisionId: 1,
+      reason: '',
+      checklist: DESK_QUESTIONS,
+    };
     const path = `/api/desk/notes/${String(draft.id)}/decision`;
     expect((await moderator.post(path, decision)).status).toBe(404);
     expect((await owner.post(path, decision)).status).toBe(403);

@@ -1,4 +1,5 @@
 import { describe, expect, vi } from 'vitest';
+import { DESK_QUESTIONS } from '#shared/api/desk.ts';
 import { draftSchema } from '#shared/api/notes.ts';
 import type { KilnFields } from '#shared/note/kiln-fields.ts';
 import { ROUTES } from '../../server/routes.ts';
@@ -185,7 +186,7 @@ describe('a value of the wrong type', () => {
       [
         moderator,
         `${desk}/decision`,
-        { decision: 'publish', revisionId: 1, reason: '', checklist: [] },
+        { decision: 'publish', revisionId: 1, reason: '', checklist: DESK_QUESTIONS },
       ],
       [moderator, `/api/notes/${String(draft.id)}/take-down`, { reason: 'x' }],
       [api.client(), '/api/password-resets', { email: 'a@example.org' }],

@@ -2,7 +2,7 @@ import { emptyNoteFields, type NoteFields } from '#shared/note/note-fields.ts';
 import { kilnFieldsSchema, type KilnFields } from '#shared/note/kiln-fields.ts';
 import { draftSchema, type Draft } from '#shared/api/notes.ts';
 import { kilnSchema, type Kiln } from '#shared/api/kilns.ts';
-import { deskNoteSchema } from '#shared/api/desk.ts';
+import { DESK_QUESTIONS, deskNoteSchema } from '#shared/api/desk.ts';
 import type { Client } from './api.ts';
 
 /** A small round fibre kiln on propane. */
@@ -213,7 +213,7 @@ export async function decideOn(
     decision,
     revisionId: desk.revisionId,
     reason,
-    checklist: [],
+    checklist: decision === 'publish' ? DESK_QUESTIONS : [],
   });
   if (answer.status !== 200) throw new Error(answer.text);
 }

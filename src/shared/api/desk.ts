@@ -42,6 +42,8 @@ export const DESK_CHECKLIST = {
   safe: 'Nothing in it leads a reader into danger without a caution.',
   theirs: 'Words and pictures look like the author’s own.',
 } as const;
+export type DeskQuestion = keyof typeof DESK_CHECKLIST;
+export const DESK_QUESTIONS = Object.keys(DESK_CHECKLIST) as [DeskQuestion, ...DeskQuestion[]];
 
 /** A note at the desk: the revision handed in, as a page, with everything the decision needs. */
 export const deskNoteSchema = z.object({
@@ -77,13 +79,20 @@ export const remarkBodySchema = z.strictObject({
   pointer: z.string().max(120),
   text: text(1000).refine((value) => value.trim() !== '', 'Write the remark first.'),
 });
-export const decisionBodySchema = z.strictObject({
-  decision: z.enum(['publish', 'send-back', 'decline']),
-  /** The revision that was read: a decision on another one is refused (409). */
-  revisionId: z.number().int().positive(),
-  reason: text(2000),
-  checklist: z.array(z.enum(Object.keys(DESK_CHECKLIST) as [keyof typeof DESK_CHECKLIST])).max(5),
-});
+export const decisionBodySchema = z
+  .strictObject({
+    decision: z.enum(['publish', 'send-back', 'decline']),
+    /** The revision that was read: a decision on another one is refused (409). */
+    revisionId: z.number().int().positive(),
+    reason: text(2000),
+    /** What was asked and found so. To publish, every question must have been. */
+    checklist: z.array(z.enum(DESK_QUESTIONS)).max(DESK_QUESTIONS.length),
+  })
+  .refine(
+    ({ decision, checklist }) =>
+      decision !== 'publish' || DESK_QUESTIONS.every((question) => checklist.includes(question)),
+    { path: ['checklist'], message: 'Cross every question of the checklist to publish.' },
+  );
 export const takeDownBodySchema = z.strictObject({
   reason: text(2000).refine((value) => value.trim() !== '', 'Say why.'),
 });
