@@ -16,11 +16,33 @@ CREATE TABLE `audit_log` (
   KEY `audit_log_actor_index` (`actor_id`,`id`)
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
+CREATE TABLE `finding_disputes` (
+  `id` bigint(20) unsigned NOT NULL AUTO_INCREMENT,
+  `note_id` bigint(20) unsigned NOT NULL,
+  `code` varchar(24) CHARACTER SET ascii COLLATE ascii_bin NOT NULL,
+  `minute` double NOT NULL,
+  `sentence` varchar(300) NOT NULL,
+  `state` varchar(12) CHARACTER SET ascii COLLATE ascii_bin NOT NULL DEFAULT 'disputed',
+  `version` int(10) unsigned NOT NULL DEFAULT 1,
+  `said_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
+  `answer` varchar(300) NOT NULL DEFAULT '',
+  `answered_by` bigint(20) unsigned DEFAULT NULL,
+  `answered_at` datetime(3) DEFAULT NULL,
+  PRIMARY KEY (`id`),
+  UNIQUE KEY `finding_disputes_finding_unique` (`note_id`,`code`,`minute`),
+  KEY `finding_disputes_state_index` (`state`,`said_at`),
+  KEY `finding_disputes_answered_by_foreign` (`answered_by`),
+  CONSTRAINT `finding_disputes_answered_by_foreign` FOREIGN KEY (`answered_by`) REFERENCES `members` (`id`) ON DELETE SET NULL,
+  CONSTRAINT `finding_disputes_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `notes` (`id`) ON DELETE CASCADE,
+  CONSTRAINT `finding_disputes_state_check` CHECK (`state` in ('disputed','left','restored','withdrawn'))
+) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
+
 CREATE TABLE `firing_troubles` (
   `note_id` bigint(20) unsigned NOT NULL,
   `trouble` varchar(24) CHARACTER SET ascii COLLATE ascii_bin NOT NULL,
   `measured` tinyint(1) NOT NULL,
   `named` tinyint(1) NOT NULL,
+  `disputed` tinyint(1) NOT NULL DEFAULT 0,
   PRIMARY KEY (`note_id`,`trouble`),
   KEY `firing_troubles_trouble_index` (`trouble`,`note_id`),
   CONSTRAINT `firing_troubles_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `published_firings` (`note_id`) ON DELETE CASCADE

@@ -3,6 +3,7 @@ import { sessionRoutes } from './accounts/session-routes.ts';
 import { memberRoutes } from './accounts/member-routes.ts';
 import { adminRoutes } from './admin/admin-routes.ts';
 import { deskRoutes } from './desk/desk-routes.ts';
+import { disputeRoutes } from './disputes/dispute-routes.ts';
 import { figureRoutes } from './figures/figure-routes.ts';
 import type { Route } from './http/define-route.ts';
 import { reportRoutes } from './http/report-routes.ts';
@@ -25,6 +26,7 @@ export const ROUTES: readonly Route[] = [
   ...recordRoutes,
   ...pictureRoutes,
   ...deskRoutes,
+  ...disputeRoutes,
   ...searchRoutes,
   ...figureRoutes,
   ...adminRoutes,

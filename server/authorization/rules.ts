@@ -30,6 +30,8 @@ export type NoteAction =
   | 'claim'
   | 'decide'
   | 'take-down'
+  | 'dispute'
+  | 'answer-dispute'
   | 'try-it';
 export type KilnAction = 'read' | 'read-loans' | 'edit' | 'lend' | 'remove' | 'fire';
 export type SiteAction = 'write' | 'moderate' | 'administer';
@@ -94,7 +96,10 @@ export function canOnNote(actor: Actor, action: NoteAction, note: NoteSubject): 
         !note.claimLapsed
       );
     case 'take-down':
+    case 'answer-dispute':
       return isStaff(actor) && !own && note.hasPublished;
+    case 'dispute':
+      return own && note.hasPublished;
     case 'try-it':
       return isMember(actor) && note.hasPublished;
   }
@@ -129,6 +134,7 @@ export function noteAbilities(actor: Actor, note: NoteSubject) {
     remove: may('remove'),
     claim: may('claim'),
     takeDown: may('take-down'),
+    dispute: may('dispute'),
     tryIt: may('try-it'),
   };
 }

@@ -6,6 +6,7 @@ import { addToAuditLog } from '../audit/audit-log.ts';
 import type { SignedIn } from '../authorization/actor.ts';
 import { canOnNote, isWaiting } from '../authorization/rules.ts';
 import { inTransaction } from '../database/transaction.ts';
+import { takeOverDisputes } from '../disputes/take-over-disputes.ts';
 import { AppError } from '../http/problem.ts';
 import { lockNote, moveNote, type NoteChange, type NoteRecord } from '../notes/note-repository.ts';
 import { noteSubject } from '../notes/note-subject.ts';
@@ -197,8 +198,9 @@ function changeFor(trx: Knex, decision: Decision['decision'], note: HandedIn): N
 
 /** What follows from publishing: the projection, and word to whoever's change was tried. */
 async function published(trx: Knex, note: HandedIn): Promise<void> {
-  await projectNote(trx, note.id);
   const revision = await findRevision(trx, note.handedInRevisionId);
+  if (revision) await takeOverDisputes(trx, revision, note.authorId);
+  await projectNote(trx, note.id);
   const triedNoteId = revision?.fields.triedNoteId ?? null;
   if (triedNoteId === null || note.publishedAt !== null) return;
   const tried = await trx('published_firings')

@@ -9,7 +9,13 @@ export interface Difference {
 }
 
 /** Shown apart or of no interest to a moderator. */
-const LEFT_OUT = new Set(['story', 'checkAnswers', 'cautionsRead', 'changesNotMeant']);
+const LEFT_OUT = new Set([
+  'story',
+  'checkAnswers',
+  'cautionsRead',
+  'changesNotMeant',
+  'findingDisputes',
+]);
 const MOST = 200;
 
 type Leaves = Map<string, string>;

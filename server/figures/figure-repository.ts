@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import type { FiringFacts } from '#shared/note/facts.ts';
+import type { CountedFacts } from '#shared/note/counted-facts.ts';
 import type { Trouble } from '#shared/vocabulary/troubles.ts';
 import { dayOf } from '../database/day.ts';
 import { readJson } from '../database/read-json.ts';
@@ -42,7 +42,7 @@ export async function firingsAround(db: Knex, trouble: Trouble): Promise<Publish
       'published_firings.facts',
     );
   return rows.map((row) => ({
-    ...(readJson(row.facts) as FiringFacts),
+    ...(readJson(row.facts) as CountedFacts),
     noteId: row.note_id,
     kilnId: row.kiln_id,
     memberId: row.author_id ?? unknownMember(row.note_id),
@@ -50,14 +50,20 @@ export async function firingsAround(db: Knex, trouble: Trouble): Promise<Publish
   }));
 }
 
-/** How many published notes had each trouble, measured or named. */
-export async function troubleCounts(db: Knex): Promise<{ trouble: Trouble; notes: number }[]> {
+/**
+ * How many published notes had each trouble, measured or named; those whose finding of it is disputed
+ * are counted apart.
+ */
+export async function troubleCounts(
+  db: Knex,
+): Promise<{ trouble: Trouble; notes: number; disputed: number }[]> {
   return db('firing_troubles')
     .groupBy('firing_troubles.trouble')
     .orderBy([{ column: 'notes', order: 'desc' }, { column: 'firing_troubles.trouble' }])
-    .select<{ trouble: Trouble; notes: number }[]>(
+    .select<{ trouble: Trouble; notes: number; disputed: number }[]>(
       'firing_troubles.trouble',
-      db.raw('COUNT(*) AS notes'),
+      db.raw('CAST(SUM(NOT firing_troubles.disputed) AS SIGNED) AS notes'),
+      db.raw('CAST(SUM(firing_troubles.disputed) AS SIGNED) AS disputed'),
     );
 }
 
@@ -70,5 +76,14 @@ export async function figuresVersion(db: Knex): Promise<string> {
       db.raw('MAX(published_firings.published_at) AS last'),
     )
     .first();
-  return `${String(row?.n ?? 0)}:${String(row?.latest ?? 0)}:${row?.last?.toISOString() ?? ''}`;
+  // Disputes keep their rows, and each change raises a version: their sum never repeats.
+  const disputes = await db('finding_disputes').sum<{ versions: number | null }[]>(
+    'finding_disputes.version as versions',
+  );
+  return [
+    row?.n ?? 0,
+    row?.latest ?? 0,
+    row?.last?.toISOString() ?? '',
+    disputes[0]?.versions ?? 0,
+  ].join(':');
 }

@@ -49,6 +49,7 @@ export async function readWhatHelped(db: Knex, trouble: Trouble): Promise<WhatHe
       caution: row.caution,
       noteIds: [...row.noteIds],
     })),
+    disputed: firings.filter(({ disputed }) => disputed?.includes(trouble)).length,
     notes: Object.fromEntries(
       rows.map((row) => [row.id, { id: row.id, slug: row.slug, title: row.title }]),
     ),

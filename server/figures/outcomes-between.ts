@@ -1,9 +1,8 @@
-import type { FiringFacts } from '#shared/note/facts.ts';
 import { TROUBLE_IDS } from '#shared/vocabulary/troubles.ts';
 import type { Trouble } from '#shared/vocabulary/troubles.ts';
 import { compareFirings } from './comparison.ts';
 import type { Outcome } from './comparison.ts';
-import { sourceOf } from './pairs.ts';
+import { sourceOf, type DisputableFacts } from './pairs.ts';
 
 export interface TroubleOutcome {
   readonly trouble: Trouble;
@@ -12,9 +11,10 @@ export interface TroubleOutcome {
 
 /**
  * For each trouble of a firing, whether it was gone in the kiln's next one. It cannot be said where
- * the two do not compare: another start, firings in between not written up, or other ware.
+ * the two do not compare: another start, firings in between not written up, or other ware; and of a
+ * finding that is disputed.
  */
-export function outcomesBetween(before: FiringFacts, now: FiringFacts): TroubleOutcome[] {
+export function outcomesBetween(before: DisputableFacts, now: DisputableFacts): TroubleOutcome[] {
   const alike =
     before.startClass !== null &&
     before.startClass === now.startClass &&
@@ -22,6 +22,7 @@ export function outcomesBetween(before: FiringFacts, now: FiringFacts): TroubleO
   const had = new Set<Trouble>([...before.measuredTroubles, ...before.namedTroubles]);
   return TROUBLE_IDS.filter((trouble) => had.has(trouble)).map((trouble) => {
     const source = sourceOf(trouble, before);
+    if (now.disputed?.includes(trouble)) return { trouble, outcome: 'cannot-say' };
     if (!alike || source === null) return { trouble, outcome: 'cannot-say' };
     const comparison = compareFirings(trouble, source, before, now);
     return { trouble, outcome: comparison.comparable ? comparison.outcome : 'cannot-say' };

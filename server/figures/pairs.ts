@@ -6,15 +6,22 @@ import type { Trouble } from '#shared/vocabulary/troubles.ts';
 import { compareFirings } from './comparison.ts';
 import type { Outcome, Source } from './comparison.ts';
 
+/** Facts of a firing with what is disputed of them. */
+export interface DisputableFacts extends FiringFacts {
+  /**
+   * Troubles whose every finding is disputed: they leave every headline number at once. Facts kept
+   * before there were disputes say nothing of them.
+   */
+  readonly disputed?: readonly Trouble[];
+}
+
 /** A published firing as the figures read it. */
-export interface PublishedFiring extends FiringFacts {
+export interface PublishedFiring extends DisputableFacts {
   readonly noteId: number;
   readonly kilnId: number;
   readonly memberId: number;
   /** Firings of one kiln within one season tell one story, and count once. */
   readonly season: string;
-  /** Troubles whose finding somebody disputes: they leave every headline number at once. */
-  readonly disputed?: readonly Trouble[];
   /** The author confirmed, a week later, that nothing cracked since. */
   readonly cracksConfirmed?: boolean;
 }
@@ -62,9 +69,11 @@ const MEASURABLE: readonly string[] = MEASURED_TROUBLES;
 
 /**
  * How a firing is known to have had a trouble; null when it did not. Where there is a record, what
- * the author names of a trouble that a record shows is not evidence of its own.
+ * the author names of a trouble that a record shows is not evidence of its own. A disputed one was
+ * measured: it makes a pair, which is left out and counted as disputed.
  */
-export function sourceOf(trouble: Trouble, facts: FiringFacts): Source | null {
+export function sourceOf(trouble: Trouble, facts: DisputableFacts): Source | null {
+  if (facts.disputed?.includes(trouble)) return 'measured';
   if (facts.measuredTroubles.some((found) => found === trouble)) return 'measured';
   if (!facts.namedTroubles.includes(trouble)) return null;
   return MEASURABLE.includes(trouble) && facts.hasRecord ? null : 'named';
@@ -112,10 +121,10 @@ function pairOf(
     provisional: false,
     countsFor: [],
   };
-  if (!now) return { ...pair, leftOut: 'no-follow-on' };
-  if ([before, now].some(({ disputed }) => disputed?.includes(trouble))) {
+  if ([before, now].some((firing) => firing?.disputed?.includes(trouble))) {
     return { ...pair, leftOut: 'disputed' };
   }
+  if (!now) return { ...pair, leftOut: 'no-follow-on' };
   if (before.startClass === null || before.startClass !== now.startClass) {
     return { ...pair, leftOut: 'other-start' };
   }

@@ -8,6 +8,7 @@ import {
 import { makeMailToken } from '../accounts/mail-tokens.ts';
 import type { Deps } from '../deps.ts';
 import type { MailJob } from '../outbox/outbox.ts';
+import { disputeLetter } from './dispute-letter.ts';
 import type { Letter } from './letter.ts';
 import type { Mail } from './mailer.ts';
 import { alreadyJoinedMail } from './messages/already-joined.ts';
@@ -55,6 +56,7 @@ function wants(member: Account, job: MailJob): boolean {
     case 'note-sent-back':
     case 'note-declined':
     case 'note-taken-down':
+    case 'dispute-answered':
       return mails.decisions && !member.suspended && member.emailVerified;
     case 'note-tried':
       return mails.triedIt && !member.suspended && member.emailVerified;
@@ -112,6 +114,13 @@ async function writeLetter(
       if (own === null || follow === null) return null;
       const followLink = link(paths.note(job.byNoteId, ''));
       return noteTriedMail(name, { title: own }, { title: follow, link: followLink });
+    }
+    case 'dispute-answered': {
+      const title = await findNoteTitle(db, job.noteId);
+      if (title === null) return null;
+      const to = { name, units: member.settings };
+      const note = { title, link: link(paths.note(job.noteId, '')) };
+      return disputeLetter(db, job.disputeId, to, note);
     }
     case 'note-handed-in':
     case 'note-published':

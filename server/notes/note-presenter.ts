@@ -2,10 +2,13 @@ import type { Knex } from 'knex';
 import { pictureSchema, type Picture } from '#shared/api/pictures.ts';
 import type { Draft, NotePageData, Remark } from '#shared/api/notes.ts';
 import type { KilnFields } from '#shared/note/kiln-fields.ts';
+import { countedFacts } from '#shared/note/counted-facts.ts';
 import { noteSummary } from '#shared/note/note-summary.ts';
 import { insideVolumeLitres } from '#shared/note/kiln-fields.ts';
 import type { Actor } from '../authorization/actor.ts';
 import { noteAbilities } from '../authorization/rules.ts';
+import { disputesOfNote } from '../disputes/dispute-repository.ts';
+import { disputesWhenPublished, standingDisputes } from '../disputes/standing-disputes.ts';
 import { picturesByNames } from '../pictures/picture-repository.ts';
 import { picturesIn } from '#shared/note/story.ts';
 import { presentRecord } from '../records/record-presenter.ts';
@@ -35,7 +38,7 @@ export async function presentNotePage(
   actor: Actor,
   { note, revision, author, kiln }: NoteToShow,
 ): Promise<NotePageData> {
-  const { fields, facts } = revision;
+  const { fields } = revision;
   const readerId = actor.kind === 'member' && actor.id === note.authorId ? actor.id : null;
   const place = {
     noteId: note.id,
@@ -43,18 +46,28 @@ export async function presentNotePage(
     firedOn: fields.when.date ?? '9999-12-31',
     startTime: fields.when.startTime,
   };
-  const [pictures, earlier, next, ownRows, tried, triedBy] = await Promise.all([
+  const [pictures, earlier, next, ownRows, tried, triedBy, disputeRows] = await Promise.all([
     picturesByNames(db, note.id, picturesIn(fields.story)),
     neighbourOf(db, place, 'earlier', readerId),
     neighbourOf(db, place, 'next', readerId),
     publishedRows(db, [note.id]),
     fields.triedNoteId === null ? [] : publishedRows(db, [fields.triedNoteId]),
     rowsThatTried(db, note.id),
+    disputesOfNote(db, note.id),
   ]);
-  const { volumeLitres, ...row } = storedRow(revision, [
-    ...new Set([...facts.measuredTroubles, ...facts.namedTroubles]),
-  ]);
-  const { story: _story, checkAnswers: _answers, record, ...shown } = fields;
+  const disputes =
+    revision.id === note.publishedRevisionId
+      ? standingDisputes(revision.findings, disputeRows)
+      : disputesWhenPublished(revision, disputeRows);
+  const facts = countedFacts(revision.facts, revision.findings, disputes);
+  const { volumeLitres, ...row } = storedRow({ ...revision, facts });
+  const {
+    story: _story,
+    checkAnswers: _answers,
+    findingDisputes: _disputes,
+    record,
+    ...shown
+  } = fields;
   const volume = volumeLitres ?? insideVolumeLitres(kiln.fields);
   return {
     id: note.id,
@@ -80,6 +93,8 @@ export async function presentNotePage(
       followOn: ownRows[0]?.followOn ?? null,
     },
     findings: revision.findings,
+    disputes,
+    levelAnswers: record.levelAnswers,
     summary: noteSummary(fields, facts, earlier !== null),
     storyHtml: revision.storyHtml,
     pictures,

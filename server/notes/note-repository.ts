@@ -144,6 +144,16 @@ export async function saveDraft(
   return changed === 1;
 }
 
+/**
+ * Writes into the working copy, whoever is writing in it. The caller holds the row locked. The
+ * version goes up, so that a save under way in another tab is told.
+ */
+export async function rewriteDraft(trx: Knex, noteId: number, draft: NoteFields): Promise<void> {
+  await trx('notes')
+    .where({ id: noteId })
+    .update({ draft: JSON.stringify(draft), version: trx.raw('version + 1') });
+}
+
 /** Columns an act may set beside the status. */
 export interface NoteChange {
   handed_in_revision_id?: number | null;

@@ -3,15 +3,17 @@ import type { Knex } from 'knex';
 import type { FollowOn } from '#shared/api/note-rows.ts';
 import { storyTexts } from '#shared/note/story.ts';
 import type { Trouble } from '#shared/vocabulary/troubles.ts';
+import { countedRevision, type CountedRevision } from '../disputes/counted-revision.ts';
 import { outcomesBetween } from '../figures/outcomes-between.ts';
 import { enqueue } from '../outbox/outbox.ts';
 import { factsOfKiln, type StoredRow } from './published-repository.ts';
-import { findRevision, type Revision } from './revision-repository.ts';
+import { findRevision } from './revision-repository.ts';
 import { slugOf } from './slug.ts';
 
 /**
  * Keeps `published_firings` and `firing_troubles` in step with what is published, inside the
- * transaction that publishes, corrects or takes down, and promises the index its change.
+ * transaction that publishes, corrects, disputes or takes down, and promises the index its change.
+ * What is written is what counts: the facts without what the author disputes.
  */
 export async function projectNote(trx: Knex, noteId: number): Promise<void> {
   const note = await trx('notes').where('notes.id', noteId).first<
@@ -43,7 +45,8 @@ export async function projectNote(trx: Knex, noteId: number): Promise<void> {
 
   await trx('published_firings').where({ note_id: noteId }).delete();
   if (revision && note) {
-    await insertFiring(trx, revision, note.author_id, note.published_at ?? new Date());
+    const counted = await countedRevision(trx, revision);
+    await insertFiring(trx, counted, note.author_id, note.published_at ?? new Date());
   }
   for (const kilnId of kilnIds) await relinkKiln(trx, kilnId);
   await promiseIndex(trx, noteId);
@@ -55,14 +58,15 @@ async function promiseIndex(trx: Knex, noteId: number): Promise<void> {
 
 async function insertFiring(
   trx: Knex,
-  revision: Revision,
+  revision: CountedRevision,
   authorId: number | null,
   publishedAt: Date,
 ): Promise<void> {
   const { fields, facts } = revision;
   const measured = new Set<Trouble>(facts.measuredTroubles);
   const named = new Set<Trouble>(facts.namedTroubles);
-  const troubles = [...new Set([...measured, ...named])];
+  const disputed = new Set<Trouble>(facts.disputed);
+  const troubles = [...new Set([...measured, ...named, ...disputed])];
   await trx('published_firings').insert({
     note_id: revision.noteId,
     revision_id: revision.id,
@@ -74,7 +78,7 @@ async function insertFiring(
     slug: slugOf(fields.title),
     title: fields.title,
     facts: JSON.stringify(facts),
-    note_row: JSON.stringify(storedRow(revision, troubles)),
+    note_row: JSON.stringify(storedRow(revision)),
     story_text: storyTexts(fields.story)
       .map((part) => part.text)
       .join('\n'),
@@ -87,13 +91,16 @@ async function insertFiring(
         trouble,
         measured: measured.has(trouble),
         named: named.has(trouble),
+        disputed: disputed.has(trouble),
       })),
     );
   }
 }
 
 /** The row of a revision, without what is joined in when it is read. */
-export function storedRow(revision: Revision, troubles: readonly Trouble[]): StoredRow {
+export function storedRow(
+  revision: Pick<CountedRevision, 'noteId' | 'fields' | 'facts' | 'strip' | 'stripWords'>,
+): StoredRow {
   const { facts, fields } = revision;
   return {
     id: revision.noteId,
@@ -101,8 +108,9 @@ export function storedRow(revision: Revision, troubles: readonly Trouble[]): Sto
     title: fields.title,
     strip: revision.strip,
     stripWords: revision.stripWords,
-    troubles: [...troubles],
+    troubles: [...new Set<Trouble>([...facts.measuredTroubles, ...facts.namedTroubles])],
     measuredTroubles: [...facts.measuredTroubles],
+    disputedTroubles: [...facts.disputed],
     targetCelsius: fields.plan.targetCelsius,
     peakCelsius: facts.peakCelsius,
     timeToTemperatureMinutes: facts.timeToTemperatureMinutes,

@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import type { NoteRow } from '#shared/api/note-rows.ts';
-import type { FiringFacts } from '#shared/note/facts.ts';
+import type { CountedFacts } from '#shared/note/counted-facts.ts';
 import { dayOf } from '../database/day.ts';
 import { readJson } from '../database/read-json.ts';
 
@@ -116,7 +116,7 @@ export async function factsOfKiln(
   db: Knex,
   kilnId: number,
 ): Promise<
-  { noteId: number; title: string; firedOn: string; facts: FiringFacts; row: StoredRow }[]
+  { noteId: number; title: string; firedOn: string; facts: CountedFacts; row: StoredRow }[]
 > {
   const rows = await db('published_firings')
     .where('published_firings.kiln_id', kilnId)
@@ -138,7 +138,7 @@ export async function factsOfKiln(
     noteId: row.note_id,
     title: row.title,
     firedOn: dayOf(row.fired_on),
-    facts: readJson(row.facts) as FiringFacts,
+    facts: readJson(row.facts) as CountedFacts,
     row: readJson(row.note_row) as StoredRow,
   }));
 }

@@ -87,6 +87,22 @@ export async function findRevision(db: Knex, revisionId: number): Promise<Revisi
   return row ? toRevision(row) : null;
 }
 
+/** The findings of published revisions, by note. */
+export async function publishedFindings(
+  db: Knex,
+  noteIds: readonly number[],
+): Promise<Map<number, Finding[]>> {
+  if (noteIds.length === 0) return new Map();
+  const rows = await db('published_firings')
+    .join('note_revisions', 'note_revisions.id', 'published_firings.revision_id')
+    .whereIn('published_firings.note_id', [...noteIds])
+    .select<{ note_id: number; findings: unknown }[]>(
+      'published_firings.note_id',
+      'note_revisions.findings',
+    );
+  return new Map(rows.map((row) => [row.note_id, readJson(row.findings) as Finding[]]));
+}
+
 /** Whether the note has ever been handed in. */
 export async function wasHandedIn(db: Knex, noteId: number): Promise<boolean> {
   const row = await db('note_revisions')

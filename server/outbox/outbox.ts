@@ -24,6 +24,7 @@ export type MailJob =
   | { kind: 'note-sent-back'; memberId: number; noteId: number; auditReason: string }
   | { kind: 'note-declined'; memberId: number; noteId: number; auditReason: string }
   | { kind: 'note-taken-down'; memberId: number; noteId: number; auditReason: string }
+  | { kind: 'dispute-answered'; memberId: number; noteId: number; disputeId: number }
   | { kind: 'note-tried'; memberId: number; noteId: number; byNoteId: number }
   | { kind: 'note-handed-in'; memberId: number; noteId: number };
 export type OutboxTopic = keyof OutboxJobs;

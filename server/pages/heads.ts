@@ -8,6 +8,7 @@ import { AppError } from '../http/problem.ts';
 import { readKiln } from '../kilns/kiln-service.ts';
 import { publishedRows } from '../notes/published-repository.ts';
 import { findNote } from '../notes/note-repository.ts';
+import { countedRevision } from '../disputes/counted-revision.ts';
 import { findRevision } from '../notes/revision-repository.ts';
 import { noteInShort } from '../notes/note-in-short.ts';
 import type { PageHead } from './page-head.ts';
@@ -99,7 +100,7 @@ async function noteHead(db: Knex, noteId: number): Promise<PageHead | null> {
   if (!row || !note || note.publishedRevisionId === null) return null;
   const revision = await findRevision(db, note.publishedRevisionId);
   if (!revision) return null;
-  const description = noteInShort(revision).join(' ') || SITE;
+  const description = noteInShort(await countedRevision(db, revision)).join(' ') || SITE;
   const [picture] = picturesIn(revision.fields.story);
   const canonical = paths.note(row.id, row.slug);
   const image = picture === undefined ? null : picturePreviewUrl(picture);

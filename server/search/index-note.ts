@@ -2,6 +2,7 @@ import type { EnqueuedTaskPromise, Meilisearch } from 'meilisearch';
 import { NOTE_INDEX_SETTINGS } from '../../search/index-settings.ts';
 import { NOTES_INDEX, type NoteDocument } from '../../search/note-document.ts';
 import type { Deps } from '../deps.ts';
+import { countedRevision } from '../disputes/counted-revision.ts';
 import { publishedRows } from '../notes/published-repository.ts';
 import { findRevision } from '../notes/revision-repository.ts';
 import { noteDocumentOf } from './note-document-of.ts';
@@ -26,7 +27,7 @@ export async function currentDocument(deps: Deps, noteId: number): Promise<NoteD
     .where('published_firings.note_id', noteId)
     .first<{ revision_id: number } | undefined>('published_firings.revision_id');
   const revision = projected ? await findRevision(deps.db, projected.revision_id) : null;
-  return revision ? noteDocumentOf(row, revision) : null;
+  return revision ? noteDocumentOf(row, await countedRevision(deps.db, revision)) : null;
 }
 
 /** Settings are sent once in the life of this process; the engine skips what it already has. */

@@ -4,7 +4,7 @@ import type { GlazeAsked } from '#shared/question/reading-types.ts';
 import { storyTexts } from '#shared/note/story.ts';
 import { CAUSES } from '#shared/vocabulary/troubles.ts';
 import { TROUBLES } from '#shared/vocabulary/troubles.ts';
-import type { Revision } from '../notes/revision-repository.ts';
+import type { CountedRevision } from '../disputes/counted-revision.ts';
 import { noteInShort } from '../notes/note-in-short.ts';
 
 const MILLISECONDS_A_DAY = 86_400_000;
@@ -29,8 +29,11 @@ function outcomeOf(row: NoteRow, hasRecord: boolean): NoteDocument['outcome'] {
   return hasRecord ? 1 : 0;
 }
 
-/** A published note as the engine holds it, from the projection and its revision. */
-export function noteDocumentOf(row: NoteRow, revision: Revision): NoteDocument {
+/**
+ * A published note as the engine holds it, from the projection and its revision. A trouble that its
+ * author disputes is not sought or shown by: neither as a trouble, nor by its level, nor in short.
+ */
+export function noteDocumentOf(row: NoteRow, revision: CountedRevision): NoteDocument {
   const { facts, fields } = revision;
   const texts = storyTexts(fields.story);
   const glazes: GlazeAsked[] = [

@@ -14,7 +14,8 @@ export async function plainSearch(db: Knex, reading: QuestionReading): Promise<n
     .leftJoin('firing_troubles', (join) => {
       join
         .on('firing_troubles.note_id', 'published_firings.note_id')
-        .andOnVal('firing_troubles.trouble', trouble ?? '');
+        .andOnVal('firing_troubles.trouble', trouble ?? '')
+        .andOnVal('firing_troubles.disputed', false);
     })
     .orderByRaw(
       '(firing_troubles.trouble IS NOT NULL) DESC, MATCH (published_firings.title, published_firings.story_text) AGAINST (? IN NATURAL LANGUAGE MODE) DESC, published_firings.published_at DESC',

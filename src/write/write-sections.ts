@@ -4,7 +4,7 @@ export const WRITE_SECTIONS = [
   { id: 'kiln', title: 'Kiln', members: ['kilnId'] },
   { id: 'set-up', title: 'Set-up', members: ['setUp'] },
   { id: 'plan', title: 'Plan', members: ['plan'] },
-  { id: 'record', title: 'Record', members: ['record'] },
+  { id: 'record', title: 'Record', members: ['record', 'findingDisputes'] },
   { id: 'pieces', title: 'Pieces', members: ['pieces'] },
   { id: 'reduction', title: 'After the draw', members: ['reduction'] },
   { id: 'result', title: 'Result', members: ['result'] },

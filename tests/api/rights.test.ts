@@ -48,6 +48,8 @@ const RIGHTS: Readonly<Record<string, Access>> = {
   'post /api/notes/:id/take-back': 'member',
   'post /api/notes/:id/revise': 'member',
   'put /api/notes/:id/remarks/:remarkId/mended': 'member',
+  'put /api/notes/:id/disputes': 'member',
+  'delete /api/notes/:id/disputes/:disputeId': 'member',
   'post /api/notes/:id/records': 'member',
   'get /api/notes/:id/records/:recordId': 'member',
   'put /api/notes/:id/records/:recordId': 'member',
@@ -62,6 +64,8 @@ const RIGHTS: Readonly<Record<string, Access>> = {
   'post /api/desk/notes/:id/remarks': 'moderator',
   'delete /api/desk/notes/:id/remarks/:remarkId': 'moderator',
   'post /api/desk/notes/:id/decision': 'moderator',
+  'get /api/desk/disputes': 'moderator',
+  'put /api/desk/disputes/:id': 'moderator',
   'post /api/notes/:id/take-down': 'moderator',
   'get /api/search': 'anyone',
   'get /api/suggestions': 'anyone',
@@ -88,6 +92,7 @@ const withUnknownIds = (path: string): string =>
   path
     .replace(':remarkId', '999999999')
     .replace(':recordId', '999999999')
+    .replace(':disputeId', '999999999')
     .replace(':name', '0'.repeat(32))
     .replace(':file', '480.webp')
     .replace(':trouble', 'stall')
@@ -187,7 +192,9 @@ describe('rights on one thing', () => {
           ? { mended: true }
           : name === 'put /api/notes/:id/records/:recordId'
             ? { choice: CHOICE }
-            : {};
+            : name.endsWith('/disputes')
+              ? { code: 'stall', minute: 20, sentence: 'The probe had slipped out.' }
+              : {};
       const ask = (id: number | string) =>
         other.send(
           method.toUpperCase(),

@@ -3,7 +3,12 @@ import { noteFieldsSchema } from '#shared/note/note-fields.ts';
 import { kilnFields } from './notes.ts';
 
 /** What a page is told of a note's fields. */
-const PUBLIC_FIELDS = noteFieldsSchema.omit({ story: true, checkAnswers: true, record: true });
+const PUBLIC_FIELDS = noteFieldsSchema.omit({
+  story: true,
+  checkAnswers: true,
+  findingDisputes: true,
+  record: true,
+});
 
 /** The row of a plain note. */
 export function aNoteRow(over: object = {}) {
@@ -46,6 +51,8 @@ export function aDeskNote(over: Partial<DeskNote> = {}): DeskNote {
       marks: [],
       row: aNoteRow(),
       findings: [],
+      disputes: [],
+      levelAnswers: [],
       summary: {
         peakCelsius: 702,
         targetCelsius: 1000,
@@ -77,6 +84,7 @@ export function aDeskNote(over: Partial<DeskNote> = {}): DeskNote {
         remove: false,
         claim: true,
         takeDown: false,
+        dispute: false,
         tryIt: false,
       },
     },

@@ -51,6 +51,8 @@ export const whatHelpedSchema = z.object({
       noteIds: z.array(z.number()),
     }),
   ),
+  /** Published notes whose finding of this trouble is disputed: in none of the figures. */
+  disputed: z.number(),
   notes: z.record(z.string(), z.object({ id: z.number(), slug: z.string(), title: z.string() })),
 });
 export type WhatHelped = z.infer<typeof whatHelpedSchema>;
@@ -58,7 +60,10 @@ export type WhatHelped = z.infer<typeof whatHelpedSchema>;
 export const troubleSharesSchema = z.object({
   notes: z.number(),
   members: z.number(),
-  troubles: z.array(z.object({ trouble: z.enum(TROUBLE_IDS), notes: z.number() })),
+  /** `disputed`: notes whose finding of it is disputed, which are not among `notes`. */
+  troubles: z.array(
+    z.object({ trouble: z.enum(TROUBLE_IDS), notes: z.number(), disputed: z.number() }),
+  ),
 });
 export type TroubleShares = z.infer<typeof troubleSharesSchema>;
 

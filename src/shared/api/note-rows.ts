@@ -34,6 +34,8 @@ export const noteRowSchema = z.object({
   stripWords: z.string(),
   troubles: z.array(z.enum(TROUBLE_IDS)),
   measuredTroubles: z.array(z.enum(TROUBLE_IDS)),
+  /** Shown by disputed findings only: among the troubles they are not. Absent: none. */
+  disputedTroubles: z.array(z.enum(TROUBLE_IDS)).optional(),
   targetCelsius: z.number().nullable(),
   peakCelsius: z.number().nullable(),
   timeToTemperatureMinutes: z.number().nullable(),

@@ -4,6 +4,7 @@ import { kilnFieldsSchema } from '../note/kiln-fields.ts';
 import { CHANGE_IDS } from '../vocabulary/changes.ts';
 import { NOTE_STATUS_IDS } from '../vocabulary/statuses.ts';
 import { findingSchema } from '../firing/findings.ts';
+import { findingDisputeSchema } from './disputes.ts';
 import { checkSchema, noteSummarySchema, proposedChangeSchema } from './findings.ts';
 import { followOnSchema, noteRowSchema, stripPointsSchema } from './note-rows.ts';
 import { pictureSchema } from './pictures.ts';
@@ -19,6 +20,8 @@ export const noteAbilitiesSchema = z.object({
   remove: z.boolean(),
   claim: z.boolean(),
   takeDown: z.boolean(),
+  /** May disagree with what is read off the published note. */
+  dispute: z.boolean(),
   tryIt: z.boolean(),
 });
 
@@ -51,10 +54,19 @@ export const notePageSchema = z.object({
     fields: kilnFieldsSchema,
     volumeLitres: z.number().nullable(),
   }),
-  fields: noteFieldsSchema.omit({ story: true, checkAnswers: true, record: true }),
+  fields: noteFieldsSchema.omit({
+    story: true,
+    checkAnswers: true,
+    findingDisputes: true,
+    record: true,
+  }),
   marks: noteFieldsSchema.shape.record.unwrap().shape.marks.unwrap(),
   row: noteRowSchema,
   findings: z.array(findingSchema),
+  /** What the author disputes of them, each about a finding that is there. */
+  disputes: z.array(findingDisputeSchema),
+  /** The author’s answers to level stretches. */
+  levelAnswers: noteFieldsSchema.shape.record.unwrap().shape.levelAnswers.unwrap(),
   summary: noteSummarySchema,
   storyHtml: z.string(),
   pictures: z.array(pictureSchema),

@@ -107,6 +107,8 @@ const FIELD_LABELS: Readonly<Record<string, string>> = {
   story: 'Story',
   cautionsRead: 'Cautions read',
   answer: 'Answer to a check',
+  findingDisputes: 'Findings disagreed with',
+  sentence: 'Why a finding is disagreed with',
 };
 
 /** The label of the field a pointer names, with its row: "Piece row 2, wall". */

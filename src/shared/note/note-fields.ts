@@ -3,6 +3,7 @@ import { CHANGE_IDS } from '../vocabulary/changes.ts';
 import { START_CLASSES } from '../vocabulary/kiln.ts';
 import { CAUSE_IDS, TROUBLE_IDS } from '../vocabulary/troubles.ts';
 import { choice, clock, count, day, measure, optionalText } from './field-types.ts';
+import { draftDisputeSchema, MAX_DISPUTES } from './finding-disputes.ts';
 import { MAX_PIECES, pieceSchema, recipeSchema } from './pieces.ts';
 import { planSchema, recordFieldsSchema } from './plan.ts';
 import { setUpSchema } from './set-up.ts';
@@ -66,6 +67,8 @@ export const noteFieldsSchema = z.strictObject({
   story: storySchema.default(EMPTY_STORY),
   cautionsRead: z.boolean().default(false),
   checkAnswers: z.array(checkAnswerSchema).max(60).default([]),
+  /** Findings the author disagrees with, each with a sentence. */
+  findingDisputes: z.array(draftDisputeSchema).max(MAX_DISPUTES).default([]),
 });
 export type NoteFields = z.output<typeof noteFieldsSchema>;
 export type NoteFieldsInput = z.input<typeof noteFieldsSchema>;

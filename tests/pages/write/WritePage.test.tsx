@@ -21,6 +21,7 @@ const ABILITIES: Draft['abilities'] = {
   remove: true,
   claim: false,
   takeDown: false,
+  dispute: false,
   tryIt: false,
 };
 

@@ -15,6 +15,7 @@ const NOTHING = {
   remove: true,
   claim: false,
   takeDown: false,
+  dispute: false,
   tryIt: false,
 };
 

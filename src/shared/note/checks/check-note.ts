@@ -1,4 +1,5 @@
 import type { Check, CheckContext } from './check.ts';
+import { disputeChecks } from './dispute-checks.ts';
 import { rangeChecks } from './range-checks.ts';
 import { recordChecks } from './record-checks.ts';
 import { requiredFieldChecks } from './required-fields.ts';
@@ -13,6 +14,7 @@ const NOTE_ORDER = [
   'setUp',
   'plan',
   'record',
+  'findingDisputes',
   'pieces',
   'reduction',
   'result',
@@ -32,6 +34,7 @@ export function checkNote(context: CheckContext): Check[] {
     ...requiredFieldChecks(context),
     ...rangeChecks(context),
     ...recordChecks(context),
+    ...disputeChecks(context),
     ...troubleChecks(context),
     ...storyChecks(context),
     ...unsafePracticeChecks(context),

@@ -6,6 +6,7 @@ import { TROUBLES } from '../../vocabulary/troubles.ts';
 import type { MeasuredTrouble } from '../../vocabulary/troubles.ts';
 import { lookAgain } from './check.ts';
 import type { Check, CheckContext } from './check.ts';
+import { disputedTroubles } from './dispute-checks.ts';
 
 /** What the record shows of a trouble, in words with its numbers; null when it does not. */
 function shown(trouble: MeasuredTrouble, reading: FiringReading, unit: 'C' | 'F'): string | null {
@@ -73,11 +74,12 @@ export function troubleChecks(context: CheckContext): Check[] {
   const { fields, reading } = context;
   if (!reading) return [];
   const named = fields.result.troubles;
+  const disputed = disputedTroubles(context);
   const checks: Check[] = [];
   for (const trouble of MEASURED) {
     const words = TROUBLES[trouble].toLowerCase();
     const evidence = shown(trouble, reading, fields.plan.typedIn);
-    if (evidence !== null && !named.includes(trouble)) {
+    if (evidence !== null && !named.includes(trouble) && !disputed.includes(trouble)) {
       checks.push(
         lookAgain(
           `${trouble}-not-named`,

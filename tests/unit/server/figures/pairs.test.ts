@@ -66,6 +66,21 @@ describe('pairing a trouble with the next firing', () => {
     expect(pairOf('stall', stalled, { disputed: ['sag'] }).leftOut).toBeNull();
   });
 
+  it('counts a disputed finding as disputed also where nothing was fired since', () => {
+    const [pair] = pairsFor('stall', [
+      aFiring({ disputed: ['stall'], measuredTroubles: [], namedTroubles: [] }),
+    ]);
+    expect(pair).toMatchObject({ source: 'measured', leftOut: 'disputed', laterNoteId: null });
+  });
+
+  it('says nothing of what came of a trouble that either firing disputes', () => {
+    const outcome = (before: Over, now: Over) =>
+      outcomesBetween(aStalled(before), aFiring(now)).map((each) => each.outcome);
+    expect(outcome({}, {})).toEqual(['gone']);
+    expect(outcome({}, { disputed: ['stall'] })).toEqual(['cannot-say']);
+    expect(outcome({ disputed: ['stall'], measuredTroubles: [] }, {})).toEqual([]);
+  });
+
   it('keeps measured and author-named troubles apart', () => {
     const named: Over = { namedTroubles: ['overshoot'], hasRecord: false };
     expect(pairOf('overshoot', named, { hasRecord: false })).toMatchObject({

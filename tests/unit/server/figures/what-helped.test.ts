@@ -161,7 +161,7 @@ describe('what helped', () => {
 
   it('is what the interface promises', () => {
     const tables = [tableOf([...unchanged, ...insulated])];
-    const answer = { trouble: 'stall', tables, duringTheFiring: [], notes: {} };
+    const answer = { trouble: 'stall', tables, duringTheFiring: [], disputed: 0, notes: {} };
     expect(whatHelpedSchema.parse(answer)).toEqual(answer);
   });
 
