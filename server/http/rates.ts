@@ -6,6 +6,7 @@ const MINUTE = 60;
 export const RATES = {
   newNotes: { name: 'new-note', limit: 30, windowSeconds: 60 * MINUTE },
   uploads: { name: 'upload', limit: 60, windowSeconds: 30 * MINUTE },
+  recordFiles: { name: 'record-file', limit: 60, windowSeconds: 30 * MINUTE },
   searches: { name: 'search', limit: 60, windowSeconds: MINUTE },
   disputes: { name: 'dispute', limit: 30, windowSeconds: 60 * MINUTE },
   exports: { name: 'export', limit: 10, windowSeconds: 60 * MINUTE },

@@ -16,5 +16,6 @@ export function presentRecord(record: RecordRow): FiringRecord {
     skippedCount: record.skippedCount,
     strip: ready ? record.strip : null,
     error: record.error,
+    choice: record.storageKey === null ? null : record.choice,
   };
 }

@@ -86,6 +86,27 @@ export const recordRoutes: readonly Route[] = [
       return presentRecord(await requireRecord(db, params.id, params.recordId));
     },
   }),
+  // The table as it was sent, so that its columns can be chosen again in another visit.
+  defineRoute({
+    method: 'get',
+    path: '/api/notes/:id/records/:recordId/file',
+    access: 'member',
+    params: recordParams,
+    rate: RATES.recordFiles,
+    async handle({ db, deps, actor, params, response }) {
+      await ownNote(db, actor, params.id);
+      const { storageKey } = await requireRecord(db, params.id, params.recordId);
+      const file = storageKey === null ? null : await deps.store.read(storageKey);
+      if (!file) throw new AppError('not-found', 'The table of this record is not kept.');
+      response.attachment(`record-${String(params.recordId)}.txt`);
+      // Bytes, whatever they say: they are decoded by whoever asked, and shown by nobody.
+      response.type('application/octet-stream');
+      response.set('Content-Security-Policy', "default-src 'none'; sandbox");
+      response.set('Content-Length', String(file.size));
+      file.stream.on('error', (error) => response.destroy(error)).pipe(response);
+      return undefined;
+    },
+  }),
   defineRoute({
     method: 'get',
     path: '/api/notes/:id/record',

@@ -99,6 +99,22 @@ export async function send<Schema extends z.ZodType>(
   return readAnswer(response, sending.answer);
 }
 
+/**
+ * The bytes of a file.
+ *
+ * @throws ProblemError for a refusal, OfflineError when nothing answered
+ */
+export async function fetchBytes(path: string, signal?: AbortSignal): Promise<ArrayBuffer> {
+  const response = await reach(path, signal ? { signal } : {});
+  if (!response.ok) throw new ProblemError(await problemOf(response));
+  try {
+    return await response.arrayBuffer();
+  } catch (error) {
+    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    throw new OfflineError();
+  }
+}
+
 async function sendOnce({ method = 'GET', path, body, signal, headers }: Sending<z.ZodType>) {
   return reach(path, {
     method,

@@ -53,6 +53,7 @@ const RIGHTS: Readonly<Record<string, Access>> = {
   'post /api/notes/:id/records': 'member',
   'get /api/notes/:id/records/:recordId': 'member',
   'put /api/notes/:id/records/:recordId': 'member',
+  'get /api/notes/:id/records/:recordId/file': 'member',
   'get /api/notes/:id/record': 'anyone',
   'get /api/notes/:id/record.csv': 'anyone',
   'post /api/notes/:id/pictures': 'member',

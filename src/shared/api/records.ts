@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { recordChoiceSchema } from '../record/record-choice.ts';
 import { stripPointsSchema } from './note-rows.ts';
 
 export const MAX_RECORD_BYTES = 10 * 1024 * 1024;
@@ -20,6 +21,8 @@ export const recordSchema = z.object({
   skippedCount: z.number(),
   strip: stripPointsSchema.nullable(),
   error: z.object({ message: z.string(), line: z.number().nullable() }).nullable(),
+  /** How its table is read: another choice can be made. Null where no table is kept. */
+  choice: recordChoiceSchema.nullable(),
 });
 export type FiringRecord = z.infer<typeof recordSchema>;
 

@@ -20,6 +20,7 @@ import { PasteRows } from './PasteRows.tsx';
 import { sourceOfFile, sourceOfReadings, type RecordSource } from './record-source.ts';
 import { StoredRecord } from './StoredRecord.tsx';
 import { TypedReadings } from './TypedReadings.tsx';
+import { useKeptTable } from './useKeptTable.ts';
 import { useRecordSending } from './useRecordSending.ts';
 import { useRecordStatus } from './useRecordStatus.ts';
 import { WayChoice, type Way } from './WayChoice.tsx';
@@ -41,7 +42,8 @@ export function RecordSection() {
   const [candidate, setCandidate] = useState<Candidate | null>(null);
   const [refused, setRefused] = useState<string | null>(null);
   const [looking, setLooking] = useState(false);
-  const { sending, sent, send, cancel, dismiss } = useRecordSending(draft.id, keeper);
+  const kept = useKeptTable(draft.id, keeper);
+  const { sending, send, cancel, dismiss } = useRecordSending(draft.id, keeper);
   const status = useRecordStatus(recordId);
   const mayChoose = editable && sending.kind !== 'sending';
 
@@ -119,10 +121,12 @@ export function RecordSection() {
           <StoredRecord
             status={status}
             editable={mayChoose}
-            onChooseAgain={
-              sent?.recordId === recordId
-                ? () => setCandidate({ source: sent.source, again: recordId })
-                : null
+            fetching={kept.fetching}
+            onChooseAgain={(record) =>
+              void kept.fetch(record, (source) => {
+                setReplacing(false);
+                setCandidate({ source, again: record.id });
+              })
             }
             onReplace={() => {
               setReplacing(true);
@@ -172,7 +176,13 @@ export function RecordSection() {
         {candidate && (
           <ChoiceForm
             source={candidate.source}
-            onSource={(source) => setCandidate({ ...candidate, source })}
+            onSource={(source) =>
+              setCandidate({
+                source,
+                // With a line left out it is another table than the server keeps.
+                again: source.text === candidate.source.text ? candidate.again : null,
+              })
+            }
             unit={unit}
             onConfirm={(choice) => void confirm(candidate.source, choice, candidate.again)}
             onCancel={() => setCandidate(null)}

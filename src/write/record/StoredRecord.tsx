@@ -1,3 +1,4 @@
+import type { FiringRecord } from '#shared/api/records.ts';
 import { formatDuration } from '#shared/units/duration.ts';
 import { Button } from '../../ui/Button.tsx';
 import { BusyMark } from '../../ui/BusyMark.tsx';
@@ -8,8 +9,9 @@ import type { useRecordStatus } from './useRecordStatus.ts';
 interface Props {
   readonly status: ReturnType<typeof useRecordStatus>;
   readonly editable: boolean;
-  /** Its columns can be chosen again, because its table is still in this page. */
-  readonly onChooseAgain: (() => void) | null;
+  /** Fetches its table, to choose columns and units again. */
+  readonly onChooseAgain: (record: FiringRecord) => void;
+  readonly fetching: boolean;
   readonly onReplace: () => void;
   readonly onRemove: () => void;
 }
@@ -34,8 +36,12 @@ export function StoredRecord({ status, editable, ...acts }: Props) {
   }
   const buttons = editable && (
     <>
-      {acts.onChooseAgain && (
-        <Button kind={record.status === 'failed' ? 'main' : 'plain'} onClick={acts.onChooseAgain}>
+      {record.choice !== null && (
+        <Button
+          kind={record.status === 'failed' ? 'main' : 'plain'}
+          busy={acts.fetching}
+          onClick={() => acts.onChooseAgain(record)}
+        >
           Choose columns and units again
         </Button>
       )}
@@ -68,7 +74,7 @@ export function StoredRecord({ status, editable, ...acts }: Props) {
         action={buttons}
       >
         {record.error?.message ?? 'No reason was given.'}{' '}
-        {acts.onChooseAgain
+        {record.choice !== null
           ? 'Choose the columns and units again, or mend the file and choose it again.'
           : 'Mend the file, or choose it again to say otherwise how it is read.'}
       </Notice>

@@ -1,10 +1,10 @@
 import { queryOptions } from '@tanstack/react-query';
 import { recordSchema, type FiringRecord } from '#shared/api/records.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
-import { send } from '../../http/client.ts';
+import { fetchBytes, send } from '../../http/client.ts';
 import { upload } from '../../http/upload.ts';
 import { noteQueries } from '../../notes/note-queries.ts';
-import type { RecordSource } from './record-source.ts';
+import { sourceOfKept, type RecordSource } from './record-source.ts';
 
 const POLL_MILLISECONDS = 1000;
 
@@ -42,6 +42,16 @@ export function sendRecord(
     answer: recordSchema,
     ...options,
   });
+}
+
+/** The table of a stored record, as the server keeps it; null where it keeps none. */
+export async function fetchKeptTable(
+  noteId: number,
+  record: FiringRecord,
+): Promise<RecordSource | null> {
+  if (record.choice === null) return null;
+  const bytes = await fetchBytes(`${address(noteId, record.id)}/file`);
+  return sourceOfKept(new Uint8Array(bytes), record, record.choice);
 }
 
 /** Has the kept file read again with other columns or units. */

@@ -1,3 +1,4 @@
+import type { FiringRecord } from '#shared/api/records.ts';
 import type { Reading } from '#shared/firing/types.ts';
 import { decodeRecordBytes } from '#shared/record/decode-record-bytes.ts';
 import { detectTable } from '#shared/record/detect-table.ts';
@@ -70,6 +71,28 @@ export async function sourceOfFile(file: File): Promise<RecordSource> {
     );
   }
   return sourceOf(decodeRecordBytes(bytes), file.name || 'record.csv', 'file', file);
+}
+
+/**
+ * The table of a stored record as it was sent, to be read by another choice. It starts from the one
+ * it is read by now.
+ * @throws RecordError for what is no text
+ */
+export function sourceOfKept(
+  bytes: Uint8Array,
+  record: { readonly fileName: string; readonly source: FiringRecord['source'] },
+  choice: RecordChoice,
+): RecordSource {
+  return {
+    text: decodeRecordBytes(bytes),
+    file: null,
+    fileName: record.fileName,
+    source: record.source === 'file' ? 'file' : 'pasted',
+    choice,
+    assumed: [],
+    undetected: null,
+    leftOut: [],
+  };
 }
 
 /** Readings that are too many to be typed rows, as a table of our own. */

@@ -11,23 +11,15 @@ export type Sending =
   | { readonly kind: 'sending'; readonly share: number }
   | { readonly kind: 'failed'; readonly reason: string; readonly retry: () => void };
 
-export interface SentRecord {
-  readonly recordId: number;
-  /** The table as it was sent, while this page is open: its columns can be chosen again. */
-  readonly source: RecordSource;
-}
-
 /** Sends a confirmed table and attaches it to the draft once the server has it. */
 export function useRecordSending(noteId: number, keeper: DraftKeeper) {
   const client = useQueryClient();
   const [sending, setSending] = useState<Sending>({ kind: 'idle' });
-  const [sent, setSent] = useState<SentRecord | null>(null);
   const abort = useRef<AbortController | null>(null);
   useEffect(() => () => abort.current?.abort(), []);
 
   const attach = async (record: FiringRecord, source: RecordSource): Promise<void> => {
     client.setQueryData(recordQueries.status(noteId, record.id).queryKey, record);
-    setSent({ recordId: record.id, source });
     keeper.change((fields) => ({
       ...fields,
       record: {
@@ -81,7 +73,6 @@ export function useRecordSending(noteId: number, keeper: DraftKeeper) {
 
   return {
     sending,
-    sent,
     send,
     cancel: () => abort.current?.abort(),
     dismiss: () => setSending({ kind: 'idle' }),
