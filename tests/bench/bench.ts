@@ -1,57 +1,22 @@
-import { mkdtemp, rm } from 'node:fs/promises';
-import { createServer, Agent, request as httpRequest, type Server } from 'node:http';
-import type { AddressInfo } from 'node:net';
-import { tmpdir } from 'node:os';
-import path from 'node:path';
 import express from 'express';
 import mysql from 'mysql2/promise';
-import { pino } from 'pino';
 import sharp from 'sharp';
 import { readFiring } from '#shared/firing/read-firing.ts';
-import { readQuestion } from '#shared/question/read-question.ts';
-import { startEngine } from '../../search/engine/start-engine.ts';
 import { loadDemo } from '../../seeds/development/load-demo.ts';
 import { FIRING_KINDS } from '../../seeds/simulation/firing-kinds.ts';
 import { simulateFiring } from '../../seeds/simulation/simulate-firing.ts';
-import { createApp } from '../../server/app.ts';
-import { migrate } from '../../server/database/migrate.ts';
-import { openDatabase } from '../../server/database/open-database.ts';
 import type { Deps } from '../../server/deps.ts';
 import { encodePicture } from '../../server/pictures/encode-picture.ts';
-import { searchEngine } from '../../server/search/engine-search.ts';
 import { reindex } from '../../server/search/reindex.ts';
-import { withThrowawayDatabase } from '../../server/start/throwaway-database.ts';
-import { diskStore } from '../../server/storage/file-store.ts';
-import { testConfig } from '../support/test-config.ts';
+import { benchSearch } from './bench-search.ts';
+import { get, listen, withStack } from './bench-stack.ts';
 import { milliseconds, percentile, print, throughput, timeEach } from './measure.ts';
 
 /**
  * `npm run bench`: performance as ratios of one run, because absolute times belong to a machine.
- * Everything is real: MariaDB, the local engine, HTTP over loopback, the demo's notes.
+ * Everything is real: MariaDB, the local engine in a process of its own, HTTP over loopback, the
+ * demo's notes.
  */
-const agent = new Agent({ keepAlive: true, maxSockets: 64 });
-
-function get(port: number, url: string): Promise<number> {
-  return new Promise((resolve, reject) => {
-    httpRequest({ host: '127.0.0.1', port, path: url, agent }, (response) => {
-      let size = 0;
-      response.on('data', (chunk: Buffer) => (size += chunk.length));
-      response.on('end', () => {
-        if (response.statusCode === 200) resolve(size);
-        else reject(new Error(`${url}: ${String(response.statusCode)}`));
-      });
-    })
-      .on('error', reject)
-      .end();
-  });
-}
-
-async function listen(handler: express.Express): Promise<{ server: Server; port: number }> {
-  const server = createServer(handler);
-  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
-  return { server, port: (server.address() as AddressInfo).port };
-}
-
 /** The note page against a bare handler that runs the very statements the page runs. */
 async function benchNotePage(deps: Deps, port: number, databaseUrl: string): Promise<void> {
   const [note] = await deps
@@ -95,39 +60,6 @@ async function benchNotePage(deps: Deps, port: number, databaseUrl: string): Pro
   await pool.end();
 }
 
-/** The whole way of a search against the engine’s own part of it. */
-async function benchSearch(deps: Deps, port: number): Promise<void> {
-  const questions = [
-    'stalled at 700 °C',
-    'stuck at 1300F',
-    'cracked flat plate',
-    'copper matt no colour',
-  ];
-  const ask = (round: number): string => questions[round % questions.length] ?? '';
-  const whole: number[] = [];
-  // In portions, because a visitor may ask only so often; the count of it is cleared between them.
-  for (let portion = 0; portion < 5; portion += 1) {
-    await deps.db('throttles').delete();
-    whole.push(
-      ...(await timeEach(
-        40,
-        (round) => get(port, `/api/search?q=${encodeURIComponent(ask(round))}`),
-        4,
-      )),
-    );
-  }
-  const engine = await timeEach(200, (round) =>
-    searchEngine(deps.config, readQuestion(ask(round)), {}),
-  );
-  print('search, whole stack', milliseconds(whole));
-  print('search, engine alone (same queries)', milliseconds(engine));
-  print(
-    'search, whole / engine',
-    (percentile(whole, 0.5) / percentile(engine, 0.5)).toFixed(2),
-    'aim ≤ 1.5',
-  );
-}
-
 async function benchReading(): Promise<void> {
   const { readings, marks } = simulateFiring({ ...FIRING_KINDS.plain, seed: 1 });
   const step = Math.max(1, Math.floor(readings.length / 500));
@@ -168,41 +100,12 @@ async function benchPictures(): Promise<void> {
   );
 }
 
-await withThrowawayDatabase(async (databaseUrl) => {
-  const folder = await mkdtemp(path.join(tmpdir(), 'spyhole-bench-'));
-  await migrate(databaseUrl);
-  const db = openDatabase(databaseUrl);
-  const engine = await startEngine({
-    host: '127.0.0.1',
-    port: 0,
-    masterKey: 'a-key-for-the-bench-only-0123456789',
-    dataDir: path.join(folder, 'search'),
-  });
-  const config = testConfig({
-    databaseUrl,
-    uploadsFolder: path.join(folder, 'uploads'),
-    search: { url: engine.url, key: 'a-key-for-the-bench-only-0123456789' },
-  });
-  const deps: Deps = {
-    config,
-    db,
-    log: pino({ level: 'silent' }),
-    store: diskStore(config.uploadsFolder),
-  };
-  try {
-    await loadDemo(deps);
-    await reindex(deps);
-    const { server, port } = await listen(createApp(deps));
-    await benchNotePage(deps, port, databaseUrl);
-    await benchSearch(deps, port);
-    await benchReading();
-    await benchPictures();
-    server.closeAllConnections();
-    server.close();
-  } finally {
-    agent.destroy();
-    await engine.close();
-    await db.destroy();
-    await rm(folder, { recursive: true, force: true });
-  }
+await withStack(async ({ deps, databaseUrl, serve }) => {
+  await loadDemo(deps);
+  await reindex(deps);
+  const port = await serve();
+  await benchNotePage(deps, port, databaseUrl);
+  await benchSearch(deps, port);
+  await benchReading();
+  await benchPictures();
 });
