@@ -14,7 +14,7 @@ import {
   presentPoints,
   readAgain,
   readingsFor,
-  recordCsv,
+  recordCsvFor,
   requireRecord,
 } from './record-service.ts';
 
@@ -125,11 +125,11 @@ export const recordRoutes: readonly Route[] = [
     params: idParams,
     query: ofQuery,
     async handle({ db, actor, params, query, response }) {
-      const content = await readingsFor(db, actor, params.id, query.of);
+      const csv = await recordCsvFor(db, actor, params.id, query.of);
       response
         .attachment(`firing-${String(params.id)}.csv`)
         .type('text/csv; charset=utf-8')
-        .send(recordCsv(content));
+        .send(csv);
       return undefined;
     },
   }),

@@ -7,12 +7,14 @@ import type { Actor } from '../authorization/actor.ts';
 import { canOnNote } from '../authorization/rules.ts';
 import { inTransaction } from '../database/transaction.ts';
 import { AppError } from '../http/problem.ts';
-import { findNote } from '../notes/note-repository.ts';
+import { findNote, type NoteRecord } from '../notes/note-repository.ts';
 import { noteSubject } from '../notes/note-subject.ts';
+import { findRevision } from '../notes/revision-repository.ts';
 import { nudgeOutbox } from '../outbox/nudge.ts';
 import { enqueue } from '../outbox/outbox.ts';
 import type { FileStore } from '../storage/file-store.ts';
 import { loadContent, type RecordContent } from './record-content.ts';
+import { recordCsv } from './record-csv.ts';
 import { chooseAgain, findRecord, insertRecord, type RecordRow } from './record-repository.ts';
 
 const CHART_POINTS = 3000;
@@ -75,13 +77,8 @@ export async function readAgain(
 /** Whose record is asked for: the readers' one, the desk's, or the author's working copy's. */
 export type RecordOf = 'published' | 'handed-in' | 'draft';
 
-/** The readings of a note, for those who may see that state of it. */
-export async function readingsFor(
-  db: Knex,
-  actor: Actor,
-  noteId: number,
-  of: RecordOf,
-): Promise<RecordContent> {
+/** The note, for those who may see that state of it. */
+async function noteFor(db: Knex, actor: Actor, noteId: number, of: RecordOf): Promise<NoteRecord> {
   const note = await findNote(db, noteId);
   const subject = note && noteSubject(note);
   const allowed =
@@ -91,17 +88,42 @@ export async function readingsFor(
       : canOnNote(actor, 'read-draft', subject) ||
         (of === 'handed-in' && canOnNote(actor, 'read-handed-in', subject)));
   if (!note || !allowed) throw new AppError('not-found');
+  return note;
+}
+
+const revisionOf = (note: NoteRecord, of: Exclude<RecordOf, 'draft'>): number | null =>
+  of === 'published' ? note.publishedRevisionId : note.handedInRevisionId;
+
+/** The readings of a note, for those who may see that state of it. */
+export async function readingsFor(
+  db: Knex,
+  actor: Actor,
+  noteId: number,
+  of: RecordOf,
+): Promise<RecordContent> {
+  const note = await noteFor(db, actor, noteId, of);
   const contentId =
     of === 'draft'
       ? note.draft.record.recordId === null
         ? null
         : (await requireRecord(db, noteId, note.draft.record.recordId)).contentId
-      : await contentOfRevision(
-          db,
-          of === 'published' ? note.publishedRevisionId : note.handedInRevisionId,
-        );
+      : await contentOfRevision(db, revisionOf(note, of));
   if (contentId === null) throw new AppError('not-found', 'This note has no record.');
   return loadContent(db, contentId);
+}
+
+/** The record of a note as CSV, with what was done when. */
+export async function recordCsvFor(
+  db: Knex,
+  actor: Actor,
+  noteId: number,
+  of: RecordOf,
+): Promise<string> {
+  const content = await readingsFor(db, actor, noteId, of);
+  const note = await noteFor(db, actor, noteId, of);
+  const revisionId = of === 'draft' ? null : revisionOf(note, of);
+  const revision = revisionId === null ? null : await findRevision(db, revisionId);
+  return recordCsv(content, (revision?.fields ?? note.draft).record.marks);
 }
 
 async function contentOfRevision(db: Knex, revisionId: number | null): Promise<number | null> {
@@ -121,12 +143,4 @@ export function presentPoints(content: RecordContent): RecordPoints {
     secondProbe: content.secondProbe ? thin(content.secondProbe) : null,
     count: content.readings.length,
   };
-}
-
-/** All readings as CSV: minute and °C, numbers only, so no cell can be taken for a formula. */
-export function recordCsv(content: RecordContent): string {
-  const lines = content.readings.map(
-    (reading) => `${String(Math.round(reading.minute * 1e4) / 1e4)},${String(reading.celsius)}`,
-  );
-  return `minute,celsius\r\n${lines.join('\r\n')}\r\n`;
 }

@@ -1,12 +1,20 @@
 import { describe, expect, vi } from 'vitest';
-import { notePageSchema } from '#shared/api/notes.ts';
+import { draftSchema, notePageSchema } from '#shared/api/notes.ts';
 import { recordPointsSchema, recordSchema } from '#shared/api/records.ts';
+import { markSchema } from '#shared/note/plan.ts';
 import { createHandlers } from '../../server/outbox/handlers.ts';
 import { workOnce } from '../../server/outbox/worker.ts';
 import { readRecord } from '../../server/records/read-record.ts';
-import { test } from '../support/api.ts';
+import { test, type Client } from '../support/api.ts';
 import { cookiesOf } from '../support/pages.ts';
-import { addKiln, completeFields, decideOn, handIn, startNote } from '../support/notes.ts';
+import {
+  addKiln,
+  completeFields,
+  decideOn,
+  handIn,
+  saveDraft,
+  startNote,
+} from '../support/notes.ts';
 import {
   MINUTES_CELSIUS,
   readUpload as read,
@@ -203,6 +211,42 @@ describe('an uploaded record', () => {
     expect(Math.max(...chart.points.map(([, celsius]) => celsius))).toBe(1101.7);
     const page = (await visitor.get(`/api/notes/${String(draft.id)}`)).as(notePageSchema);
     expect(page.hasRecord).toBe(true);
+  });
+
+  test('is exported with its second probe, and with the marks of the state asked for', async ({
+    api,
+  }) => {
+    const author = await api.signedIn();
+    const moderator = await api.signedIn('moderator');
+    const kiln = await addKiln(author);
+    const draft = await startNote(author, kiln.id);
+    const lines = climb(60, (minute, celsius) => `${minute},${celsius},${celsius + 12}`);
+    const record = await read(api, author, draft.id, ['m,top,floor', ...lines].join('\n'), {
+      secondColumn: 2,
+    });
+    const fields = completeFields(kiln.id);
+    const lit = markSchema.parse({ minute: 0, kind: 'lit' });
+    const withMarks = (marks: (typeof lit)[]) => ({
+      ...fields,
+      record: { ...fields.record, typedRows: [], marks, recordId: record.id },
+    });
+    await handIn(author, draft, withMarks([lit]));
+    await decideOn(moderator, draft.id, 'publish');
+    expect((await author.post(`/api/notes/${String(draft.id)}/revise`)).status).toBe(200);
+    const revising = (await author.get(`/api/notes/${String(draft.id)}/draft`)).as(draftSchema);
+    await saveDraft(author, revising, withMarks([{ ...lit, kind: 'gas-up' }]));
+
+    const csv = async (client: Client, of: string) =>
+      (await client.get(`/api/notes/${String(draft.id)}/record.csv?of=${of}`)).text.split('\r\n');
+    const published = await csv(api.client(), 'published');
+    expect(published[0]).toBe('minute,probe 1 celsius,probe 2 celsius,mark');
+    expect(published).toContain('0,,,Lit');
+    const cells = (line: string | undefined) => (line ?? '').split(',').slice(0, 3).map(Number);
+    const readings = published.slice(1, -1).filter((line) => !line.endsWith('Lit'));
+    expect(readings.map(cells)).toEqual(
+      lines.map((line) => cells(line).map((value) => expect.closeTo(value, 3) as number)),
+    );
+    expect(await csv(author, 'draft')).toContain('0,,,Gas up');
   });
 });
 
