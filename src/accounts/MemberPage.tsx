@@ -6,6 +6,7 @@ import { ROLES } from '#shared/vocabulary/statuses.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
 import { NoteRows } from '../notes/NoteRows.tsx';
 import { dayWords } from '../notes/note-words.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Reading } from '../ui/Reading.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
 import { usePageTitle } from '../ui/usePageTitle.ts';
@@ -32,7 +33,7 @@ export function MemberPage() {
             `here since ${dayWords(member.joinedOn)}`,
           ]
             .filter((part) => part !== null)
-            .join(' · ')}
+            .join(FACT_SEPARATOR)}
         </p>
         {member.about && (
           <p className="max-w-measure font-story text-story whitespace-pre-line">{member.about}</p>

@@ -1,6 +1,7 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import type { Me } from '#shared/api/accounts.ts';
 import { momentWords } from '../notes/note-words.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Button } from '../ui/Button.tsx';
 import { Notice } from '../ui/Notice.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
@@ -55,7 +56,7 @@ export function SessionSettings({ me }: { readonly me: Me }) {
             >
               <span className="min-w-0">
                 <span className="font-[600]">{session.browser}</span>
-                {session.current && ' · this one'}
+                {session.current && `${FACT_SEPARATOR}this one`}
                 <span className="block text-note text-soot-2">
                   since {momentWords(session.startedAt)}, last seen{' '}
                   {momentWords(session.lastSeenAt)}

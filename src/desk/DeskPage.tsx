@@ -5,6 +5,7 @@ import { stripScaleMinutes } from '#shared/heat/strip-scale.ts';
 import { paths } from '#shared/paths.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { EmptyState } from '../ui/EmptyState.tsx';
 import { HeatLegend } from '../ui/HeatLegend.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
@@ -94,7 +95,7 @@ function QueueRow({ row, scaleMinutes, now }: QueueRowProps) {
           </Link>
         </h2>
         <p className="text-small text-soot-2">
-          {row.author?.name ?? 'A former member'} · {row.kilnName} · {facts.join(' · ')}
+          {[row.author?.name ?? 'A former member', row.kilnName, ...facts].join(FACT_SEPARATOR)}
         </p>
         {row.unsafeWords > 0 && (
           <p className="text-small font-[650] text-caution">

@@ -1,6 +1,7 @@
 import type { DeskNote } from '#shared/api/desk.ts';
 import { useRepeatKey } from '../http/useRepeatKey.ts';
 import { momentWords } from '../notes/note-words.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Button } from '../ui/Button.tsx';
 import { IconButton } from '../ui/IconButton.tsx';
 import { SelectField } from '../ui/SelectField.tsx';
@@ -53,7 +54,7 @@ export function DeskRemarks({ desk, data, typed, onTyped }: Props) {
                 <p>{remark.text}</p>
                 <p className="text-note text-soot-2">
                   {remark.by?.name ?? 'A former moderator'}, {momentWords(remark.at)}
-                  {remark.mended && ' · mended, the author says'}
+                  {remark.mended && `${FACT_SEPARATOR}mended, the author says`}
                 </p>
               </div>
               {data.abilities.remark && (

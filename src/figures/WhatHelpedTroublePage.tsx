@@ -8,6 +8,7 @@ import { TROUBLE_IDS, TROUBLE_SHORT, TROUBLES, type Trouble } from '#shared/voca
 import { useSession } from '../accounts/useSession.ts';
 import { NotFoundPage } from '../http/NotFoundPage.tsx';
 import { ProblemPage } from '../http/ProblemPage.tsx';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { CautionNote } from '../ui/CautionNote.tsx';
 import { EmptyState } from '../ui/EmptyState.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';
@@ -61,7 +62,7 @@ function Helped({ trouble }: { readonly trouble: Trouble }) {
           </Link>
           {trouble === 'stall' && (
             <>
-              {' · '}
+              {FACT_SEPARATOR}
               <a href="#during" className="link">
                 Stuck right now? What others did during the firing
               </a>

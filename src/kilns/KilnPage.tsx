@@ -7,6 +7,7 @@ import { useSession } from '../accounts/useSession.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
 import { dayWords } from '../notes/note-words.ts';
 import { kilnGroup } from '../notes/sheet-groups.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Disclosure } from '../ui/Disclosure.tsx';
 import { FiringSheet } from '../ui/FiringSheet.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';
@@ -49,9 +50,8 @@ export function KilnPage() {
           ) : (
             'Its keeper has left'
           )}
-          {kiln.data.lentTo.length > 0 && (
-            <> · lent to {kiln.data.lentTo.map(({ name }) => name).join(', ')}</>
-          )}
+          {kiln.data.lentTo.length > 0 &&
+            `${FACT_SEPARATOR}lent to ${kiln.data.lentTo.map(({ name }) => name).join(', ')}`}
         </p>
         {kiln.data.removed && <Notice kind="info">This kiln is no longer in use.</Notice>}
         {(abilities.fire || abilities.edit) && (

@@ -7,6 +7,7 @@ import type { Units } from '#shared/units/units.ts';
 import { FUELS, WALLS } from '#shared/vocabulary/kiln.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { EmptyState } from '../ui/EmptyState.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';
 import { Reading } from '../ui/Reading.tsx';
@@ -84,8 +85,10 @@ function KilnList({ heading, kilns, units }: ListProps) {
                 {kiln.fields.wall !== null && `${WALLS[kiln.fields.wall].toLowerCase()}, `}
                 {FUELS[kiln.fields.fuel].toLowerCase()}
                 {kiln.lentTo.length > 0 &&
-                  ` · lent to ${kiln.lentTo.map(({ name }) => name).join(', ')}`}
-                {heading !== 'Yours' && kiln.keeper && ` · kept by ${kiln.keeper.name}`}
+                  `${FACT_SEPARATOR}lent to ${kiln.lentTo.map(({ name }) => name).join(', ')}`}
+                {heading !== 'Yours' &&
+                  kiln.keeper &&
+                  `${FACT_SEPARATOR}kept by ${kiln.keeper.name}`}
               </p>
             </div>
             <div className="flex flex-wrap gap-3">

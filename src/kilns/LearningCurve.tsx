@@ -6,6 +6,7 @@ import { formatDuration } from '#shared/units/duration.ts';
 import { formatTemperature } from '#shared/units/temperature.ts';
 import type { Units } from '#shared/units/units.ts';
 import { changeWords, dayWords, troubleWords } from '../notes/note-words.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { minuteTicks } from '../ui/axis-ticks.ts';
 import { HeatLegend } from '../ui/HeatLegend.tsx';
 import { MinuteRuler } from '../ui/MinuteRuler.tsx';
@@ -111,7 +112,9 @@ function Firing({ row, units, scaleMinutes }: FiringProps) {
               {figure}
             </span>
           ))}
-          {troubles.length > 0 && <span className="font-[600]">{troubles.join(' · ')}</span>}
+          {troubles.length > 0 && (
+            <span className="font-[600]">{troubles.join(FACT_SEPARATOR)}</span>
+          )}
         </p>
       </div>
     </div>

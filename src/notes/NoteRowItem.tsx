@@ -6,6 +6,7 @@ import { formatChamber } from '#shared/units/volume.ts';
 import { formatTemperature } from '#shared/units/temperature.ts';
 import { formatDuration } from '#shared/units/duration.ts';
 import type { Units } from '#shared/units/units.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Reading } from '../ui/Reading.tsx';
 import { SmallGlowStrip } from '../ui/SmallGlowStrip.tsx';
 import { changeWords, dayWords, outcomeWords, rowFigures, troubleWords } from './note-words.ts';
@@ -49,11 +50,16 @@ export function NoteRowItem({ row, units, scaleMinutes, children, headingLevel =
           </Link>
         </Heading>
         <p className="text-small text-soot-2">
-          {row.author?.name ?? 'A former member'} · {row.kiln.name}
-          {row.kiln.volumeLitres !== null &&
-            `, ${formatChamber(row.kiln.volumeLitres, units)}`} · {dayWords(row.firedOn)}
+          {row.author?.name ?? 'A former member'}
+          {FACT_SEPARATOR}
+          {row.kiln.name}
+          {row.kiln.volumeLitres !== null && `, ${formatChamber(row.kiln.volumeLitres, units)}`}
+          {FACT_SEPARATOR}
+          {dayWords(row.firedOn)}
         </p>
-        {troubles.length > 0 && <p className="text-small font-[600]">{troubles.join(' · ')}</p>}
+        {troubles.length > 0 && (
+          <p className="text-small font-[600]">{troubles.join(FACT_SEPARATOR)}</p>
+        )}
         {children}
         <NextLine row={row} units={units} />
       </div>

@@ -7,6 +7,7 @@ import { paths } from '#shared/paths.ts';
 import { formatChamber } from '#shared/units/volume.ts';
 import type { Units } from '#shared/units/units.ts';
 import { CAUSES } from '#shared/vocabulary/troubles.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { CautionNote } from '../ui/CautionNote.tsx';
 import { FiringSheet } from '../ui/FiringSheet.tsx';
 import { GlowStrip } from '../ui/GlowStrip.tsx';
@@ -47,13 +48,13 @@ export function NoteView({ page, units, recordOf = 'published', aside }: Props) 
             ) : (
               'A former member'
             )}
-            {' · '}
+            {FACT_SEPARATOR}
             <Link to={paths.kiln(kiln.id)} className="link">
               {row.kiln.name}
             </Link>
             {kiln.removed && ' (no longer in use)'}
             {kiln.volumeLitres !== null && `, ${formatChamber(kiln.volumeLitres, units)}`}
-            {row.firedOn && ` · fired ${dayWords(row.firedOn)}`}
+            {row.firedOn && `${FACT_SEPARATOR}fired ${dayWords(row.firedOn)}`}
             {fields.when.startClass === 'hot' && ', started hot'}
           </p>
         </div>
@@ -75,7 +76,7 @@ export function NoteView({ page, units, recordOf = 'published', aside }: Props) 
         {troubles.length > 0 && (
           <p className="text-small">
             <span className="text-soot-2">Troubles: </span>
-            <strong className="font-[650]">{troubles.join(' · ')}</strong>
+            <strong className="font-[650]">{troubles.join(FACT_SEPARATOR)}</strong>
             {fields.result.causes.length > 0 && (
               <span className="block text-soot-2">
                 Suspected:{' '}

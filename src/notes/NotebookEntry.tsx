@@ -4,6 +4,7 @@ import { formatDuration } from '#shared/units/duration.ts';
 import { formatTemperature } from '#shared/units/temperature.ts';
 import type { Units } from '#shared/units/units.ts';
 import { NOTE_STATUSES } from '#shared/vocabulary/statuses.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Reading } from '../ui/Reading.tsx';
 import { SmallGlowStrip } from '../ui/SmallGlowStrip.tsx';
 import { changeWords, dayWords, momentWords } from './note-words.ts';
@@ -73,19 +74,19 @@ export function NotebookEntry({ note, units, scaleMinutes, gap }: Props) {
           {inWork && <span className="text-soot-2">, saved {momentWords(note.savedAt)}</span>}
           {note.peakCelsius !== null && (
             <span className="text-soot-2">
-              {' · peak '}
+              {FACT_SEPARATOR}peak{' '}
               <Reading>{formatTemperature(note.peakCelsius, units.temperature)}</Reading>
             </span>
           )}
           {note.timeToTemperatureMinutes !== null && (
             <span className="text-soot-2">
-              {' · '}
+              {FACT_SEPARATOR}
               <Reading>{formatDuration(note.timeToTemperatureMinutes)}</Reading> to temperature
             </span>
           )}
           {published && (
             <>
-              <span className="text-soot-2">{' · '}</span>
+              <span className="text-soot-2">{FACT_SEPARATOR}</span>
               {revising ? (
                 <Link className="link" to={paths.note(note.id, note.slug)}>
                   The published note

@@ -7,6 +7,7 @@ import { formatTemperature } from '#shared/units/temperature.ts';
 import type { Units } from '#shared/units/units.ts';
 import { NOTE_STATUSES } from '#shared/vocabulary/statuses.ts';
 import { stripScaleMinutes } from '#shared/heat/strip-scale.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Reading } from '../ui/Reading.tsx';
 import { SmallGlowStrip } from '../ui/SmallGlowStrip.tsx';
 import { changeWords, dayWords, outcomeWords } from './note-words.ts';
@@ -118,7 +119,7 @@ function Firing({
           {dayWords(neighbour.firedOn)}
           {neighbour.peakCelsius !== null && (
             <>
-              {' · '}
+              {FACT_SEPARATOR}
               <Reading>{formatTemperature(neighbour.peakCelsius, units.temperature)}</Reading>
             </>
           )}

@@ -1,5 +1,6 @@
 import type { RecordChoice } from '#shared/record/record-choice.ts';
 import type { TableColumn } from './choice-columns.ts';
+import { FACT_SEPARATOR } from '../../ui/fact-separator.ts';
 
 interface Props {
   readonly columns: readonly TableColumn[];
@@ -42,7 +43,7 @@ export function ColumnSamples({ columns, choice }: Props) {
                   .slice(0, 3)
                   .map((sample, at) => (
                     <span key={at}>
-                      {at > 0 && <span aria-hidden="true"> · </span>}
+                      {at > 0 && <span aria-hidden="true">{FACT_SEPARATOR}</span>}
                       <span className="reading">{sample.slice(0, 24)}</span>
                     </span>
                   ))}

@@ -1,5 +1,6 @@
 import type { FiringRecord } from '#shared/api/records.ts';
 import { formatDuration } from '#shared/units/duration.ts';
+import { FACT_SEPARATOR } from '../../ui/fact-separator.ts';
 import { Button } from '../../ui/Button.tsx';
 import { BusyMark } from '../../ui/BusyMark.tsx';
 import { Notice } from '../../ui/Notice.tsx';
@@ -87,11 +88,13 @@ export function StoredRecord({ status, editable, ...acts }: Props) {
       <p>
         <span className="font-[650]">{record.fileName}</span>
         <span className="text-soot-2">
-          {' '}
-          · {SOURCE_WORDS[record.source].toLowerCase()} · {record.count ?? 0} readings
+          {FACT_SEPARATOR}
+          {SOURCE_WORDS[record.source].toLowerCase()}
+          {FACT_SEPARATOR}
+          {record.count ?? 0} readings
           {last === undefined ? '' : ` over ${formatDuration(last - first)}`}
           {record.unit && record.unit !== 'C'
-            ? ` · given in ${record.unit === 'K' ? 'kelvin' : '°F'}`
+            ? `${FACT_SEPARATOR}given in ${record.unit === 'K' ? 'kelvin' : '°F'}`
             : ''}
         </span>
       </p>
