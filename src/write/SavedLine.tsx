@@ -1,7 +1,7 @@
 import { Button } from '../ui/Button.tsx';
 import { Icon } from '../ui/Icon.tsx';
 import { LiveRegion } from '../ui/LiveRegion.tsx';
-import type { SaveState } from './draft-keeper.ts';
+import type { SaveState } from './save-state.ts';
 
 interface Props {
   readonly state: SaveState;

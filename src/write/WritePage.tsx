@@ -17,7 +17,7 @@ import { kilnQueries } from '../kilns/kiln-queries.ts';
 import { ReadOnlyDraft } from './ReadOnlyDraft.tsx';
 import { useDraftActs } from './useDraftActs.ts';
 import { useDraftKeeper } from './useDraftKeeper.ts';
-import type { KeptDraft } from './draft-keeper.ts';
+import type { KeptDraft } from './save-state.ts';
 
 /** One's own note: written here, or, while it cannot be edited, shown with what can be done. */
 export function WritePage() {

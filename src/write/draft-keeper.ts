@@ -1,11 +1,11 @@
 import type { Draft } from '#shared/api/notes.ts';
 import type { NoteFields } from '#shared/note/note-fields.ts';
-import { noteFieldsSchema } from '#shared/note/note-fields.ts';
-import { z } from 'zod';
-import { OfflineError, ProblemError } from '../http/client.ts';
 import { saveDraft } from './draft-mutations.ts';
+import { failedSave } from './failed-save.ts';
 import { sameFields } from './field-differences.ts';
-import { forgetUnsent, keepUnsent, unsentFor, type UnsentWork } from './unsent-work.ts';
+import { pageCopyOf, type PageCopy } from './page-copy.ts';
+import { conflictWith, type KeptDraft } from './save-state.ts';
+import { forgetUnsent, unsentFor, type UnsentWork } from './unsent-work.ts';
 
 /** How long after the last key a save goes out, and how long until it is tried again. */
 const PAUSE_MILLISECONDS = 1200;
@@ -13,59 +13,23 @@ const RETRY_MILLISECONDS = 8000;
 /** Unanswered saves remembered, to know them again if they arrived. */
 const MOST_UNHEARD = 12;
 
-export type SaveState =
-  | { readonly kind: 'saved'; readonly at: string }
-  | { readonly kind: 'waiting' }
-  | { readonly kind: 'saving' }
-  /** Not sent: no network, or the server is away. Tried again by itself. */
-  | { readonly kind: 'unsent'; readonly reason: string; readonly keptHere: boolean }
-  /** Saved elsewhere meanwhile: both versions are shown, and nothing is sent until one is chosen. */
-  | {
-      readonly kind: 'conflict';
-      readonly theirs: NoteFields;
-      readonly theirVersion: number;
-      readonly theirsAt: string;
-    }
-  /** The server refused what was typed, or the note can no longer be edited. */
-  | { readonly kind: 'refused'; readonly reason: string };
-
-export interface KeptDraft {
-  /** What is on the screen. */
-  readonly fields: NoteFields;
-  /** The server's last answer: checks, findings, record, remarks. */
-  readonly draft: Draft;
-  readonly state: SaveState;
-}
-
-const newWriter = (): string => crypto.randomUUID().slice(0, 8);
-
-const staleSchema = z.object({
-  version: z.number(),
-  savedAt: z.string(),
-  fields: noteFieldsSchema,
-});
-
 /**
  * Keeps one note's working copy: what is typed goes into this browser at once and to the server
  * soon after, one save at a time, each on top of the version before. It never overwrites what was
  * saved elsewhere, and never drops what was typed.
  */
 export class DraftKeeper {
-  readonly #memberId: number;
+  readonly #copy: PageCopy;
   #kept: KeptDraft;
   #listeners = new Set<() => void>();
   #timer: ReturnType<typeof setTimeout> | null = null;
   #saving: Promise<void> | null = null;
   #dirty = false;
-  /** This page's own name for the copies it keeps. */
-  readonly #writer = newWriter();
-  /** The page whose copy was taken up; its copy goes when this page's is through. */
-  #takenUp: string | null = null;
   /** Sent without an answer so far: a save may have arrived though its answer was lost. */
   #unheard: NoteFields[] = [];
 
   constructor(memberId: number, draft: Draft) {
-    this.#memberId = memberId;
+    this.#copy = pageCopyOf(memberId, draft.id);
     this.#kept = { fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } };
     if (!draft.abilities.edit) return;
     for (const { writer, work } of unsentFor(memberId, draft.id)) {
@@ -78,19 +42,11 @@ export class DraftKeeper {
   #takeUp(writer: string, work: UnsentWork): void {
     const { draft } = this.#kept;
     this.#dirty = true;
-    this.#takenUp = writer;
+    this.#copy.takeUp(writer);
     this.#kept = {
       ...this.#kept,
       fields: work.fields,
-      state:
-        work.fromVersion === draft.version
-          ? { kind: 'waiting' }
-          : {
-              kind: 'conflict',
-              theirs: draft.fields,
-              theirVersion: draft.version,
-              theirsAt: draft.savedAt,
-            },
+      state: work.fromVersion === draft.version ? { kind: 'waiting' } : conflictWith(draft),
     };
   }
 
@@ -150,18 +106,7 @@ export class DraftKeeper {
     if (this.#dirty) {
       const { fields, draft: before, state } = this.#kept;
       const isSafe = draft.version === before.version || this.#isMineOrBase(draft.fields);
-      this.#set({
-        fields,
-        draft,
-        state: isSafe
-          ? state
-          : {
-              kind: 'conflict',
-              theirs: draft.fields,
-              theirVersion: draft.version,
-              theirsAt: draft.savedAt,
-            },
-      });
+      this.#set({ fields, draft, state: isSafe ? state : conflictWith(draft) });
       return;
     }
     this.#set({ fields: draft.fields, draft, state: { kind: 'saved', at: draft.savedAt } });
@@ -179,7 +124,7 @@ export class DraftKeeper {
     };
     if (choice === 'theirs') {
       this.#dirty = false;
-      this.#forget();
+      this.#copy.forget();
       this.#set({ fields: state.theirs, draft, state: { kind: 'saved', at: state.theirsAt } });
       return;
     }
@@ -191,7 +136,7 @@ export class DraftKeeper {
   /** The note is removed: nothing is sent any more. */
   abandon(): void {
     this.#dirty = false;
-    this.#forget();
+    this.#copy.forget();
     this.close();
   }
 
@@ -208,16 +153,7 @@ export class DraftKeeper {
   }
 
   #keepHere(fields: NoteFields): boolean {
-    const { id, version } = this.#kept.draft;
-    const work = { fromVersion: version, at: new Date().toISOString(), fields };
-    return keepUnsent(this.#memberId, id, work, this.#writer);
-  }
-
-  #forget(): void {
-    for (const writer of [this.#writer, this.#takenUp]) {
-      if (writer !== null) forgetUnsent(this.#memberId, this.#kept.draft.id, writer);
-    }
-    this.#takenUp = null;
+    return this.#copy.keep(fields, this.#kept.draft.version);
   }
 
   #schedule(milliseconds: number): void {
@@ -250,7 +186,7 @@ export class DraftKeeper {
         this.#keepHere(this.#kept.fields);
         this.#schedule(PAUSE_MILLISECONDS);
       } else {
-        this.#forget();
+        this.#copy.forget();
       }
     } catch (error) {
       this.#failed(error);
@@ -258,47 +194,35 @@ export class DraftKeeper {
   }
 
   #failed(error: unknown): void {
-    if (error instanceof ProblemError && error.problem.status === 412) {
-      const current = staleSchema.safeParse(error.problem.current);
-      if (current.success && this.#isMineOrBase(current.data.fields)) {
-        // Nobody else wrote: only the version went on. Mine goes on top of it.
-        const { version, savedAt, fields } = current.data;
-        const draft = { ...this.#kept.draft, version, savedAt, fields };
-        this.#dirty = !sameFields(fields, this.#kept.fields);
-        if (!this.#dirty) this.#forget();
-        this.#set({
-          ...this.#kept,
-          draft,
-          state: this.#dirty ? { kind: 'waiting' } : { kind: 'saved', at: savedAt },
-        });
-        if (this.#dirty) {
-          this.#keepHere(this.#kept.fields);
-          this.#schedule(PAUSE_MILLISECONDS);
-        }
-        return;
-      }
-      if (current.success) {
-        this.#set({
-          ...this.#kept,
-          state: {
-            kind: 'conflict',
-            theirs: current.data.fields,
-            theirVersion: current.data.version,
-            theirsAt: current.data.savedAt,
-          },
-        });
-        return;
-      }
+    const failure = failedSave(error);
+    if (failure.kind === 'stale') {
+      const { current } = failure;
+      if (this.#isMineOrBase(current.fields)) this.#goOnFrom(current);
+      else this.#set({ ...this.#kept, state: conflictWith(current) });
+      return;
     }
+    const { kind, reason } = failure;
     const keptHere = this.#keepHere(this.#kept.fields);
-    const again =
-      error instanceof OfflineError ||
-      (error instanceof ProblemError && [429, 503, 507].includes(error.problem.status));
-    const reason = error instanceof Error ? error.message : 'The save did not work.';
     this.#set({
       ...this.#kept,
-      state: again ? { kind: 'unsent', reason, keptHere } : { kind: 'refused', reason },
+      state: kind === 'again' ? { kind: 'unsent', reason, keptHere } : { kind: 'refused', reason },
     });
-    if (again) this.#schedule(RETRY_MILLISECONDS);
+    if (kind === 'again') this.#schedule(RETRY_MILLISECONDS);
+  }
+
+  /** Nobody else wrote: only the version went on. Mine goes on top of it. */
+  #goOnFrom({ version, savedAt, fields }: Pick<Draft, 'version' | 'savedAt' | 'fields'>): void {
+    const draft = { ...this.#kept.draft, version, savedAt, fields };
+    this.#dirty = !sameFields(fields, this.#kept.fields);
+    if (!this.#dirty) this.#copy.forget();
+    this.#set({
+      ...this.#kept,
+      draft,
+      state: this.#dirty ? { kind: 'waiting' } : { kind: 'saved', at: savedAt },
+    });
+    if (this.#dirty) {
+      this.#keepHere(this.#kept.fields);
+      this.#schedule(PAUSE_MILLISECONDS);
+    }
   }
 }

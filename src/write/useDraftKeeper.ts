@@ -1,6 +1,7 @@
 import { useEffect, useState, useSyncExternalStore } from 'react';
 import type { Draft } from '#shared/api/notes.ts';
-import { DraftKeeper, type KeptDraft } from './draft-keeper.ts';
+import { DraftKeeper } from './draft-keeper.ts';
+import type { KeptDraft } from './save-state.ts';
 
 /** The keeper of one draft for as long as the page is open. Leaving with unsent work asks first. */
 export function useDraftKeeper(memberId: number, draft: Draft): [KeptDraft, DraftKeeper] {
