@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { MAX_RECORD_BYTES } from '#shared/api/records.ts';
 import { recordChoiceSchema } from '#shared/record/record-choice.ts';
 import { defineRoute, pointersOf, reply, type Route } from '../http/define-route.ts';
 import { idParams, idSchema } from '../http/ids.ts';
@@ -22,6 +21,17 @@ const recordParams = z.object({ id: idSchema, recordId: idSchema });
 const ofQuery = z.strictObject({
   of: z.enum(['published', 'handed-in', 'draft']).default('published'),
 });
+
+/** A part of the record, minutes: both ends or neither. */
+const minute = z.coerce.number().min(-100_000).max(100_000);
+const pointsQuery = ofQuery
+  .extend({ from: minute.optional(), to: minute.optional() })
+  .refine(({ from, to }) => (from === undefined) === (to === undefined), {
+    message: 'Give both ends of the part or neither.',
+  })
+  .refine(({ from, to }) => from === undefined || to === undefined || from < to, {
+    message: 'The part ends before it begins.',
+  });
 
 /** The choice of columns arrives as a JSON field beside the file. */
 function choiceOf(field: string | undefined) {
@@ -50,7 +60,7 @@ export const recordRoutes: readonly Route[] = [
         await requireEditableNote(deps.db, request.actor, params.data.id);
         next();
       },
-      readSingleUpload(MAX_RECORD_BYTES, 'A record'),
+      readSingleUpload('record'),
     ],
     async handle({ db, deps, params, request }) {
       const { bytes, fileName, fields } = uploadOf(request);
@@ -112,9 +122,10 @@ export const recordRoutes: readonly Route[] = [
     path: '/api/notes/:id/record',
     access: 'anyone',
     params: idParams,
-    query: ofQuery,
-    async handle({ db, actor, params, query }) {
-      return presentPoints(await readingsFor(db, actor, params.id, query.of));
+    query: pointsQuery,
+    async handle({ db, actor, params, query: { of, from, to } }) {
+      const content = await readingsFor(db, actor, params.id, of);
+      return presentPoints(content, from === undefined || to === undefined ? null : { from, to });
     },
   }),
   defineRoute({

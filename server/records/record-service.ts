@@ -3,6 +3,7 @@ import type { Knex } from 'knex';
 import { chartPoints } from '#shared/firing/strip.ts';
 import type { RecordPoints } from '#shared/api/records.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
+import { thinToColumns } from '#shared/record/thin-to-columns.ts';
 import type { Actor } from '../authorization/actor.ts';
 import { canOnNote } from '../authorization/rules.ts';
 import { inTransaction } from '../database/transaction.ts';
@@ -18,6 +19,8 @@ import { recordCsv } from './record-csv.ts';
 import { chooseAgain, findRecord, insertRecord, type RecordRow } from './record-repository.ts';
 
 const CHART_POINTS = 3000;
+/** The part asked for reaches beyond what is in sight: some 1,300 columns of these are. */
+const DETAIL_COLUMNS = 2000;
 
 async function promiseReading(trx: Knex, recordId: number): Promise<void> {
   await enqueue(trx, 'read-record', `${String(recordId)}:${randomUUID()}`, { recordId });
@@ -134,10 +137,36 @@ async function contentOfRevision(db: Knex, revisionId: number | null): Promise<n
   return row?.record_content_id ?? null;
 }
 
-/** The same, thinned for a chart without losing extremes. */
-export function presentPoints(content: RecordContent): RecordPoints {
-  const thin = (readings: RecordContent['readings']): [number, number][] =>
-    chartPoints(readings, CHART_POINTS).map(({ minute, celsius }) => [minute, celsius]);
+/** In order of time: a file may hold its rows in any. */
+function inOrder(readings: RecordContent['readings']): RecordContent['readings'] {
+  const unordered = readings.some(
+    ({ minute }, index) => minute < (readings[index - 1]?.minute ?? -Infinity),
+  );
+  return unordered ? [...readings].sort((one, other) => one.minute - other.minute) : readings;
+}
+
+/** A part of a record, minutes. */
+export interface MinuteSpan {
+  readonly from: number;
+  readonly to: number;
+}
+
+/**
+ * The same, thinned for a chart without losing extremes: all of it, or as finely as a screen can
+ * show a part of it.
+ */
+export function presentPoints(content: RecordContent, span: MinuteSpan | null): RecordPoints {
+  const thin = (readings: RecordContent['readings']): [number, number][] => {
+    const ordered = inOrder(readings);
+    if (!span) {
+      return chartPoints(ordered, CHART_POINTS).map(({ minute, celsius }) => [minute, celsius]);
+    }
+    const points = ordered.map(({ minute, celsius }): [number, number] => [minute, celsius]);
+    return thinToColumns(points, span.from, span.to, DETAIL_COLUMNS).map(([minute, celsius]) => [
+      Math.round(minute * 1e4) / 1e4,
+      Math.round(celsius * 100) / 100,
+    ]);
+  };
   return {
     points: thin(content.readings),
     secondProbe: content.secondProbe ? thin(content.secondProbe) : null,

@@ -1,8 +1,9 @@
-import { queryOptions } from '@tanstack/react-query';
+import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import { noteListSchema } from '#shared/api/note-rows.ts';
 import { draftSchema, notebookSchema, notePageSchema } from '#shared/api/notes.ts';
 import { recordPointsSchema } from '#shared/api/records.ts';
 import { send } from '../http/client.ts';
+import type { MinuteWindow } from '../ui/chart/minute-window.ts';
 
 export type RecordOf = 'published' | 'handed-in' | 'draft';
 
@@ -38,6 +39,18 @@ export const noteQueries = {
           signal,
         }),
       staleTime: Infinity,
+    }),
+  /** A part of it with all readings a screen can show; meanwhile the part before. */
+  recordPart: (noteId: number, of: RecordOf, revision: number, part: MinuteWindow) =>
+    queryOptions({
+      queryKey: [...noteQueries.all, 'record', noteId, of, revision, part],
+      queryFn: async ({ signal }) => {
+        const ends = `from=${part.from.toFixed(4)}&to=${part.to.toFixed(4)}`;
+        const path = `/api/notes/${String(noteId)}/record?of=${of}&${ends}`;
+        return { part, ...(await send({ path, answer: recordPointsSchema, signal })) };
+      },
+      staleTime: Infinity,
+      placeholderData: keepPreviousData,
     }),
   draft: (noteId: number) =>
     queryOptions({

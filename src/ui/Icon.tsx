@@ -6,6 +6,7 @@ const DRAWINGS = {
   done: 'M2 2h12v12H2zM4.8 8.3l2.3 2.4 4.2-5.2',
   close: 'M3.5 3.5l9 9M12.5 3.5l-9 9',
   add: 'M8 2.5v11M2.5 8h11',
+  less: 'M2.5 8h11',
   copy: 'M2.5 5.5h8v8h-8zM5.5 2.5h8v8',
   up: 'M8 13.5v-11M3.5 7L8 2.5 12.5 7',
   down: 'M8 2.5v11M3.5 9L8 13.5 12.5 9',

@@ -1,143 +1,157 @@
-import { useId, useState } from 'react';
+import { useCallback, useDeferredValue, useId, useMemo } from 'react';
 import { celsiusAt } from '#shared/heat/heat-stops.ts';
-import { formatTemperature } from '#shared/units/temperature.ts';
-import { ChartAxes } from './ChartAxes.tsx';
-import { chartFrame, chartLabels, linePath } from './chart-frame.ts';
-import { ChartKey } from './ChartKey.tsx';
-import { ChartLines } from './ChartLines.tsx';
-import { ChartStretches } from './ChartStretches.tsx';
-import { LabelLanes } from './LabelLanes.tsx';
+import { ChartDrawing } from './chart/ChartDrawing.tsx';
+import { chartFrame, degreesFor, plotWidth } from './chart/chart-frame.ts';
+import { ChartKey } from './chart/ChartKey.tsx';
+import { chartLabels, holdWords } from './chart/chart-labels.ts';
+import { haveRoom, quartzMinuteOf } from './chart/ChartLines.tsx';
+import { ChartReader } from './chart/ChartReader.tsx';
+import { drawnLines, readingsIn, shiftedPoints, wholeWindow } from './chart/drawn-lines.ts';
+import { readOffParts } from './chart/read-off-parts.ts';
+import { ReadingsTable } from './chart/ReadingsTable.tsx';
+import type { RecordChartProps } from './chart/record-chart-props.ts';
+import { smoothLine } from './chart/smooth-line.ts';
+import { useZoom } from './chart/useZoom.ts';
+import { ZoomBar } from './chart/ZoomBar.tsx';
+import type { DrawnMark } from './drawn-mark.ts';
 import { MarkList } from './MarkList.tsx';
-import { ReadAlong } from './ReadAlong.tsx';
-import { readOff } from './read-off.ts';
-import type { RecordChartProps } from './record-chart-props.ts';
-import { ReadOffFlag } from './ReadOffFlag.tsx';
-import { ReadingsTable } from './ReadingsTable.tsx';
 import { useWidth } from './useWidth.ts';
 
 /** So low that sheet, strip and chart of a note share one page. */
 const PAPER_PLOT_PX = 170;
+const NO_MARKS: readonly DrawnMark[] = [];
+const NO_STRETCHES: NonNullable<RecordChartProps['stretches']> = [];
 
-/** A record as temperature over time: ink with its heat beneath, read off by pointer or arrows. */
+/**
+ * A record as temperature over time: readings, their course in ink, its heat beneath. It is read
+ * off by pointer, finger or arrows and looked at more closely by buttons, drag, wheel or keys.
+ */
 export function RecordChart(props: RecordChartProps) {
-  const { points, alt, unit = 'C', targetCelsius = null, secondProbe, overlay } = props;
+  if (props.points.length < 2) {
+    return <p className="border-y border-line py-4 text-small text-soot-2">{props.alt}</p>;
+  }
+  return <Chart {...props} />;
+}
+
+function Chart(props: RecordChartProps) {
+  const { points, alt, unit = 'C', targetCelsius = null, overlay = null, hold = null } = props;
+  const { marks = NO_MARKS, stretches = NO_STRETCHES, detail = null, secondProbe = null } = props;
   const id = useId();
   const [ref, width, onPaper] = useWidth<HTMLDivElement>();
-  const [minute, setMinute] = useState<number | null>(null);
-  if (points.length < 2) {
-    return <p className="border-y border-line py-4 text-small text-soot-2">{alt}</p>;
-  }
-  const shownMarks = props.marks ?? [];
-  const labels = chartLabels(props, width);
-  const frame = chartFrame(props, width, labels.lanes, onPaper ? PAPER_PLOT_PX : undefined);
-  const { xOf, yOf, plot } = frame;
-  const spoken = (at: number) => {
-    const second = secondProbe ? celsiusAt(secondProbe, at) : null;
-    const other = overlay ? celsiusAt(overlay.points, at) : null;
-    return [
-      readOff(points, at, unit),
-      second === null ? '' : `second ${formatTemperature(second, unit)}`,
-      other === null ? '' : `other ${formatTemperature(other, unit)}`,
-    ]
-      .filter(Boolean)
-      .join(' · ');
-  };
+
+  const smooth = useMemo(() => smoothLine(points, marks), [points, marks]);
+  // Dashes would be lost in the unrest of readings: dashed lines are courses.
+  const smoothSecond = useMemo(
+    () => secondProbe && smoothLine(secondProbe, marks),
+    [secondProbe, marks],
+  );
+  const smoothOther = useMemo(
+    () => overlay && shiftedPoints({ ...overlay, points: smoothLine(overlay.points, NO_MARKS) }),
+    [overlay],
+  );
+  const otherPoints = useMemo(() => overlay && shiftedPoints(overlay), [overlay]);
+  const whole = useMemo(
+    () => wholeWindow([points, secondProbe, otherPoints]),
+    [points, secondProbe, otherPoints],
+  );
+  const zoom = useZoom(whole, props.onWindow);
+  // Paper cannot be zoomed out of.
+  const window = onPaper ? whole : zoom.window;
+  const part = window !== whole;
+  const sources = useMemo(
+    () => ({ points, smooth, secondProbe, smoothSecond, overlay: smoothOther, detail }),
+    [points, smooth, secondProbe, smoothSecond, smoothOther, detail],
+  );
+  const lines = useMemo(
+    () => drawnLines(sources, window, plotWidth(width)),
+    [sources, window, width],
+  );
+  const labels = useMemo(() => {
+    const labelled = { marks, stretches, hold };
+    const own = chartLabels(labelled, window, width);
+    // As many lanes as the whole needs, so that nothing jumps when it is looked at more closely.
+    const lanes = part ? Math.max(own.lanes, chartLabels(labelled, whole, width).lanes) : own.lanes;
+    return { ...own, lanes };
+  }, [marks, stretches, hold, window, whole, part, width]);
+  const frame = useMemo(() => {
+    const drawn = [lines.readings, lines.smooth, lines.second, lines.overlay];
+    return chartFrame({
+      window,
+      degrees: degreesFor(drawn, targetCelsius, unit, part ? window : null),
+      unit,
+      width,
+      lanes: labels.lanes,
+      plotHeight: onPaper ? PAPER_PLOT_PX : undefined,
+    });
+  }, [lines, window, targetCelsius, unit, part, width, labels.lanes, onPaper]);
+  const quartzMinute = useMemo(() => quartzMinuteOf(smooth), [smooth]);
+
+  const fine = useMemo(() => readingsIn(sources, window), [sources, window]);
+  const overlayLabel = overlay?.label ?? null;
+  const partsAt = useCallback(
+    (minute: number) =>
+      readOffParts(
+        {
+          ...fine,
+          overlay:
+            otherPoints && overlayLabel !== null
+              ? { points: otherPoints, label: overlayLabel }
+              : null,
+          marks,
+          unit,
+          window,
+        },
+        minute,
+      ),
+    [fine, otherPoints, overlayLabel, marks, unit, window],
+  );
+  const ownAt = useCallback((minute: number) => celsiusAt(fine.points, minute), [fine]);
+  const count = props.count ?? points.length;
+  const rows = useMemo(
+    () => ({
+      ...fine,
+      overlay: otherPoints,
+      thinned: fine.points === points && count > points.length,
+    }),
+    [fine, otherPoints, points, count],
+  );
+  const tabled = useDeferredValue({ rows, window });
+  const toShow = hold ? [...stretches, { ...hold, label: holdWords(hold) }] : stretches;
 
   return (
     <figure className="whole-in-print">
+      <ZoomBar zoom={zoom} stretches={toShow} />
       <div ref={ref} className="relative">
-        <svg
-          role="img"
-          aria-label={alt}
-          viewBox={`0 0 ${width} ${frame.height}`}
-          className="ink-drawing block h-auto w-full overflow-visible"
-        >
-          <ChartAxes frame={frame} unit={unit} />
-          <ChartStretches
-            id={id}
-            frame={frame}
-            stretches={props.stretches ?? []}
-            hold={props.hold ?? null}
-          />
-          <ChartLines id={id} frame={frame} props={props} />
-          {shownMarks.map((mark, index) => {
-            const celsius = celsiusAt(points, mark.minute);
-            if (celsius === null) return null;
-            const [x, y] = [xOf(mark.minute), yOf(celsius)];
-            return (
-              <g key={index} aria-hidden="true">
-                <path
-                  className="stroke-soot-2"
-                  strokeDasharray="2 3"
-                  d={`M${x} ${plot.top}V${y}`}
-                />
-                <path
-                  className="fill-ash stroke-soot"
-                  strokeWidth="1.5"
-                  d={`M${x} ${y - 5}l5 5-5 5-5-5z`}
-                />
-              </g>
-            );
-          })}
-          {targetCelsius !== null && (
-            <g aria-hidden="true">
-              <path
-                className="stroke-soot"
-                strokeDasharray="7 4"
-                d={`M${plot.left} ${yOf(targetCelsius)}H${plot.right}`}
-              />
-              <text
-                className="fill-soot stroke-ash font-sans"
-                paintOrder="stroke"
-                strokeWidth="4"
-                fontSize="13"
-                x={plot.left + 6}
-                y={yOf(targetCelsius) - 6}
-              >
-                target {formatTemperature(targetCelsius, unit)}
-              </text>
-            </g>
-          )}
-          <LabelLanes placed={labels.placed} texts={labels.texts} baseY={plot.top} />
-          {minute !== null && (
-            <>
-              <ReadOffFlag
-                x={xOf(minute)}
-                top={plot.top}
-                height={plot.bottom - plot.top}
-                width={width}
-                text={spoken(minute)}
-              />
-              <path
-                className="fill-verdigris stroke-ash"
-                strokeWidth="2"
-                d={
-                  linePath([[minute, celsiusAt(points, minute) ?? 0]], xOf, yOf) +
-                  'm-6 0l6-6 6 6-6 6z'
-                }
-              />
-            </>
-          )}
-        </svg>
-        <div className="pointer-events-none absolute inset-y-0 right-[8px] left-[58px] *:pointer-events-auto">
-          <ReadAlong
-            label="Read along the curve"
-            fromMinute={frame.startMinute}
-            toMinute={frame.endMinute}
-            minute={minute}
-            valueText={spoken(minute ?? frame.startMinute)}
-            onMinute={setMinute}
-          />
-        </div>
-      </div>
-      {labels.numbered && <MarkList marks={shownMarks} />}
-      {(secondProbe || overlay) && (
-        <ChartKey
-          second={secondProbe != null}
-          {...(overlay ? { overlayLabel: overlay.label } : {})}
+        <ChartDrawing
+          id={id}
+          alt={alt}
+          frame={frame}
+          lines={lines}
+          labels={labels}
+          unit={unit}
+          stretches={stretches}
+          hold={hold}
+          marks={marks}
+          targetCelsius={targetCelsius}
+          overlayLabel={overlayLabel}
+          quartzMinute={quartzMinute}
         />
-      )}
-      <ReadingsTable points={points} unit={unit} />
+        <ChartReader frame={frame} zoom={zoom} partsAt={partsAt} celsiusAt={ownAt} />
+      </div>
+      {labels.numbered && <MarkList marks={marks} />}
+      <ChartKey
+        single={haveRoom(lines.readings, width)}
+        second={secondProbe !== null}
+        overlayLabel={overlayLabel}
+      />
+      <ReadingsTable
+        sources={tabled.rows}
+        window={tabled.window}
+        unit={unit}
+        count={count}
+        overlayLabel={overlayLabel}
+        csvHref={props.csvHref ?? null}
+      />
     </figure>
   );
 }

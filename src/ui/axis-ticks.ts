@@ -1,4 +1,4 @@
-const MINUTE_STEPS = [1, 2, 5, 10, 15, 20, 30, 60, 120, 240, 480, 1440];
+const MINUTE_STEPS = [0.5, 1, 2, 5, 10, 15, 20, 30, 60, 120, 240, 480, 1440];
 const DEGREE_STEPS = [10, 20, 50, 100, 200, 500];
 
 /** The finest step of a list that leaves each of its ticks `room` px; the coarsest if none does. */

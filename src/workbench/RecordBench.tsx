@@ -7,9 +7,14 @@ import { KilnSection } from '../ui/KilnSection.tsx';
 import { RecordChart } from '../ui/RecordChart.tsx';
 import { Bench } from './Bench.tsx';
 import {
-  QUICK,
+  COMPARED,
+  FIFTY_THOUSAND,
+  GUST,
+  HELD,
   SAGGED,
+  SAG_AND_STALL,
   SECOND_PROBE,
+  STALL,
   STALLED_MARKS,
   STALLED_THEN_WENT_ON,
 } from './invented-records.ts';
@@ -26,8 +31,8 @@ export function RecordBench() {
           points={STALLED_THEN_WENT_ON}
           alt="Climbs to 708 °C in 29 min, stays there 17 min, goes on to 1006 °C in 61 min, held 5 min."
           targetCelsius={1005}
-          hold={{ fromMinute: 61, toMinute: 66 }}
-          stretches={[{ fromMinute: 29, toMinute: 46, label: 'stall 708\u00a0°C, 17\u00a0min' }]}
+          hold={HELD}
+          stretches={STALL}
           marks={STALLED_MARKS}
           secondProbe={SECOND_PROBE}
           unit={unit}
@@ -37,14 +42,12 @@ export function RecordBench() {
           points={SAGGED}
           alt="Climbs to 715 °C in 31 min, falls to 688 °C, regains 716 °C and is given up."
           targetCelsius={1000}
-          stretches={[
-            { fromMinute: 31, toMinute: 38, label: 'sag to 688\u00a0°C' },
-            { fromMinute: 48, toMinute: 57, label: 'stall 714\u00a0°C, 9\u00a0min' },
-          ]}
-          marks={[{ minute: 33, label: 'gust' }]}
-          overlay={{ points: QUICK, label: 'the firing after it, wind shelter up' }}
+          stretches={SAG_AND_STALL}
+          marks={GUST}
+          overlay={COMPARED}
           unit={unit}
         />
+        <RecordChart points={FIFTY_THOUSAND} alt="Fifty thousand readings." unit={unit} />
         <RecordChart points={[]} alt="No record: fired by eye." />
       </Bench>
       <Bench title="Firing sheet">

@@ -1,4 +1,5 @@
 import type { HeatPoint } from '#shared/heat/heat-stops.ts';
+import type { ComparedRecord, DrawnStretch } from '../ui/chart/record-chart-props.ts';
 import type { DrawnMark } from '../ui/drawn-mark.ts';
 
 /** A climb through given minutes and °C, read every half minute, with a probe's small unrest. */
@@ -72,3 +73,30 @@ export const COLD = read([
   [20, 180],
   [44, 390],
 ]);
+
+/** A reading a second for fourteen hours, with a probe's noise, a blip and a drop of one second each. */
+export const FIFTY_THOUSAND: readonly HeatPoint[] = Array.from(
+  { length: 50_000 },
+  (_, second): HeatPoint => {
+    const minute = second / 60;
+    const climb = 18 + 1150 * (1 - Math.exp(-minute / 260)) - 60 * Math.sin(minute / 40);
+    const noise = 3 * Math.sin(second * 12.9898) + 2 * Math.sin(second * 78.233);
+    const wild = second === 21_000 ? 140 : second === 33_333 ? -170 : 0;
+    return [minute, Math.round((climb + noise + wild) * 10) / 10];
+  },
+);
+export const STALL: readonly DrawnStretch[] = [
+  { fromMinute: 29, toMinute: 46, label: 'stall 708\u00a0°C, 17\u00a0min' },
+];
+export const SAG_AND_STALL: readonly DrawnStretch[] = [
+  { fromMinute: 31, toMinute: 38, label: 'sag to 688\u00a0°C' },
+  { fromMinute: 48, toMinute: 57, label: 'stall 714\u00a0°C, 9\u00a0min' },
+];
+export const HELD = { fromMinute: 61, toMinute: 66 };
+export const GUST: readonly DrawnMark[] = [{ minute: 33, label: 'gust' }];
+/** Its own minutes begin seven before it was lit. */
+export const COMPARED: ComparedRecord = {
+  points: QUICK.map(([minute, celsius]): HeatPoint => [minute + 7, celsius]),
+  label: 'next firing, “Wind shelter up”',
+  shiftMinutes: -7,
+};

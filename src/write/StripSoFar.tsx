@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import { stripSignature } from '#shared/firing/strip.ts';
 import { stripWords } from '#shared/firing/strip-words.ts';
 import type { StoredReadings } from '#shared/note/read-note.ts';
-import { drawnMarks, holdOf } from '../notes/NoteRecord.tsx';
+import { drawnMarks, holdOf } from '../notes/drawn-findings.ts';
 import { GlowStrip } from '../ui/GlowStrip.tsx';
 import { HeatLegend } from '../ui/HeatLegend.tsx';
 import { useWriteForm } from './form-context.ts';

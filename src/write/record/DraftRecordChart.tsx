@@ -4,8 +4,11 @@ import type { FiringRecord } from '#shared/api/records.ts';
 import { stripSignature } from '#shared/firing/strip.ts';
 import { stripWords } from '#shared/firing/strip-words.ts';
 import { formatDuration } from '#shared/units/duration.ts';
-import { drawnMarks, holdOf, stretchesOf } from '../../notes/NoteRecord.tsx';
+import { CompareMenu } from '../../notes/CompareMenu.tsx';
 import { noteQueries } from '../../notes/note-queries.ts';
+import { useComparedRecord } from '../../notes/useComparedRecord.ts';
+import { useDrawnFindings } from '../../notes/useDrawnFindings.ts';
+import { useRecordDetail } from '../../notes/useRecordDetail.ts';
 import { Button } from '../../ui/Button.tsx';
 import { HeatLegend } from '../../ui/HeatLegend.tsx';
 import { Notice } from '../../ui/Notice.tsx';
@@ -34,6 +37,11 @@ export function DraftRecordChart({ record }: { readonly record: FiringRecord | n
   // What this browser reads while typing; for a stored record perhaps only the server has read it.
   const findings = reading.reading ? reading.findings : draft.findings;
 
+  const { detail, onWindow } = useRecordDetail(draft.id, 'draft', recordId ?? 0, stored.data);
+  const drawn = useDrawnFindings(findings, marks, units);
+  const own = useMemo(() => ({ points: points ?? [], marks: drawn.marks }), [points, drawn.marks]);
+  const compared = useComparedRecord({ earlier: draft.earlier, next: null }, own);
+
   if (recordId !== null && record?.status !== 'ready') return null;
   if (points === null) return <Skeleton words="The record is being fetched" shape="strip" />;
   const first = points[0];
@@ -58,11 +66,21 @@ export function DraftRecordChart({ record }: { readonly record: FiringRecord | n
         alt={alt}
         unit={units.temperature}
         targetCelsius={fields.plan.targetCelsius}
-        hold={holdOf(findings)}
-        stretches={stretchesOf(findings, units)}
-        marks={drawnMarks(marks)}
+        hold={drawn.hold}
+        stretches={drawn.stretches}
+        marks={drawn.marks}
+        overlay={compared.overlay}
+        detail={recordId === null ? null : detail}
+        onWindow={onWindow}
+        {...(recordId !== null && stored.data
+          ? {
+              count: stored.data.count,
+              csvHref: `/api/notes/${String(draft.id)}/record.csv?of=draft`,
+            }
+          : {})}
       />
       <HeatLegend unit={units.temperature} withSentence />
+      <CompareMenu compared={compared} />
       <LevelAnswers findings={findings} />
     </div>
   );

@@ -39,8 +39,10 @@ interface BandProps {
 }
 
 function Band({ span, frame, fill }: BandProps) {
-  const { xOf, plot } = frame;
-  const [from, to] = [xOf(span.fromMinute), xOf(span.toMinute)];
+  const { xOf, plot, startMinute, endMinute } = frame;
+  if (span.toMinute < startMinute || span.fromMinute > endMinute) return null;
+  const from = xOf(Math.max(startMinute, span.fromMinute));
+  const to = xOf(Math.min(endMinute, span.toMinute));
   return (
     <>
       <rect

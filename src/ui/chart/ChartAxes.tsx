@@ -1,7 +1,7 @@
 import type { TemperatureUnit } from '#shared/units/temperature.ts';
-import { degreeTicks, minuteTicks } from './axis-ticks.ts';
+import { degreeTicks, minuteTicks } from '../axis-ticks.ts';
 import type { ChartFrame } from './chart-frame.ts';
-import { MinuteRuler } from './MinuteRuler.tsx';
+import { MinuteRuler } from '../MinuteRuler.tsx';
 
 interface Props {
   readonly frame: ChartFrame;
