@@ -1,5 +1,6 @@
 import type { RequestHandler } from 'express';
 import multer from 'multer';
+import { tooLargeWords, UPLOAD_LIMITS, type UploadKind } from '#shared/upload-limits.ts';
 import { AppError } from './problem.ts';
 
 /** The one file of a multipart request, held in memory, and its text fields. */
@@ -10,8 +11,10 @@ export interface Upload {
   readonly fields: Readonly<Record<string, string>>;
 }
 
-/** Reads one file called `file` of at most `bytes`, and at most 10 small text fields. */
-export function readSingleUpload(maxBytes: number, what: string): RequestHandler {
+/** Reads one file called `file` within the limit of its kind, and at most 10 small text fields. */
+export function readSingleUpload(kind: UploadKind): RequestHandler {
+  const maxBytes = UPLOAD_LIMITS[kind].bytes;
+  const tooLarge = () => new AppError('too-large', tooLargeWords(kind));
   const read = multer({
     storage: multer.memoryStorage(),
     limits: {
@@ -31,12 +34,12 @@ export function readSingleUpload(maxBytes: number, what: string): RequestHandler
     }
     const declared = Number(request.get('Content-Length') ?? 0);
     if (declared > maxBytes + 300_000) {
-      next(tooLarge(maxBytes, what));
+      next(tooLarge());
       return;
     }
     read(request, response, (error: unknown) => {
       if (error instanceof multer.MulterError && error.code === 'LIMIT_FILE_SIZE') {
-        next(tooLarge(maxBytes, what));
+        next(tooLarge());
       } else if (error instanceof multer.MulterError && error.code.startsWith('LIMIT_')) {
         next(new AppError('too-large', 'One file and at most 10 fields a request.'));
       } else if (error) {
@@ -46,13 +49,6 @@ export function readSingleUpload(maxBytes: number, what: string): RequestHandler
       }
     });
   };
-}
-
-function tooLarge(maxBytes: number, what: string): AppError {
-  return new AppError(
-    'too-large',
-    `${what} may have at most ${String(maxBytes / 1024 / 1024)} MiB.`,
-  );
 }
 
 /** The upload a request brought. @throws AppError when it brought none. */

@@ -1,6 +1,5 @@
 import type { RequestHandler } from 'express';
 import { z } from 'zod';
-import { MAX_PICTURE_BYTES } from '#shared/api/pictures.ts';
 import { pictureNameSchema } from '#shared/note/story.ts';
 import type { Deps } from '../deps.ts';
 import { defineRoute, memberOf, reply, type Route } from '../http/define-route.ts';
@@ -28,7 +27,7 @@ const uploadAfter =
       await check(deps.db, request.actor, params.data.id);
       next();
     },
-    readSingleUpload(MAX_PICTURE_BYTES, 'A picture'),
+    readSingleUpload('picture'),
   ];
 
 /** If-None-Match by its weak comparison (RFC 9110 section 13.1.2). */

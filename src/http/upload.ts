@@ -1,9 +1,11 @@
 import type { z } from 'zod';
 import { problemSchema } from '#shared/api/problem.ts';
+import { whyTooLarge, type UploadKind } from '#shared/upload-limits.ts';
 import { changeHeaders, forgetToken, OfflineError, ProblemError } from './client.ts';
 
 export interface UploadOptions<Schema extends z.ZodType> {
   readonly path: string;
+  readonly kind: UploadKind;
   readonly file: Blob;
   readonly fileName: string;
   readonly fields?: Readonly<Record<string, string>>;
@@ -13,10 +15,23 @@ export interface UploadOptions<Schema extends z.ZodType> {
   readonly signal?: AbortSignal;
 }
 
-/** Sends one file with progress and a way to cancel, which fetch cannot tell of yet. */
+/** A file that the server would refuse for its size: a browser may take that for a lost network. */
+export class TooLargeError extends Error {
+  constructor(words: string) {
+    super(words);
+    this.name = 'TooLargeError';
+  }
+}
+
+/**
+ * Sends one file with progress and a way to cancel, which fetch cannot tell of yet.
+ * @throws TooLargeError before anything is sent
+ */
 export async function upload<Schema extends z.ZodType>(
   options: UploadOptions<Schema>,
 ): Promise<z.output<Schema>> {
+  const because = whyTooLarge(options.kind, options.file.size);
+  if (because !== null) throw new TooLargeError(because);
   try {
     return await uploadOnce(options);
   } catch (error) {

@@ -1,7 +1,8 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useRef, useState, type ChangeEvent } from 'react';
 import type { Kiln } from '#shared/api/kilns.ts';
-import { MAX_PICTURE_BYTES, PICTURE_ACCEPT, pictureSchema } from '#shared/api/pictures.ts';
+import { PICTURE_ACCEPT, pictureSchema } from '#shared/api/pictures.ts';
+import { whyTooLarge } from '#shared/upload-limits.ts';
 import { upload } from '../http/upload.ts';
 import { Button } from '../ui/Button.tsx';
 import { ProgressBar } from '../ui/ProgressBar.tsx';
@@ -14,10 +15,7 @@ function whyNot(file: File): string | null {
   if (/hei[cf]/i.test(file.type) || /\.hei[cf]$/i.test(file.name)) {
     return 'This picture is in the phone’s own format (HEIC). Choose it from the gallery once more, or save it as JPEG first.';
   }
-  if (file.size > MAX_PICTURE_BYTES) {
-    return `This picture is larger than ${String(MAX_PICTURE_BYTES / 1024 / 1024)} MB.`;
-  }
-  return null;
+  return whyTooLarge('picture', file.size);
 }
 
 /** The kiln's picture, and the way to give it another. */
@@ -34,6 +32,7 @@ export function KilnPicture({ kiln }: { readonly kiln: Kiln }) {
       setShare(0);
       return upload({
         path: kilnPath(kiln.id, '/picture'),
+        kind: 'picture',
         file,
         fileName: file.name,
         answer: pictureSchema,

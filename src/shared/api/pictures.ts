@@ -4,7 +4,6 @@ import { pictureNameSchema } from '../note/story.ts';
 /** Widths of the stored WebP sizes, px; smaller originals are not enlarged. */
 export const PICTURE_WIDTHS = [480, 960, 1920] as const;
 export const MAX_PICTURES = 20;
-export const MAX_PICTURE_BYTES = 16 * 1024 * 1024;
 export const MAX_PICTURE_PIXELS = 40_000_000;
 /** For the file chooser: an iPhone then hands over a JPEG instead of HEIC. */
 export const PICTURE_ACCEPT = 'image/jpeg,image/png,image/webp';

@@ -2,9 +2,6 @@ import { z } from 'zod';
 import { recordChoiceSchema } from '../record/record-choice.ts';
 import { stripPointsSchema } from './note-rows.ts';
 
-export const MAX_RECORD_BYTES = 10 * 1024 * 1024;
-export const MAX_RECORD_ROWS = 200_000;
-
 /**
  * A stored record and how far its reading has come. The file is kept whole by content hash; reading
  * happens off the request path.

@@ -1,4 +1,6 @@
 import { useRef } from 'react';
+import { RECORD_LIMITS } from '#shared/record/record-limits.ts';
+import { formatFileSize } from '#shared/units/file-size.ts';
 import { Button } from '../../ui/Button.tsx';
 
 interface Props {
@@ -29,8 +31,9 @@ export function ChooseFile({ onFile, busy }: Props) {
         Choose a CSV file
       </Button>
       <p className="max-w-measure text-small text-soot-2">
-        Or drop it anywhere on this page. Any logger’s table of text: CSV, TSV or the like, at most
-        10&nbsp;MiB and 200,000 rows. It is looked at here first and sent when you say so.
+        Or drop it anywhere on this page. Any logger’s table of text: CSV, TSV or the like, at most{' '}
+        {formatFileSize(RECORD_LIMITS.bytes)} and {RECORD_LIMITS.rows.toLocaleString('en-GB')} rows.
+        It is looked at here first and sent when you say so.
       </p>
     </div>
   );

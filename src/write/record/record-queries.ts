@@ -36,6 +36,7 @@ export function sendRecord(
 ): Promise<FiringRecord> {
   return upload({
     path: `/api/notes/${String(noteId)}/records`,
+    kind: 'record',
     file: source.file ?? new Blob([source.text], { type: 'text/csv' }),
     fileName: source.fileName,
     fields: { source: source.source, choice: JSON.stringify(choice) },

@@ -6,7 +6,7 @@ import { parsePastedRows } from '#shared/record/parse-pasted-rows.ts';
 import type { SkippedLine } from '#shared/record/read-table.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
 import { RecordError } from '#shared/record/record-error.ts';
-import { RECORD_LIMITS } from '#shared/record/record-limits.ts';
+import { whyTooLarge } from '#shared/upload-limits.ts';
 import { formatTemperature } from '#shared/units/temperature.ts';
 import type { TemperatureUnit } from '#shared/units/temperature.ts';
 
@@ -59,9 +59,8 @@ export function sourceOf(
  */
 export async function sourceOfFile(file: File): Promise<RecordSource> {
   if (file.size === 0) throw new RecordError('This file is empty.');
-  if (file.size > RECORD_LIMITS.bytes) {
-    throw new RecordError('The file is larger than 10 MiB, the most a record may be.');
-  }
+  const tooLarge = whyTooLarge('record', file.size);
+  if (tooLarge !== null) throw new RecordError(tooLarge);
   const bytes = new Uint8Array(await file.arrayBuffer());
   // A spreadsheet's own file is a ZIP (PK) or an older compound file (D0 CF 11 E0).
   const [a, b, c, d] = bytes;

@@ -1,5 +1,6 @@
 import { useEffect, useEffectEvent, useRef, useState } from 'react';
-import { MAX_PICTURE_BYTES, pictureSchema, type Picture } from '#shared/api/pictures.ts';
+import { pictureSchema, type Picture } from '#shared/api/pictures.ts';
+import { whyTooLarge } from '#shared/upload-limits.ts';
 import { ProblemError } from '../../http/client.ts';
 import { upload } from '../../http/upload.ts';
 
@@ -40,6 +41,7 @@ export function usePictureUploads(noteId: number, onPicture: (picture: Picture) 
     try {
       const picture = await upload({
         path: `/api/notes/${String(noteId)}/pictures`,
+        kind: 'picture',
         file,
         fileName: file.name || 'picture',
         answer: pictureSchema,
@@ -74,14 +76,15 @@ export function usePictureUploads(noteId: number, onPicture: (picture: Picture) 
     add: (files: readonly File[]): void => {
       const added = files.map((file): PictureUpload => {
         nextId.current += 1;
+        const tooLarge = whyTooLarge('picture', file.size);
         return {
           id: nextId.current,
           file,
           // What the server would refuse anyway is not sent first.
           state:
-            file.size > MAX_PICTURE_BYTES
-              ? { kind: 'failed', reason: 'A picture may have at most 16 MiB.', again: false }
-              : { kind: 'waiting' },
+            tooLarge === null
+              ? { kind: 'waiting' }
+              : { kind: 'failed', reason: tooLarge, again: false },
         };
       });
       setUploads((all) => [...all, ...added]);

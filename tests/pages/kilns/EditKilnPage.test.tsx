@@ -86,4 +86,16 @@ describe('EditKilnPage', () => {
     await waitFor(() => expect(name).toHaveAccessibleDescription(/no member called “Nobdoy”/));
     expect(name).toHaveValue('Nobdoy');
   });
+
+  it('sends no picture that is too large, and says the limit and its size', async () => {
+    const sent = answerFetch({ ...SIGNED_IN, 'GET /api/kilns/4': ok(aKiln(3)) });
+    renderPages(ROUTES, '/kilns/4/edit');
+    const file = new File(['x'], 'large.jpg', { type: 'image/jpeg' });
+    Object.defineProperty(file, 'size', { value: 17.3 * 1024 * 1024 });
+    await userEvent.upload(await screen.findByLabelText('Picture of the kiln'), file);
+    expect(await screen.findByRole('alert')).toHaveTextContent(
+      'A picture may have at most 16 MiB; this one has 17.3 MiB.',
+    );
+    expect(sent.filter(({ method }) => method !== 'GET')).toEqual([]);
+  });
 });
