@@ -13,6 +13,7 @@ import { SmallGlowStrip } from '../ui/SmallGlowStrip.tsx';
 import { usePageTitle } from '../ui/usePageTitle.ts';
 import { deskQueries } from './desk-queries.ts';
 import { clockWords, waitingWords } from './desk-words.ts';
+import { DisputedFindings } from './DisputedFindings.tsx';
 
 type Row = DeskQueue['waiting'][number];
 
@@ -60,6 +61,9 @@ export function DeskPage() {
           <HeatLegend unit={units.temperature} withSentence />
         </>
       )}
+      <div className="pt-8">
+        <DisputedFindings units={units} />
+      </div>
     </div>
   );
 }

@@ -1,11 +1,11 @@
 import type { RefObject } from 'react';
 import type { DeskNote } from '#shared/api/desk.ts';
-import { findingText } from '#shared/firing/findings.ts';
 import type { Units } from '#shared/units/units.ts';
 import { Button } from '../ui/Button.tsx';
 import { Disclosure } from '../ui/Disclosure.tsx';
 import { Icon } from '../ui/Icon.tsx';
 import { actWords } from './desk-words.ts';
+import { FindingList } from '../notes/FindingList.tsx';
 import { momentWords } from '../notes/note-words.ts';
 import { rangesIn } from './passage-ranges.ts';
 import { pinWords } from './remark-pins.ts';
@@ -85,16 +85,9 @@ export function WhatToLookAt({ data, units, noteRef, onRemark }: Props) {
         {data.findings.length === 0 ? (
           <p className="text-small text-soot-2">Nothing: there is no record to read.</p>
         ) : (
-          <ul className="border-t border-soot-2 text-small">
-            {data.findings.map((finding) => (
-              <li
-                key={`${finding.code}${String(finding.fromMinute)}`}
-                className={`border-b border-line py-1.5 ${finding.trouble ? 'font-[600]' : ''}`}
-              >
-                {findingText(finding, units)}
-              </li>
-            ))}
-          </ul>
+          <div className="border-t border-soot-2">
+            <FindingList page={data.page} units={units} />
+          </div>
         )}
       </div>
       {data.earlierDecisions.length > 0 && (

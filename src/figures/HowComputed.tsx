@@ -33,6 +33,11 @@ export function HowComputed({ changesShown }: { readonly changesShown: number })
           few to say.
         </p>
         <p>
+          <strong className="font-[650]">Disputed findings.</strong> An author may disagree with
+          what was read off a record. Such a finding leaves every figure at once and is counted as
+          disputed, until a moderator has looked and restores it.
+        </p>
+        <p>
           <strong className="font-[650]">Missing follow-ons.</strong> Whoever gave up may not have
           written again. Beside a share stands what it would be if every firing whose outcome is not
           known had failed.

@@ -10,6 +10,7 @@ interface Props {
 
 /** Each trouble with the share of notes that had it, as a rule of that length: cold, no heat. */
 export function TroubleRail({ shares, toTrouble }: Props) {
+  const anyDisputed = shares.troubles.some(({ disputed }) => disputed > 0);
   const most = Math.max(1, ...shares.troubles.map(({ notes }) => notes));
   return (
     <section aria-labelledby="troubles" className="space-y-4">
@@ -18,10 +19,10 @@ export function TroubleRail({ shares, toTrouble }: Props) {
       </h2>
       <p className="text-small text-soot-2">
         Share of {shares.notes} notes by {shares.members} members that had each trouble, found in
-        the record or named by the author.
+        the record or named by the author.{anyDisputed && ' Disputed findings are counted apart.'}
       </p>
       <ul className="grid grid-cols-1 gap-x-10 border-t border-soot sm:grid-cols-2 lg:grid-cols-3">
-        {shares.troubles.map(({ trouble, notes }) => (
+        {shares.troubles.map(({ trouble, notes, disputed }) => (
           <li key={trouble} className="border-b border-line">
             <Link
               to={toTrouble(trouble)}
@@ -44,6 +45,7 @@ export function TroubleRail({ shares, toTrouble }: Props) {
               </svg>
               <span className="reading w-20 shrink-0 text-right text-note text-soot-2">
                 {notes} of {shares.notes}
+                {disputed > 0 && <span className="block">{disputed} disputed</span>}
               </span>
             </Link>
           </li>

@@ -102,6 +102,13 @@ function Figures({ helped }: { readonly helped: WhatHelped }) {
           table={table}
         />
       ))}
+      {helped.disputed > 0 && (
+        <p className="max-w-measure text-small">
+          {helped.disputed === 1 ? 'One note' : `${String(helped.disputed)} notes`} disputed: the
+          author disagrees that the record shows it. {helped.disputed === 1 ? 'It is' : 'They are'}{' '}
+          in none of these figures.
+        </p>
+      )}
       <DuringTheFiring helped={helped} units={units} />
       {tables.length > 0 && <HowComputed changesShown={shown} />}
       <CautionNote>

@@ -9,7 +9,14 @@ import type { Units } from '#shared/units/units.ts';
 import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Reading } from '../ui/Reading.tsx';
 import { SmallGlowStrip } from '../ui/SmallGlowStrip.tsx';
-import { changeWords, dayWords, outcomeWords, rowFigures, troubleWords } from './note-words.ts';
+import {
+  changeWords,
+  dayWords,
+  disputedWords,
+  outcomeWords,
+  rowFigures,
+  troubleWords,
+} from './note-words.ts';
 
 interface Props {
   readonly row: NoteRow;
@@ -24,6 +31,7 @@ interface Props {
 export function NoteRowItem({ row, units, scaleMinutes, children, headingLevel = 3 }: Props) {
   const Heading = `h${headingLevel}` as const;
   const troubles = troubleWords(row, units);
+  const disputed = disputedWords(row);
   return (
     <li className="grid gap-x-8 gap-y-2 border-b border-line py-5 sm:grid-cols-[minmax(0,17rem)_minmax(0,1fr)]">
       <div>
@@ -60,6 +68,7 @@ export function NoteRowItem({ row, units, scaleMinutes, children, headingLevel =
         {troubles.length > 0 && (
           <p className="text-small font-[600]">{troubles.join(FACT_SEPARATOR)}</p>
         )}
+        {disputed !== null && <p className="text-small text-soot-2">{disputed}</p>}
         {children}
         <NextLine row={row} units={units} />
       </div>

@@ -18,7 +18,7 @@ import { NoteRecord } from './NoteRecord.tsx';
 import { NoteRows } from './NoteRows.tsx';
 import { NoteStory } from './NoteStory.tsx';
 import { SeriesLinks } from './SeriesLinks.tsx';
-import { changeWords, dayWords, troubleWords } from './note-words.ts';
+import { changeWords, dayWords, disputedWords, troubleWords } from './note-words.ts';
 import type { RecordOf } from './note-queries.ts';
 import { sheetGroups } from './sheet-groups.ts';
 
@@ -34,6 +34,7 @@ interface Props {
 export function NoteView({ page, units, recordOf = 'published', aside }: Props) {
   const { row, fields, kiln } = page;
   const troubles = troubleWords(row, units);
+  const disputed = disputedWords(row);
   return (
     <article className="space-y-12 print:space-y-5">
       <header className="space-y-5 print:space-y-2.5">
@@ -74,6 +75,7 @@ export function NoteView({ page, units, recordOf = 'published', aside }: Props) 
           </>
         )}
         <p className="max-w-measure text-lead">{inShort(page.summary, units).join(' ')}</p>
+        {disputed !== null && <p className="text-small text-soot-2">{disputed}</p>}
         {troubles.length > 0 && (
           <p className="text-small">
             <span className="text-soot-2">Troubles: </span>

@@ -54,6 +54,14 @@ export function troubleWords(row: NoteRow, units: Units): string[] {
   });
 }
 
+/** Troubles that the record shows by disputed findings only: told apart, for they count nowhere. */
+export function disputedWords(row: NoteRow): string | null {
+  const disputed = row.disputedTroubles ?? [];
+  return disputed.length === 0
+    ? null
+    : `Disputed by the author: ${disputed.map((trouble) => TROUBLE_SHORT[trouble]).join(', ')}`;
+}
+
 /** What came of it: "gone", "not gone", or null when it cannot be said. */
 export function outcomeWords(followOn: FollowOn): string | null {
   const said = followOn.outcomes.filter(({ outcome }) => outcome !== 'cannot-say');

@@ -152,7 +152,13 @@ export function DraftForm({
           <PlanSection />
         </FormSlice>
         <FormSlice
-          {...slice(['/record'], fields.record, fields.plan.targetCelsius, reading.reading)}
+          {...slice(
+            ['/record', '/findingDisputes'],
+            fields.record,
+            fields.findingDisputes,
+            fields.plan.targetCelsius,
+            reading.reading,
+          )}
         >
           <div data-pointer="/record">
             <RecordSection />

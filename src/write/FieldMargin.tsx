@@ -2,6 +2,7 @@ import { useMutation } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
 import type { Remark } from '#shared/api/notes.ts';
 import { findingText, type Finding } from '#shared/firing/findings.ts';
+import { disputeAbout } from '#shared/note/finding-disputes.ts';
 import { momentWords } from '../notes/note-words.ts';
 import { CheckField } from '../ui/CheckField.tsx';
 import { useMessages } from '../ui/useMessages.ts';
@@ -60,7 +61,7 @@ interface Props {
 
 /** Under the checks in the margin: what was read off the record about this field, and the desk's words. */
 export function FieldMargin({ findings, remarks }: Props) {
-  const { units } = useWriteForm();
+  const { units, fields, reading } = useWriteForm();
   return (
     <div className="space-y-2 pt-1">
       {findings.length > 0 && (
@@ -69,6 +70,9 @@ export function FieldMargin({ findings, remarks }: Props) {
             <li key={`${finding.code}-${String(finding.fromMinute)}`}>
               <span className="text-soot-2">Read off: </span>
               {findingText(finding, units)}
+              {disputeAbout(finding, reading.findings, fields.findingDisputes) && (
+                <span className="text-soot-2"> You disagree.</span>
+              )}
             </li>
           ))}
         </ul>

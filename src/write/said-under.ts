@@ -1,4 +1,5 @@
 import { findingText } from '#shared/firing/findings.ts';
+import { disputeAbout } from '#shared/note/finding-disputes.ts';
 import { placeOfFinding } from './finding-places.ts';
 import type { WriteForm } from './form-context.ts';
 
@@ -18,6 +19,9 @@ export function saidUnder(form: WriteForm, prefixes: readonly string[]): string 
     form.checks.flatMap(({ pointer, offer }) => (offer && isUnder(pointer) ? [offer] : [])),
     form.reading.findings
       .filter((finding) => isUnder(placeOfFinding(finding) ?? ''))
-      .map((finding) => findingText(finding, form.units)),
+      .map((finding) => [
+        findingText(finding, form.units),
+        disputeAbout(finding, form.reading.findings, form.fields.findingDisputes) !== null,
+      ]),
   ]);
 }

@@ -96,14 +96,20 @@ export function RecordSection() {
     });
   };
   const remove = (): void => {
+    // What was said of its stretches and findings goes with it.
     const { levelAnswers } = fields.record;
-    const put = (record: Partial<typeof fields.record>) =>
-      change((now) => ({ ...now, record: { ...now.record, ...record } }));
-    put({ recordId: null, levelAnswers: [] });
+    const { findingDisputes } = fields;
+    const put = (record: Partial<typeof fields.record>, disputes: typeof findingDisputes) =>
+      change((now) => ({
+        ...now,
+        record: { ...now.record, ...record },
+        findingDisputes: disputes,
+      }));
+    put({ recordId: null, levelAnswers: [] }, []);
     tell({
       kind: 'done',
       text: 'The record is taken off this note.',
-      action: { label: 'Undo', onClick: () => put({ recordId, levelAnswers }) },
+      action: { label: 'Undo', onClick: () => put({ recordId, levelAnswers }, findingDisputes) },
     });
   };
 

@@ -25,10 +25,11 @@ export function useRecordSending(noteId: number, keeper: DraftKeeper) {
       record: {
         ...fields.record,
         recordId: record.id,
-        // Answers were about another curve, and typed rows that were sent stand in the record now.
+        // Answers were about another curve, as were disagreements; and typed rows that were sent stand in the record now.
         levelAnswers: [],
         typedRows: source.source === 'pasted' ? [] : fields.record.typedRows,
       },
+      findingDisputes: [],
     }));
     await keeper.flush();
   };
