@@ -129,6 +129,19 @@ CREATE TABLE `members` (
   CONSTRAINT `members_role_check` CHECK (`role` in ('member','moderator','admin'))
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
+CREATE TABLE `note_questions` (
+  `id` bigint(20) unsigned NOT NULL AUTO_INCREMENT,
+  `note_id` bigint(20) unsigned NOT NULL,
+  `asker_id` bigint(20) unsigned DEFAULT NULL,
+  `text` varchar(500) NOT NULL,
+  `asked_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
+  PRIMARY KEY (`id`),
+  KEY `note_questions_note_index` (`note_id`,`id`),
+  KEY `note_questions_asker_index` (`asker_id`),
+  CONSTRAINT `note_questions_asker_foreign` FOREIGN KEY (`asker_id`) REFERENCES `members` (`id`) ON DELETE SET NULL,
+  CONSTRAINT `note_questions_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `notes` (`id`) ON DELETE CASCADE
+) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
+
 CREATE TABLE `note_revisions` (
   `id` bigint(20) unsigned NOT NULL AUTO_INCREMENT,
   `note_id` bigint(20) unsigned NOT NULL,
@@ -251,6 +264,20 @@ CREATE TABLE `published_firings` (
   FULLTEXT KEY `published_firings_text` (`title`,`story_text`),
   CONSTRAINT `published_firings_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `notes` (`id`) ON DELETE CASCADE,
   CONSTRAINT `published_firings_revision_foreign` FOREIGN KEY (`revision_id`) REFERENCES `note_revisions` (`id`)
+) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
+
+CREATE TABLE `question_answers` (
+  `id` bigint(20) unsigned NOT NULL AUTO_INCREMENT,
+  `question_id` bigint(20) unsigned NOT NULL,
+  `member_id` bigint(20) unsigned DEFAULT NULL,
+  `text` varchar(2000) NOT NULL,
+  `answered_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
+  `changed_at` datetime(3) DEFAULT NULL,
+  PRIMARY KEY (`id`),
+  UNIQUE KEY `question_answers_member_unique` (`question_id`,`member_id`),
+  KEY `question_answers_member_index` (`member_id`),
+  CONSTRAINT `question_answers_member_foreign` FOREIGN KEY (`member_id`) REFERENCES `members` (`id`) ON DELETE SET NULL,
+  CONSTRAINT `question_answers_question_foreign` FOREIGN KEY (`question_id`) REFERENCES `note_questions` (`id`) ON DELETE CASCADE
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
 CREATE TABLE `record_contents` (

@@ -11,6 +11,7 @@ import { kilnRoutes } from './kilns/kiln-routes.ts';
 import { draftRoutes } from './notes/draft-routes.ts';
 import { noteRoutes } from './notes/note-routes.ts';
 import { pictureRoutes } from './pictures/picture-routes.ts';
+import { questionRoutes } from './questions/question-routes.ts';
 import { recordRoutes } from './records/record-routes.ts';
 import { searchRoutes } from './search/search-routes.ts';
 
@@ -23,6 +24,7 @@ export const ROUTES: readonly Route[] = [
   ...kilnRoutes,
   ...noteRoutes,
   ...draftRoutes,
+  ...questionRoutes,
   ...recordRoutes,
   ...pictureRoutes,
   ...deskRoutes,

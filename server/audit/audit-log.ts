@@ -14,6 +14,7 @@ export type AuditAct =
   | 'dispute-withdrawn'
   | 'finding-restored'
   | 'dispute-left'
+  | 'question-removed'
   | 'removed'
   | 'role-changed'
   | 'suspended'

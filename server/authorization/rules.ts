@@ -18,6 +18,9 @@ export interface KilnSubject {
   readonly removed: boolean;
   readonly lentTo: readonly number[];
 }
+export interface QuestionSubject {
+  readonly askerId: number | null;
+}
 export type NoteAction =
   | 'read'
   | 'read-draft'
@@ -32,8 +35,10 @@ export type NoteAction =
   | 'take-down'
   | 'dispute'
   | 'answer-dispute'
+  | 'ask'
   | 'try-it';
 export type KilnAction = 'read' | 'read-loans' | 'edit' | 'lend' | 'remove' | 'fire';
+export type QuestionAction = 'answer' | 'remove';
 export type SiteAction = 'write' | 'moderate' | 'administer';
 
 const isMember = (actor: Actor): actor is SignedIn => actor.kind === 'member';
@@ -100,8 +105,26 @@ export function canOnNote(actor: Actor, action: NoteAction, note: NoteSubject): 
       return isStaff(actor) && !own && note.hasPublished;
     case 'dispute':
       return own && note.hasPublished;
+    case 'ask':
+      return isMember(actor) && !own && actor.emailVerified && note.hasPublished;
     case 'try-it':
       return isMember(actor) && note.hasPublished;
+  }
+}
+
+/** Questions stand on published notes only: nobody does anything with one of another. */
+export function canOnQuestion(
+  actor: Actor,
+  action: QuestionAction,
+  note: NoteSubject,
+  question: QuestionSubject,
+): boolean {
+  if (!isMember(actor) || note.removed || !note.hasPublished) return false;
+  switch (action) {
+    case 'answer':
+      return (note.authorId !== null && actor.id === note.authorId) || isStaff(actor);
+    case 'remove':
+      return (question.askerId !== null && actor.id === question.askerId) || isStaff(actor);
   }
 }
 

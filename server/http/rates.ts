@@ -9,5 +9,7 @@ export const RATES = {
   recordFiles: { name: 'record-file', limit: 60, windowSeconds: 30 * MINUTE },
   searches: { name: 'search', limit: 60, windowSeconds: MINUTE },
   disputes: { name: 'dispute', limit: 30, windowSeconds: 60 * MINUTE },
+  questions: { name: 'question', limit: 10, windowSeconds: 60 * MINUTE },
+  answers: { name: 'answer', limit: 60, windowSeconds: 60 * MINUTE },
   exports: { name: 'export', limit: 10, windowSeconds: 60 * MINUTE },
 } as const satisfies Record<string, ThrottleRule>;

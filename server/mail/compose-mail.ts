@@ -23,6 +23,7 @@ import { noteTriedMail } from './messages/note-tried.ts';
 import { passwordChangedMail } from './messages/password-changed.ts';
 import { resetPasswordMail } from './messages/reset-password.ts';
 import { verifyEmailMail } from './messages/verify-email.ts';
+import { questionLetter } from './question-letter.ts';
 import { findNoteTitle } from './note-title.ts';
 
 /**
@@ -58,6 +59,9 @@ function wants(member: Account, job: MailJob): boolean {
     case 'note-taken-down':
     case 'dispute-answered':
       return mails.decisions && !member.suspended && member.emailVerified;
+    case 'question-asked':
+    case 'question-answered':
+      return mails.questions && !member.suspended && member.emailVerified;
     case 'note-tried':
       return mails.triedIt && !member.suspended && member.emailVerified;
     case 'note-handed-in':
@@ -115,6 +119,9 @@ async function writeLetter(
       const followLink = link(paths.note(job.byNoteId, ''));
       return noteTriedMail(name, { title: own }, { title: follow, link: followLink });
     }
+    case 'question-asked':
+    case 'question-answered':
+      return questionLetter(db, job, name, link(paths.note(job.noteId, '')));
     case 'dispute-answered': {
       const title = await findNoteTitle(db, job.noteId);
       if (title === null) return null;

@@ -25,6 +25,14 @@ export type MailJob =
   | { kind: 'note-declined'; memberId: number; noteId: number; auditReason: string }
   | { kind: 'note-taken-down'; memberId: number; noteId: number; auditReason: string }
   | { kind: 'dispute-answered'; memberId: number; noteId: number; disputeId: number }
+  | { kind: 'question-asked'; memberId: number; noteId: number; questionId: number }
+  | {
+      kind: 'question-answered';
+      memberId: number;
+      noteId: number;
+      questionId: number;
+      byMemberId: number;
+    }
   | { kind: 'note-tried'; memberId: number; noteId: number; byNoteId: number }
   | { kind: 'note-handed-in'; memberId: number; noteId: number };
 export type OutboxTopic = keyof OutboxJobs;

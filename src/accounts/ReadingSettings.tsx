@@ -90,6 +90,11 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
           checked={mails.triedIt}
           onChecked={(triedIt) => setMails({ triedIt })}
         />
+        <CheckField
+          label="somebody asked about a note of mine, or answered what I asked"
+          checked={mails.questions}
+          onChecked={(questions) => setMails({ questions })}
+        />
         {me.role !== 'member' && (
           <CheckField
             label="a note was handed in and waits on the desk"

@@ -56,6 +56,7 @@ const ACTS: Readonly<Record<string, string>> = {
   published: 'published',
   declined: 'declined',
   'taken-down': 'taken down',
+  'question-removed': 'question removed',
   removed: 'removed',
   'role-changed': 'role changed',
   suspended: 'suspended',

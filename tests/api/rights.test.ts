@@ -47,6 +47,10 @@ const RIGHTS: Readonly<Record<string, Access>> = {
   'post /api/notes/:id/hand-in': 'member',
   'post /api/notes/:id/take-back': 'member',
   'post /api/notes/:id/revise': 'member',
+  'get /api/notes/:id/questions': 'anyone',
+  'post /api/notes/:id/questions': 'member',
+  'put /api/notes/:id/questions/:questionId/answer': 'member',
+  'delete /api/notes/:id/questions/:questionId': 'member',
   'put /api/notes/:id/remarks/:remarkId/mended': 'member',
   'put /api/notes/:id/disputes': 'member',
   'delete /api/notes/:id/disputes/:disputeId': 'member',
@@ -93,6 +97,7 @@ const withUnknownIds = (path: string): string =>
   path
     .replace(':remarkId', '999999999')
     .replace(':recordId', '999999999')
+    .replace(':questionId', '999999999')
     .replace(':disputeId', '999999999')
     .replace(':name', '0'.repeat(32))
     .replace(':file', '480.webp')
@@ -191,11 +196,13 @@ describe('rights on one thing', () => {
         ? { fields: draft.fields }
         : name.endsWith('/mended')
           ? { mended: true }
-          : name === 'put /api/notes/:id/records/:recordId'
-            ? { choice: CHOICE }
-            : name.endsWith('/disputes')
-              ? { code: 'stall', minute: 20, sentence: 'The probe had slipped out.' }
-              : {};
+          : /\/(questions|answer)$/.test(name)
+            ? { text: 'What stood the kiln on?' }
+            : name === 'put /api/notes/:id/records/:recordId'
+              ? { choice: CHOICE }
+              : name.endsWith('/disputes')
+                ? { code: 'stall', minute: 20, sentence: 'The probe had slipped out.' }
+                : {};
       const ask = (id: number | string) =>
         other.send(
           method.toUpperCase(),

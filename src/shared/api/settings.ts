@@ -12,6 +12,8 @@ export const memberSettingsSchema = z.strictObject({
       decisions: z.boolean().default(true),
       /** Somebody tried a change from one of my notes. */
       triedIt: z.boolean().default(true),
+      /** Somebody asked about one of my notes, or answered a question of mine. */
+      questions: z.boolean().default(true),
       /** For moderators: a note was handed in. */
       desk: z.boolean().default(false),
     })
