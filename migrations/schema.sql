@@ -241,6 +241,18 @@ CREATE TABLE `pictures` (
   CONSTRAINT `pictures_owner_foreign` FOREIGN KEY (`owner_id`) REFERENCES `members` (`id`) ON DELETE SET NULL
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
+CREATE TABLE `published_climbs` (
+  `note_id` bigint(20) unsigned NOT NULL,
+  `revision_id` bigint(20) unsigned NOT NULL,
+  `version` smallint(5) unsigned NOT NULL,
+  `signature` varbinary(360) DEFAULT NULL,
+  `traits` longtext CHARACTER SET utf8mb4 COLLATE utf8mb4_bin DEFAULT NULL CHECK (json_valid(`traits`)),
+  `kept_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
+  PRIMARY KEY (`note_id`),
+  KEY `published_climbs_kept_index` (`kept_at`),
+  CONSTRAINT `published_climbs_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `notes` (`id`) ON DELETE CASCADE
+) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
+
 CREATE TABLE `published_firings` (
   `note_id` bigint(20) unsigned NOT NULL,
   `revision_id` bigint(20) unsigned NOT NULL,

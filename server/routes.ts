@@ -9,6 +9,7 @@ import type { Route } from './http/define-route.ts';
 import { reportRoutes } from './http/report-routes.ts';
 import { kilnRoutes } from './kilns/kiln-routes.ts';
 import { draftRoutes } from './notes/draft-routes.ts';
+import { lookAlikeRoutes } from './look-alikes/look-alike-routes.ts';
 import { noteRoutes } from './notes/note-routes.ts';
 import { pictureRoutes } from './pictures/picture-routes.ts';
 import { questionRoutes } from './questions/question-routes.ts';
@@ -30,6 +31,7 @@ export const ROUTES: readonly Route[] = [
   ...deskRoutes,
   ...disputeRoutes,
   ...searchRoutes,
+  ...lookAlikeRoutes,
   ...figureRoutes,
   ...adminRoutes,
 ];

@@ -1,6 +1,7 @@
 import { setTimeout as sleep } from 'node:timers/promises';
 import type { Deps } from './deps.ts';
 import { startHousekeeping } from './housekeeping.ts';
+import { catchUpClimbs } from './look-alikes/catch-up-climbs.ts';
 import { createHandlers } from './outbox/handlers.ts';
 import { startOutboxWorker } from './outbox/worker.ts';
 import { readRecord } from './records/read-record.ts';
@@ -21,7 +22,10 @@ export function startWorkers(deps: Deps): Workers {
   const outbox = startOutboxWorker(deps, createHandlers(deps, { indexNote, readRecord }));
   const housekeeping = startHousekeeping(deps);
   const stopping = new AbortController();
-  const catchingUp = catchUp(deps, stopping.signal);
+  const catchingUp = Promise.all([
+    catchUp(deps, stopping.signal),
+    keepMissingClimbs(deps, stopping.signal),
+  ]);
   return {
     async stop() {
       stopping.abort();
@@ -40,6 +44,19 @@ async function catchUp(deps: Deps, signal: AbortSignal): Promise<void> {
       await sleep(A_DAY_MILLISECONDS, undefined, { signal }).catch(() => undefined);
     } catch (error) {
       deps.log.warn({ err: error }, 'the index is not caught up yet');
+      await sleep(TRY_AGAIN_MILLISECONDS, undefined, { signal }).catch(() => undefined);
+    }
+  }
+}
+
+/** Once at the start: climbs of notes published before climbs were kept, or kept another way. */
+async function keepMissingClimbs(deps: Deps, signal: AbortSignal): Promise<void> {
+  while (!signal.aborted) {
+    try {
+      await catchUpClimbs(deps.db, signal);
+      return;
+    } catch (error) {
+      deps.log.warn({ err: error }, 'the climbs are not caught up yet');
       await sleep(TRY_AGAIN_MILLISECONDS, undefined, { signal }).catch(() => undefined);
     }
   }

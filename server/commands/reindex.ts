@@ -1,12 +1,16 @@
 import { readConfig } from '../config.ts';
 import { openDatabase } from '../database/open-database.ts';
 import { createLog } from '../log.ts';
+import { rebuildClimbs } from '../look-alikes/catch-up-climbs.ts';
 import { reindex } from '../search/reindex.ts';
 import { withLocalSettings } from '../start/local-settings.ts';
 import { diskStore } from '../storage/file-store.ts';
 import { runCommand, say } from './run-command.ts';
 
-/** `npm run reindex` rebuilds the search index from the database, without a gap in searching. */
+/**
+ * `npm run reindex` rebuilds what is made from the notes: the search index, without a gap in
+ * searching, and the climbs that look-alikes are found by.
+ */
 await runCommand(async () => {
   const config = readConfig(withLocalSettings(process.env));
   const db = openDatabase(config.databaseUrl);
@@ -16,6 +20,8 @@ await runCommand(async () => {
       say(`${String(done)} of ${String(of)} notes`);
     });
     say(`The index holds ${String(indexed)} notes.`);
+    const climbs = await rebuildClimbs(db);
+    say(`The climbs of ${String(climbs)} notes are read anew, for look-alikes.`);
   } finally {
     await db.destroy();
   }

@@ -7,6 +7,8 @@ export const RATES = {
   newNotes: { name: 'new-note', limit: 30, windowSeconds: 60 * MINUTE },
   uploads: { name: 'upload', limit: 60, windowSeconds: 30 * MINUTE },
   recordFiles: { name: 'record-file', limit: 60, windowSeconds: 30 * MINUTE },
+  lookAlikes: { name: 'look-alike', limit: 30, windowSeconds: MINUTE },
+  lookAlikesOfNotes: { name: 'look-alike-note', limit: 120, windowSeconds: MINUTE },
   searches: { name: 'search', limit: 60, windowSeconds: MINUTE },
   disputes: { name: 'dispute', limit: 30, windowSeconds: 60 * MINUTE },
   questions: { name: 'question', limit: 10, windowSeconds: 60 * MINUTE },

@@ -5,6 +5,7 @@ import { storyTexts } from '#shared/note/story.ts';
 import type { Trouble } from '#shared/vocabulary/troubles.ts';
 import { countedRevision, type CountedRevision } from '../disputes/counted-revision.ts';
 import { outcomesBetween } from '../figures/outcomes-between.ts';
+import { keepClimb } from '../look-alikes/keep-climb.ts';
 import { enqueue } from '../outbox/outbox.ts';
 import { factsOfKiln, type StoredRow } from './published-repository.ts';
 import { findRevision } from './revision-repository.ts';
@@ -48,6 +49,7 @@ export async function projectNote(trx: Knex, noteId: number): Promise<void> {
     const counted = await countedRevision(trx, revision);
     await insertFiring(trx, counted, note.author_id, note.published_at ?? new Date());
   }
+  await keepClimb(trx, noteId, revision);
   for (const kilnId of kilnIds) await relinkKiln(trx, kilnId);
   await promiseIndex(trx, noteId);
 }
