@@ -7,28 +7,41 @@ export type DocumentSet = Uint8Array;
 
 type CellTest = (cell: Cell) => boolean;
 
+/** Answers to conditions, by their text; the oldest goes when there are too many. */
+export type KnownConditions = Map<string, DocumentSet>;
+const MOST_KNOWN_CONDITIONS = 200;
+
 /**
  * Documents that satisfy a filter. `columnOf` finds an attribute's column (absent when no document
- * has the attribute); `everyone` marks the documents that exist.
+ * has the attribute); `everyone` marks the documents that exist. The answer may be one that is kept
+ * in `known`: it must not be written to.
  */
 export function evaluateFilter(
   node: FilterNode,
   columnOf: (attribute: string) => Column | undefined,
   everyone: DocumentSet,
+  known?: KnownConditions,
 ): DocumentSet {
   if (node.kind === 'not') {
-    const inner = evaluateFilter(node.part, columnOf, everyone);
-    for (let at = 0; at < inner.length; at += 1) inner[at] = inner[at] ? 0 : (everyone[at] ?? 0);
-    return inner;
+    const inner = evaluateFilter(node.part, columnOf, everyone, known);
+    const result = new Uint8Array(everyone.length);
+    for (let at = 0; at < result.length; at += 1) result[at] = inner[at] ? 0 : (everyone[at] ?? 0);
+    return result;
   }
   if (node.kind === 'condition') {
-    return evaluateCondition(node.condition, columnOf(node.attribute), everyone);
+    const key = JSON.stringify([node.attribute, node.condition]);
+    let found = known?.get(key);
+    if (found === undefined) {
+      found = evaluateCondition(node.condition, columnOf(node.attribute), everyone);
+      keep(known, key, found);
+    }
+    return found;
   }
   const [first, ...rest] = node.parts;
-  if (first === undefined) return everyone.slice();
-  const result = evaluateFilter(first, columnOf, everyone);
+  if (first === undefined) return everyone;
+  const result = evaluateFilter(first, columnOf, everyone, known).slice();
   for (const part of rest) {
-    const other = evaluateFilter(part, columnOf, everyone);
+    const other = evaluateFilter(part, columnOf, everyone, known);
     if (node.kind === 'and') {
       for (let at = 0; at < result.length; at += 1)
         result[at] = (result[at] ?? 0) & (other[at] ?? 0);
@@ -38,6 +51,13 @@ export function evaluateFilter(
     }
   }
   return result;
+}
+
+function keep(known: KnownConditions | undefined, key: string, found: DocumentSet): void {
+  if (known === undefined) return;
+  const oldest = known.keys().next().value;
+  if (known.size >= MOST_KNOWN_CONDITIONS && oldest !== undefined) known.delete(oldest);
+  known.set(key, found);
 }
 
 function evaluateCondition(

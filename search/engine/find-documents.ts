@@ -21,7 +21,7 @@ export type SearchScope = {
   strategy: MatchingStrategy;
 };
 
-/** All documents that satisfy a query within its scope, in order of arrival, and how to rank them. */
+/** All documents that satisfy a query within its scope, and how to rank them. */
 export type Found = { graph: QueryGraph; matches: Match[]; ranking: Ranking };
 
 export function findDocuments(index: SearchIndex, query: string, scope: SearchScope): Found {
@@ -35,28 +35,43 @@ export function findDocuments(index: SearchIndex, query: string, scope: SearchSc
   if (units.length === 0) {
     const matches: Match[] = [];
     for (const document of arrivalOrder(index)) {
-      if (allowed[document]) matches.push({ document, dropped: 0, typos: 0, edges: [] });
+      if (allowed[document]) matches.push({ document, dropped: 0, typos: 0, rough: 0 });
     }
     const fieldSteps = ranking.steps.filter((step) => step.sortBy !== null);
     return { graph, matches, ranking: { ...ranking, steps: fieldSteps } };
   }
   const matches = findMatches(index, graph, order, allowed, attributes, find);
-  const arrival = (match: Match): number => index.documents[match.document]?.order ?? 0;
-  matches.sort((a, b) => arrival(a) - arrival(b));
   return { graph, matches, ranking };
 }
 
 function attributeRules(index: SearchIndex, searchOn: string[] | null): AttributeRules {
-  const { disableOnAttributes } = index.settings.typoTolerance;
+  const { searchableAttributes, typoTolerance } = index.settings;
+  const { disableOnAttributes } = typoTolerance;
   const only = searchOn === null || searchOn.includes('*') ? null : searchOn;
   const within = (attribute: number, names: readonly string[]): boolean => {
     const name = index.attributeNames[attribute] ?? '';
     return names.some((each) => isWithin(name, each));
   };
+  // Ranks tell all only where every rule names whole entries of the list, none inside another.
+  const ranked =
+    [...(only ?? []), ...disableOnAttributes].every((name) =>
+      searchableAttributes.includes(name),
+    ) &&
+    searchableAttributes.every((one) =>
+      searchableAttributes.every((other) => one === other || !isWithin(one, other)),
+    );
+  const named = (rank: number, names: readonly string[]): boolean =>
+    names.includes(searchableAttributes[rank] ?? '');
   return {
     isSearched: (attribute) => only === null || within(attribute, only),
     allowsTypos: (attribute) => !within(attribute, disableOnAttributes),
     restricted: only !== null || disableOnAttributes.length > 0,
+    byRank: ranked
+      ? {
+          isSearched: (rank) => only === null || named(rank, only),
+          allowsTypos: (rank) => !named(rank, disableOnAttributes),
+        }
+      : null,
   };
 }
 

@@ -12,8 +12,8 @@ export type Match = {
   dropped: number;
   /** Fewest typos with which the remaining units are satisfied. */
   typos: number;
-  /** Numbers of the edges this document satisfies. */
-  edges: number[];
+  /** Sum of the ranks of the attributes that hold the words: a first guess at its place, low is good. */
+  rough: number;
 };
 
 /** Order in which units may be dropped. Phrases are never dropped, nor is the last one left. */
@@ -63,6 +63,86 @@ function reachWith(
   return null;
 }
 
+/** Up to so many allowed documents are read one by one instead of walking the lists of the words. */
+const FEW_DOCUMENTS = 64;
+const NO_RANK = 255;
+
+/** Which edges each document satisfies, as bits in groups of 31, and the best rank for each unit. */
+type Held = { masks: Int32Array[]; ranks: Uint8Array[] };
+
+const EDGES_PER_MASK = 31;
+
+function nothingHeld(graph: QueryGraph, documents: number): Held {
+  const groups = Math.ceil(graph.edges.length / EDGES_PER_MASK);
+  return {
+    masks: Array.from({ length: groups }, () => new Int32Array(documents)),
+    ranks: graph.units.map(() => new Uint8Array(documents).fill(NO_RANK)),
+  };
+}
+
+/** Reads one document for the edges it satisfies. */
+function readDocument(
+  index: SearchIndex,
+  graph: QueryGraph,
+  held: Held,
+  document: number,
+  find: OccurrenceFinder,
+): void {
+  const indexed = index.documents[document];
+  if (indexed === undefined) return;
+  for (const mask of held.masks) mask[document] = 0;
+  const { count, edges } = find(indexed);
+  for (let at = 0; at < count; at += 1) {
+    const edge = edges[at] ?? 0;
+    const mask = held.masks[Math.floor(edge / EDGES_PER_MASK)];
+    if (mask) mask[document] = (mask[document] ?? 0) | (1 << (edge % EDGES_PER_MASK));
+    const ranks = held.ranks[graph.edges[edge]?.from ?? 0];
+    if (ranks && ranks[document] === NO_RANK) ranks[document] = 0;
+  }
+}
+
+/** Walks the lists of all words of a query; answers the documents that must be read to be sure. */
+function walkLists(
+  index: SearchIndex,
+  graph: QueryGraph,
+  held: Held,
+  allowed: DocumentSet,
+  { byRank }: AttributeRules,
+): Set<number> {
+  const uncertain = new Set<number>();
+  for (const [number, edge] of graph.edges.entries()) {
+    const mask = held.masks[Math.floor(number / EDGES_PER_MASK)];
+    const ranks = held.ranks[edge.from];
+    if (mask === undefined || ranks === undefined) continue;
+    const bit = 1 << (number % EDGES_PER_MASK);
+    const isSearched = (rank: number): boolean =>
+      byRank === null ||
+      (byRank.isSearched(rank) && (edge.typos === 0 || byRank.allowsTypos(rank)));
+    const visit = (document: number, rank: number): void => {
+      if (!allowed[document]) return;
+      mask[document] = (mask[document] ?? 0) | bit;
+      if (rank < (ranks[document] ?? 0)) ranks[document] = rank;
+    };
+    for (const word of edge.words) index.candidates.forEachWith(word, visit, isSearched);
+    for (const sequence of edge.sequences) {
+      const words = sequence.filter((word) => word !== null);
+      for (const document of documentsWithAll(index, words)) {
+        if (!allowed[document]) continue;
+        mask[document] = (mask[document] ?? 0) | bit;
+        uncertain.add(document);
+      }
+    }
+  }
+  return uncertain;
+}
+
+function isFew(allowed: DocumentSet): boolean {
+  let count = 0;
+  for (let at = 0; at < allowed.length && count <= FEW_DOCUMENTS; at += 1)
+    count += allowed[at] ?? 0;
+  return count <= FEW_DOCUMENTS;
+}
+
 /** All documents of `allowed` that satisfy the query, in document order. */
 export function findMatches(
   index: SearchIndex,
@@ -73,63 +153,47 @@ export function findMatches(
   find: OccurrenceFinder,
 ): Match[] {
   const { edges, units } = graph;
-  const groups = Math.ceil(edges.length / 31);
-  const masks = Array.from({ length: groups }, () => new Int32Array(allowed.length));
-  const uncertain = new Set<number>();
+  const held = nothingHeld(graph, allowed.length);
+  const { masks, ranks } = held;
+  const few = isFew(allowed);
+  const uncertain = few ? null : walkLists(index, graph, held, allowed, attributes);
+  const mustRead = attributes.restricted && attributes.byRank === null;
 
-  for (const [number, edge] of edges.entries()) {
-    const mask = masks[Math.floor(number / 31)];
-    if (mask === undefined) continue;
-    const bit = 1 << (number % 31);
-    for (const word of edge.words) {
-      index.candidates.forEachWith(word, (document) => {
-        if (allowed[document]) mask[document] = (mask[document] ?? 0) | bit;
-      });
-    }
-    for (const sequence of edge.sequences) {
-      const words = sequence.filter((word) => word !== null);
-      for (const document of documentsWithAll(index, words)) {
-        if (!allowed[document]) continue;
-        mask[document] = (mask[document] ?? 0) | bit;
-        uncertain.add(document);
-      }
-    }
-  }
-
-  const known = new Map<string | number, { reach: Reach | null; edges: number[] }>();
+  const known = new Map<string | number, Reach | null>();
   const matches: Match[] = [];
   for (let document = 0; document < allowed.length; document += 1) {
+    if (uncertain === null) {
+      if (!allowed[document]) continue;
+      readDocument(index, graph, held, document, find);
+    }
     let any = 0;
     for (const mask of masks) any |= mask[document] ?? 0;
     if (any === 0) continue;
-    if (attributes.restricted || uncertain.has(document)) {
-      const indexed = index.documents[document];
-      if (indexed === undefined) continue;
-      for (const mask of masks) mask[document] = 0;
-      const { count, edges: held } = find(indexed);
-      for (let at = 0; at < count; at += 1) {
-        const edge = held[at] ?? 0;
-        const mask = masks[Math.floor(edge / 31)];
-        if (mask) mask[document] = (mask[document] ?? 0) | (1 << (edge % 31));
-      }
+    if (uncertain !== null && (mustRead || uncertain.has(document))) {
+      readDocument(index, graph, held, document, find);
     }
     const key =
-      groups === 1
+      masks.length === 1
         ? (masks[0]?.[document] ?? 0)
         : masks.map((mask) => mask[document] ?? 0).join(' ');
-    let outcome = known.get(key);
-    if (outcome === undefined) {
-      const held = edges.flatMap((_, number) =>
-        ((masks[Math.floor(number / 31)]?.[document] ?? 0) >> (number % 31)) & 1 ? [number] : [],
+    let reach = known.get(key);
+    if (reach === undefined) {
+      const heldEdges = edges.filter(
+        (_, number) =>
+          ((masks[Math.floor(number / EDGES_PER_MASK)]?.[document] ?? 0) >>
+            (number % EDGES_PER_MASK)) &
+          1,
       );
-      const heldEdges = held.flatMap((number) => edges[number] ?? []);
-      outcome = { reach: reachWith(heldEdges, units.length, order), edges: held };
-      known.set(key, outcome);
+      reach = reachWith(heldEdges, units.length, order);
+      known.set(key, reach);
     }
-    if (outcome.reach !== null) {
-      const { dropped, typos } = outcome.reach;
-      matches.push({ document, dropped, typos, edges: outcome.edges });
+    if (reach === null) continue;
+    let rough = 0;
+    for (const rank of ranks) {
+      const best = rank[document] ?? NO_RANK;
+      if (best !== NO_RANK) rough += best;
     }
+    matches.push({ document, dropped: reach.dropped, typos: reach.typos, rough });
   }
   return matches;
 }

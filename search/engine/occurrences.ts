@@ -16,6 +16,11 @@ export type AttributeRules = {
   allowsTypos: (attribute: number) => boolean;
   /** False when every attribute is searched and tolerates typos. */
   restricted: boolean;
+  /**
+   * The same two rules by rank in the searchable list, by which the lists of candidates are kept;
+   * null where the rules name parts of attributes, so that each candidate must be looked at.
+   */
+  byRank: { isSearched: (rank: number) => boolean; allowsTypos: (rank: number) => boolean } | null;
 };
 
 type Sequence = { edge: number; words: (number | null)[] };
@@ -42,10 +47,15 @@ export function createOccurrenceFinder(
     for (const word of words) {
       const number = vocabulary.numberOf.get(word);
       if (number === undefined) continue;
-      codes[number] = codes[number] === NOT_ASKED ? edge + FIRST_EDGE : SEVERAL;
+      const code = codes[number] ?? NOT_ASKED;
+      if (code === NOT_ASKED) {
+        codes[number] = edge + FIRST_EDGE;
+        continue;
+      }
       const list = singles.get(number);
-      if (list === undefined) singles.set(number, [edge]);
-      else list.push(edge);
+      if (list !== undefined) list.push(edge);
+      else singles.set(number, code >= FIRST_EDGE ? [code - FIRST_EDGE, edge] : [edge]);
+      codes[number] = SEVERAL;
     }
     for (const sequence of alternatives) {
       const numbers = sequence.map((word) =>
@@ -53,6 +63,8 @@ export function createOccurrenceFinder(
       );
       const [first] = numbers;
       if (first == null || numbers.includes(undefined)) continue;
+      const code = codes[first] ?? NOT_ASKED;
+      if (code >= FIRST_EDGE) singles.set(first, [code - FIRST_EDGE]);
       codes[first] = SEVERAL;
       const list = sequences.get(first) ?? [];
       list.push({ edge, words: numbers.map((number) => number ?? null) });
@@ -78,11 +90,12 @@ export function createOccurrenceFinder(
       const code = codes[word] ?? NOT_ASKED;
       if (code === NOT_ASKED) continue;
       const start = places[at] ?? 0;
-      if (code >= FIRST_EDGE && !attributes.restricted) {
-        push(code - FIRST_EDGE, start, start);
+      const attribute = Math.floor(start / POSITIONS_PER_ATTRIBUTE);
+      if (code >= FIRST_EDGE) {
+        const edge = code - FIRST_EDGE;
+        if (!attributes.restricted || mayStandIn(edge, attribute)) push(edge, start, start);
         continue;
       }
-      const attribute = Math.floor(start / POSITIONS_PER_ATTRIBUTE);
       for (const edge of singles.get(word) ?? []) {
         if (!attributes.restricted || mayStandIn(edge, attribute)) push(edge, start, start);
       }

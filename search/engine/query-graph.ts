@@ -71,8 +71,24 @@ function typoSettings(index: SearchIndex): SearchIndex['settings']['typoToleranc
   return { ...settings, disableOnWords: settings.disableOnWords.map(normaliseWord) };
 }
 
+/** Queries whose graphs are kept until the next write: the last ones asked. */
+const MOST_KNOWN_GRAPHS = 50;
+
 /** All ways in which documents of this index may satisfy the units of a query. */
 export function buildQueryGraph(index: SearchIndex, units: QueryUnit[]): QueryGraph {
+  const { graphs } = index.derived;
+  const key = JSON.stringify(units);
+  let graph = graphs.get(key);
+  if (graph === undefined) {
+    graph = graphOf(index, units);
+    const oldest = graphs.keys().next().value;
+    if (graphs.size >= MOST_KNOWN_GRAPHS && oldest !== undefined) graphs.delete(oldest);
+    graphs.set(key, graph);
+  }
+  return graph;
+}
+
+function graphOf(index: SearchIndex, units: QueryUnit[]): QueryGraph {
   const edges: Edge[] = [];
   const settings = typoSettings(index);
   const prefixes = index.settings.prefixSearch !== 'disabled';

@@ -22,6 +22,8 @@ export type RankingStep = {
   sortBy: SortBy | null;
   keyOf: (match: Match) => SortKey;
   descending: boolean;
+  /** Whether the key is found by reading the document's words, which takes its time. */
+  readsText: boolean;
 };
 
 export type Ranking = { steps: RankingStep[]; standingOf: (match: Match) => Standing };
@@ -92,8 +94,8 @@ export function createRanking(
       costsOf(match)[rule];
 
   const steps: RankingStep[] = [];
-  const add = (rule: RankingStep['rule'], keyOf: RankingStep['keyOf']): void => {
-    steps.push({ rule, sortBy: null, keyOf, descending: false });
+  const add = (rule: RankingStep['rule'], keyOf: RankingStep['keyOf'], readsText = true): void => {
+    steps.push({ rule, sortBy: null, keyOf, descending: false, readsText });
   };
   const addField = (rule: RankingStep['rule'], sortBy: SortBy): void => {
     const column = index.columns.get(sortBy.attribute);
@@ -102,6 +104,7 @@ export function createRanking(
       rule,
       sortBy,
       descending,
+      readsText: false,
       keyOf: (match) => sortKey(column, match.document, descending),
     });
   };
@@ -115,11 +118,12 @@ export function createRanking(
         for (const sortBy of sort) addField('sort', sortBy);
         break;
       case 'words':
-        add('words', (match) => match.dropped);
+        add('words', (match) => match.dropped, false);
         break;
       case 'typo':
         // While no placed rule came before, the fewest typos are known without reading the text.
-        add('typo', placed[0] === 'typo' ? (match) => match.typos : placedKey('typo'));
+        if (placed[0] === 'typo') add('typo', (match) => match.typos, false);
+        else add('typo', placedKey('typo'));
         break;
       case 'proximity':
         if (graph.units.length > 1) add('proximity', placedKey('proximity'));
@@ -145,20 +149,36 @@ export function createRanking(
 }
 
 /**
+ * Of more matches than this that are alike so far, only the best of a rough order are read for the
+ * rules that look at words; the others follow in the rough order.
+ */
+const MOST_READ = 1_000;
+
+/**
  * Orders the matches by the steps, each breaking only the ties of those before it, until the first
- * `needed` are settled; what lies beyond is left out. Ties of all steps keep the given order.
+ * `needed` are settled; what lies beyond is left out. Ties of all steps keep the order of arrival.
  */
 export function bucketSort(
+  index: SearchIndex,
   matches: readonly Match[],
   steps: readonly RankingStep[],
   needed: number,
 ): Match[] {
   const sorted: Match[] = [];
+  const arrival = ({ document }: Match): number => index.documents[document]?.order ?? 0;
 
-  function settle(bucket: readonly Match[], depth: number): void {
+  function settle(bucket: Match[], depth: number): void {
     const step = steps[depth];
     if (step === undefined || bucket.length === 1) {
+      if (bucket.length > 1) bucket.sort((a, b) => arrival(a) - arrival(b));
       for (const match of bucket) sorted.push(match);
+      return;
+    }
+    const most = Math.max(MOST_READ, needed);
+    if (step.readsText && bucket.length > most) {
+      const { best, others } = roughlyBest(bucket, most);
+      settle(best, depth);
+      for (const match of others) sorted.push(match);
       return;
     }
     const buckets = new Map<SortKey, Match[]>();
@@ -175,6 +195,14 @@ export function bucketSort(
     }
   }
 
-  if (needed > 0) settle(matches, 0);
-  return sorted.slice(0, needed);
+  if (needed > 0) settle([...matches], 0);
+  return sorted.length > needed ? sorted.slice(0, needed) : sorted;
+}
+
+/** The `most` matches of the lowest rough order, and the others, lowest first. */
+function roughlyBest(bucket: readonly Match[], most: number): { best: Match[]; others: Match[] } {
+  const byRough: Match[][] = [];
+  for (const match of bucket) (byRough[match.rough] ??= []).push(match);
+  const ordered = Object.values(byRough).flat();
+  return { best: ordered.slice(0, most), others: ordered.slice(most) };
 }

@@ -3,11 +3,10 @@ import { createSelector } from './attribute-selection.ts';
 import type { Engine } from './engine.ts';
 import { EngineError } from './errors.ts';
 import { compileFilter } from './filter-compile.ts';
-import { evaluateFilter } from './filter-evaluate.ts';
 import { filterTarget } from './filter-target.ts';
 import type { Route, RouteAnswer, RouteRequest } from './http-route.ts';
 import { describeJson, isJsonObject, isStringArray, type Json, type JsonObject } from './json.ts';
-import { liveDocuments } from './live-documents.ts';
+import { documentsAllowed } from './live-documents.ts';
 import { readCount } from './paging.ts';
 import { normaliseId } from './primary-key.ts';
 import { checkIndexUid, storedIndex } from './routes-indexes.ts';
@@ -116,10 +115,7 @@ function fetchDocuments(engine: Engine, stored: StoredIndex, body: JsonObject): 
   const sort = parseSort(readNames(body['sort'], 'sort') ?? [], index, 'invalid_document_sort');
   const ids = readIds(body['ids']);
   const target = filterTarget(index.settings, stored.uid, 'invalid_document_filter');
-  const node = compileFilter(body['filter'], target);
-  const live = liveDocuments(index);
-  const allowed =
-    node === null ? live : evaluateFilter(node, (name) => index.columns.get(name), live);
+  const allowed = documentsAllowed(index, compileFilter(body['filter'], target));
   const numbers = [...arrivalOrder(index)].filter(
     (number) => allowed[number] && (ids === null || ids.has(index.documents[number]?.id ?? '')),
   );

@@ -3,6 +3,7 @@ import { clearCell, createColumn, setCell, type Column } from './columns.ts';
 import { flattenDocument, isWithin, matchesPattern, type FieldContent } from './flatten.ts';
 import type { JsonObject } from './json.ts';
 import { normaliseWord } from './normalise.ts';
+import type { QueryGraph } from './query-graph.ts';
 import { parseRankingRule, type RankingRule } from './ranking-rule-names.ts';
 import type { Settings } from './settings.ts';
 import { createTokeniser, HARD_DISTANCE, type Tokeniser } from './tokenise.ts';
@@ -47,9 +48,27 @@ export type SearchIndex = {
   /** Characters of all documents as JSON, which is close to their size in bytes. */
   sourceBytes: number;
   nextOrder: number;
-  /** Document numbers in order of arrival; undefined after a write. */
-  arrival: Uint32Array | undefined;
+  /** What was worked out from the documents as they are; emptied by every write. */
+  derived: Derived;
 };
+
+export type Derived = {
+  /** Document numbers in order of arrival. */
+  arrival: Uint32Array | undefined;
+  /** One byte for each document number: 1 where the document exists. */
+  live: Uint8Array | undefined;
+  /** Documents that satisfy a condition of a filter, by its text. */
+  conditions: Map<string, Uint8Array>;
+  /** Ways to satisfy a query, by its words. */
+  graphs: Map<string, QueryGraph>;
+};
+
+export const nothingDerived = (): Derived => ({
+  arrival: undefined,
+  live: undefined,
+  conditions: new Map(),
+  graphs: new Map(),
+});
 
 export function createSearchIndex(settings: Settings): SearchIndex {
   return {
@@ -58,7 +77,7 @@ export function createSearchIndex(settings: Settings): SearchIndex {
     tokenise: createTokeniser(settings),
     stopWords: new Set(settings.stopWords.map(normaliseWord)),
     vocabulary: createVocabulary(),
-    candidates: new CandidateIndex(),
+    candidates: new CandidateIndex(Math.max(1, settings.searchableAttributes.length)),
     attributeNames: [],
     attributeNumbers: new Map(),
     attributeRanks: [],
@@ -70,7 +89,7 @@ export function createSearchIndex(settings: Settings): SearchIndex {
     fieldCounts: new Map(),
     sourceBytes: 0,
     nextOrder: 0,
-    arrival: undefined,
+    derived: nothingDerived(),
   };
 }
 
@@ -114,7 +133,8 @@ export type PreparedDocument = {
   fields: Map<string, FieldContent>;
   words: Uint32Array;
   places: Uint32Array;
-  distinctWords: string[];
+  /** Distinct words, by the rank of the searchable attribute. */
+  distinctWords: string[][];
 };
 
 export function prepareDocument(
@@ -125,11 +145,13 @@ export function prepareDocument(
   const fields = flattenDocument(source);
   const words: number[] = [];
   const places: number[] = [];
-  const distinct = new Set<string>();
+  const distinct: Set<string>[] = [];
   for (const [name, content] of fields) {
     if (content.values.length === 0) continue;
     const attribute = attributeNumber(index, name);
-    if (index.attributeRanks[attribute] === undefined) continue;
+    const rank = index.attributeRanks[attribute];
+    if (rank === undefined) continue;
+    const held = (distinct[rank] ??= new Set());
     let base = 0;
     for (const value of content.values) {
       let last = -1;
@@ -140,7 +162,7 @@ export function prepareDocument(
         if (index.stopWords.has(token.word)) continue;
         words.push(wordNumber(index.vocabulary, token.word));
         places.push(attribute * POSITIONS_PER_ATTRIBUTE + position);
-        distinct.add(token.word);
+        held.add(token.word);
       }
       if (last >= 0) base = last + HARD_DISTANCE;
     }
@@ -151,7 +173,7 @@ export function prepareDocument(
     fields,
     words: Uint32Array.from(words),
     places: Uint32Array.from(places),
-    distinctWords: [...distinct],
+    distinctWords: Array.from(distinct, (held) => [...(held ?? [])]),
   };
 }
 
@@ -189,7 +211,7 @@ export function storeDocument(index: SearchIndex, prepared: PreparedDocument): v
     setCell(column, number, content);
   }
   countFields(index, source, 1);
-  index.arrival = undefined;
+  index.derived = nothingDerived();
 }
 
 /** Answers the order the document had, or undefined when there was none. */
@@ -202,17 +224,17 @@ export function removeDocument(index: SearchIndex, id: string): number | undefin
   index.numberOfId.delete(id);
   for (const column of index.columns.values()) clearCell(column, number);
   countFields(index, document.source, -1);
-  index.arrival = undefined;
+  index.derived = nothingDerived();
   return document.order;
 }
 
 /** Numbers of all documents, in order of arrival. */
 export function arrivalOrder(index: SearchIndex): Uint32Array {
-  if (index.arrival === undefined) {
+  if (index.derived.arrival === undefined) {
     const numbers = Uint32Array.from(index.numberOfId.values());
-    index.arrival = numbers.sort(
+    index.derived.arrival = numbers.sort(
       (a, b) => (index.documents[a]?.order ?? 0) - (index.documents[b]?.order ?? 0),
     );
   }
-  return index.arrival;
+  return index.derived.arrival;
 }

@@ -2,12 +2,11 @@ import { selects } from './attribute-selection.ts';
 import { EngineError } from './errors.ts';
 import { distributeFacets, facetAttributes } from './facets.ts';
 import { compileFilter } from './filter-compile.ts';
-import { evaluateFilter } from './filter-evaluate.ts';
 import { filterTarget } from './filter-target.ts';
 import { createHitFormatter } from './format-hit.ts';
 import type { Json, JsonObject } from './json.ts';
 import { findDocuments, type Found, type SearchScope } from './find-documents.ts';
-import { liveDocuments } from './live-documents.ts';
+import { documentsAllowed } from './live-documents.ts';
 import { bucketSort, type Standing } from './ranking-rules.ts';
 import { scoreOf, type Score } from './score.ts';
 import type { SearchIndex } from './search-index.ts';
@@ -30,7 +29,7 @@ export function search(index: SearchIndex, indexUid: string, request: SearchRequ
   const everything = distinct !== null || request.rankingScoreThreshold !== null;
   const needed = everything ? Infinity : paging.end;
 
-  let matches = bucketSort(found.matches, found.ranking.steps, needed);
+  let matches = bucketSort(index, found.matches, found.ranking.steps, needed);
   let total = found.matches.length;
   let counted = found.matches;
   const score = createScorer(index, found);
@@ -90,7 +89,6 @@ export function readScope(
     request.filter,
     filterTarget(settings, indexUid, 'invalid_search_filter'),
   );
-  const live = liveDocuments(index);
   if (request.sort.length > 0 && !settings.rankingRules.includes('sort')) {
     throw new EngineError(
       'invalid_search_sort',
@@ -108,7 +106,7 @@ export function readScope(
     );
   }
   return {
-    allowed: node === null ? live : evaluateFilter(node, (name) => index.columns.get(name), live),
+    allowed: documentsAllowed(index, node),
     sort: parseSort(request.sort, index, 'invalid_search_sort'),
     attributesToSearchOn: request.attributesToSearchOn,
     strategy: request.matchingStrategy,

@@ -1,13 +1,12 @@
 import { applyTask, type Change, type ResolvedPayload } from './apply-task.ts';
 import type { Engine } from './engine.ts';
 import { compileFilter } from './filter-compile.ts';
-import { evaluateFilter } from './filter-evaluate.ts';
 import { filterTarget } from './filter-target.ts';
 import { EngineError, errorBody, indexNotFound, toEngineError } from './errors.ts';
 import { buildSearchIndex, updateSearchIndex } from './index-builder.ts';
 import type { Json, JsonObject } from './json.ts';
-import { liveDocuments } from './live-documents.ts';
-import { createSearchIndex } from './search-index.ts';
+import { documentsAllowed } from './live-documents.ts';
+import { createSearchIndex, nothingDerived } from './search-index.ts';
 import { initialDetails, type Task, type TaskPayload } from './tasks.ts';
 
 /** Writes that arrive together wait this long, so that none runs inside its own request. */
@@ -169,7 +168,7 @@ function idsMatching(engine: Engine, uid: string, filter: Json): string[] {
   if (index === undefined) throw indexNotFound(uid);
   const node = compileFilter(filter, filterTarget(index.settings, uid, 'invalid_document_filter'));
   if (node === null) return [];
-  const found = evaluateFilter(node, (name) => index.columns.get(name), liveDocuments(index));
+  const found = documentsAllowed(index, node);
   return index.documents.flatMap((document, number) =>
     document !== undefined && found[number] ? [document.id] : [],
   );
@@ -243,7 +242,10 @@ async function bringToSearch(engine: Engine, change: Change): Promise<void> {
       const index = searchIndexes.get(change.uid);
       if (stored === undefined || index === undefined) return;
       if (change.reindex) searchIndexes.set(change.uid, await buildSearchIndex(stored));
-      else index.settings = stored.settings;
+      else {
+        index.settings = stored.settings;
+        index.derived = nothingDerived();
+      }
     }
   }
 }

@@ -1,6 +1,7 @@
 import type { SuggestAnswer } from '#shared/api/search.ts';
 import { TROUBLE_SHORT, TROUBLES, type Trouble } from '#shared/vocabulary/troubles.ts';
 import { NOTES_INDEX } from '../../search/note-document.ts';
+import type { Config } from '../config.ts';
 import type { Deps } from '../deps.ts';
 import { searchingClient } from './search-client.ts';
 
@@ -20,12 +21,17 @@ export async function suggest(deps: Deps, text: string): Promise<SuggestAnswer> 
     )
     .slice(0, SUGGESTED_TROUBLES)
     .map((id) => ({ kind: 'trouble' as const, text: TROUBLE_SHORT[id], noteId: null }));
-  const notes = await suggestTitles(deps, text, SUGGESTED_NOTES).catch(() => []);
+  const notes = await suggestTitles(deps.config, text, SUGGESTED_NOTES).catch(() => []);
   return { suggestions: [...troubles, ...notes] };
 }
 
-async function suggestTitles(deps: Deps, q: string, limit: number) {
-  const client = await searchingClient(deps.config);
+/** Notes whose titles hold the words typed so far. */
+export async function suggestTitles(
+  config: Config,
+  q: string,
+  limit: number,
+): Promise<SuggestAnswer['suggestions']> {
+  const client = await searchingClient(config);
   const { results } = await client.multiSearch({
     queries: [
       {

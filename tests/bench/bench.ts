@@ -1,3 +1,4 @@
+import { parseArgs } from 'node:util';
 import express from 'express';
 import mysql from 'mysql2/promise';
 import sharp from 'sharp';
@@ -8,6 +9,7 @@ import { simulateFiring } from '../../seeds/simulation/simulate-firing.ts';
 import type { Deps } from '../../server/deps.ts';
 import { encodePicture } from '../../server/pictures/encode-picture.ts';
 import { reindex } from '../../server/search/reindex.ts';
+import { benchEngine } from './bench-engine.ts';
 import { benchSearch } from './bench-search.ts';
 import { get, listen, withStack } from './bench-stack.ts';
 import { milliseconds, percentile, print, throughput, timeEach } from './measure.ts';
@@ -100,12 +102,21 @@ async function benchPictures(): Promise<void> {
   );
 }
 
-await withStack(async ({ deps, databaseUrl, serve }) => {
-  await loadDemo(deps);
-  await reindex(deps);
-  const port = await serve();
-  await benchNotePage(deps, port, databaseUrl);
-  await benchSearch(deps, port);
-  await benchReading();
-  await benchPictures();
+/** `npm run bench -- --documents 100000`: the engine alone; without, the usual run. */
+const { values: options } = parseArgs({
+  options: { documents: { type: 'string' } },
 });
+
+if (options.documents !== undefined) {
+  await benchEngine(Number(options.documents));
+} else {
+  await withStack(async ({ deps, databaseUrl, serve }) => {
+    await loadDemo(deps);
+    await reindex(deps);
+    const port = await serve();
+    await benchNotePage(deps, port, databaseUrl);
+    await benchSearch(deps, port);
+    await benchReading();
+    await benchPictures();
+  });
+}
