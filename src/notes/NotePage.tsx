@@ -4,6 +4,7 @@ import { paths } from '#shared/paths.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { TakeDownButton } from '../desk/TakeDownButton.tsx';
 import { ProblemPage } from '../http/ProblemPage.tsx';
+import { NoteQuestions } from '../questions/NoteQuestions.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';
 import { Notice } from '../ui/Notice.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
@@ -35,6 +36,7 @@ export function NotePage() {
     <NoteView
       page={page}
       units={units}
+      questions={page.publishedAt !== null && <NoteQuestions noteId={page.id} />}
       recordOf={page.publishedAt === null ? 'handed-in' : 'published'}
       aside={
         <div className="not-in-print space-y-3">

@@ -28,10 +28,12 @@ interface Props {
   readonly recordOf?: RecordOf;
   /** Buttons and notices of the page that shows it. */
   readonly aside?: ReactNode;
+  /** What readers ask about it, where it is published. */
+  readonly questions?: ReactNode;
 }
 
 /** A note whole: the same for readers, the author's preview and the desk. */
-export function NoteView({ page, units, recordOf = 'published', aside }: Props) {
+export function NoteView({ page, units, recordOf = 'published', aside, questions }: Props) {
   const { row, fields, kiln } = page;
   const troubles = troubleWords(row, units);
   const disputed = disputedWords(row);
@@ -109,6 +111,7 @@ export function NoteView({ page, units, recordOf = 'published', aside }: Props) 
         units={units}
       />
       <TriedIt page={page} units={units} />
+      {questions}
       <CautionNote>
         <p>{CAUTIONS_IN_BRIEF}</p>
         <p>
