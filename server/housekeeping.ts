@@ -2,6 +2,7 @@ import { setTimeout as sleep } from 'node:timers/promises';
 import type { Knex } from 'knex';
 import { purgeAccounts } from './accounts/purge-accounts.ts';
 import type { Deps } from './deps.ts';
+import { purgeRemovedNotes } from './notes/purge-notes.ts';
 import { purgeOutbox } from './outbox/job-repository.ts';
 import { sweepUploads } from './storage/sweep-uploads.ts';
 
@@ -15,11 +16,12 @@ export async function purgeIdempotencyKeys(db: Knex): Promise<void> {
     .delete();
 }
 
-/** Removes what has had its time: ended sessions, old links, counts of tries, finished jobs. */
+/** Removes what has had its time: ended sessions, old links, finished jobs, notes long removed. */
 export async function tidyUp(db: Knex): Promise<void> {
   await purgeAccounts(db);
   await purgeOutbox(db);
   await purgeIdempotencyKeys(db);
+  await purgeRemovedNotes(db);
 }
 
 /** Tidies up every ten minutes until it is stopped. */

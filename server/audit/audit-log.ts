@@ -16,6 +16,7 @@ export type AuditAct =
   | 'dispute-left'
   | 'question-removed'
   | 'removed'
+  | 'brought-back'
   | 'role-changed'
   | 'suspended'
   | 'reinstated'

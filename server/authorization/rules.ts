@@ -30,6 +30,7 @@ export type NoteAction =
   | 'take-back'
   | 'revise'
   | 'remove'
+  | 'restore'
   | 'claim'
   | 'decide'
   | 'take-down'
@@ -66,7 +67,8 @@ const EDITABLE: readonly NoteStatus[] = ['draft', 'sent-back'];
 
 export function canOnNote(actor: Actor, action: NoteAction, note: NoteSubject): boolean {
   const own = isMember(actor) && note.authorId !== null && actor.id === note.authorId;
-  if (note.removed) return false;
+  // A removed note is there for nobody but its author, and for one act.
+  if (note.removed) return own && action === 'restore';
   switch (action) {
     case 'read':
       return note.hasPublished || own || (isStaff(actor) && isWaiting(note.status));
@@ -84,6 +86,8 @@ export function canOnNote(actor: Actor, action: NoteAction, note: NoteSubject): 
       return own && ['published', 'declined', 'taken-down'].includes(note.status);
     case 'remove':
       return own && !note.hasPublished && !isWaiting(note.status);
+    case 'restore':
+      return false;
     case 'claim':
       return (
         isStaff(actor) &&

@@ -8,7 +8,15 @@ import { RATES } from '../http/rates.ts';
 import { markMended } from '../desk/remark-service.ts';
 import { picturesOfNote } from '../pictures/picture-repository.ts';
 import { findKiln } from '../kilns/kiln-repository.ts';
-import { ownNote, removeNote, reviseNote, saveNote, startNote, takeBack } from './draft-service.ts';
+import {
+  ownNote,
+  removeNote,
+  restoreNote,
+  reviseNote,
+  saveNote,
+  startNote,
+  takeBack,
+} from './draft-service.ts';
 import { handInNote } from './hand-in-note.ts';
 import { presentDraft } from './note-presenter.ts';
 import { previewNote } from './preview-note.ts';
@@ -125,6 +133,16 @@ export const draftRoutes: readonly Route[] = [
     async handle({ db, actor, params }) {
       await removeNote(db, memberOf(actor), params.id);
       return { message: 'The note is removed.' };
+    },
+  }),
+  defineRoute({
+    method: 'post',
+    path: '/api/notes/:id/restore',
+    access: 'member',
+    params: idParams,
+    async handle(context) {
+      await restoreNote(context.db, memberOf(context.actor), context.params.id);
+      return answerDraft(context, context.params.id);
     },
   }),
 ];

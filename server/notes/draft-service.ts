@@ -12,7 +12,9 @@ import {
   findNote,
   insertNote,
   lockNote,
+  lockRemovedNote,
   markNoteRemoved,
+  markNoteRestored,
   moveNote,
   type NoteRecord,
   saveDraft,
@@ -165,7 +167,7 @@ export async function reviseNote(db: Knex, actor: SignedIn, noteId: number): Pro
   await moveOwn(db, actor, noteId, 'revise', 'revise', {}, false);
 }
 
-/** Removes a note that was never published, or withdrawn; it can be brought back from the trash. */
+/** Removes a note that was never published, or withdrawn; it can be brought back for a while. */
 export async function removeNote(db: Knex, actor: SignedIn, noteId: number): Promise<void> {
   await inTransaction(db, async (trx) => {
     const note = await lockedOwnNote(trx, actor, noteId, 'remove');
@@ -177,6 +179,26 @@ export async function removeNote(db: Knex, actor: SignedIn, noteId: number): Pro
       targetKind: 'note',
       targetId: noteId,
       before: { status: note.status },
+    });
+  });
+}
+
+/** Brings back a note its author removed, as it was. Asked for twice, it is done once. */
+export async function restoreNote(db: Knex, actor: SignedIn, noteId: number): Promise<void> {
+  await inTransaction(db, async (trx) => {
+    const note = await lockRemovedNote(trx, noteId);
+    if (!note) {
+      await ownNote(trx, actor, noteId);
+      return;
+    }
+    if (!canOnNote(actor, 'restore', noteSubject(note, true))) throw new AppError('not-found');
+    await markNoteRestored(trx, noteId);
+    await addToAuditLog(trx, {
+      actorId: actor.id,
+      act: 'brought-back',
+      targetKind: 'note',
+      targetId: noteId,
+      after: { status: note.status },
     });
   });
 }

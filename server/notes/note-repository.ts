@@ -67,10 +67,14 @@ const toRecord = (row: RawNote): NoteRecord => ({
   firedOn: dayOrNull(row.fired_on),
 });
 
-const selectNotes = (db: Knex) =>
+const selectNotes = (db: Knex, which: 'living' | 'removed' = 'living') =>
   db('notes')
     .leftJoin('members as claimer', 'claimer.id', 'notes.claimed_by')
-    .whereNull('notes.removed_at')
+    .where((there) => {
+      void (which === 'living'
+        ? there.whereNull('notes.removed_at')
+        : there.whereNotNull('notes.removed_at'));
+    })
     .select<RawNote[]>(
       'notes.id',
       'notes.author_id',
@@ -99,6 +103,12 @@ export async function findNote(db: Knex, noteId: number): Promise<NoteRecord | n
 /** The same with the row locked until the transaction ends: for decisions and hand-ins. */
 export async function lockNote(trx: Knex, noteId: number): Promise<NoteRecord | null> {
   const [row] = await selectNotes(trx).where('notes.id', noteId).forUpdate('notes');
+  return row ? toRecord(row) : null;
+}
+
+/** A note in the trash, its row locked: the one way to one. */
+export async function lockRemovedNote(trx: Knex, noteId: number): Promise<NoteRecord | null> {
+  const [row] = await selectNotes(trx, 'removed').where('notes.id', noteId).forUpdate('notes');
   return row ? toRecord(row) : null;
 }
 
@@ -192,6 +202,10 @@ export async function markNoteRemoved(db: Knex, noteId: number): Promise<void> {
   await db('notes')
     .where({ id: noteId })
     .update({ removed_at: db.fn.now(3) });
+}
+
+export async function markNoteRestored(db: Knex, noteId: number): Promise<void> {
+  await db('notes').where({ id: noteId }).update({ removed_at: null });
 }
 
 /** All notes of one author, newest firing first. */

@@ -58,6 +58,7 @@ const ACTS: Readonly<Record<string, string>> = {
   'taken-down': 'taken down',
   'question-removed': 'question removed',
   removed: 'removed',
+  'brought-back': 'brought back',
   'role-changed': 'role changed',
   suspended: 'suspended',
   reinstated: 'let in again',

@@ -24,7 +24,7 @@ export function RemoveNoteButton({ remove }: { readonly remove: DraftActs['remov
           </>
         }
       >
-        <p>It leaves your notebook with its record and pictures.</p>
+        <p>It leaves your notebook with its record and pictures. You can undo it right after.</p>
         {remove.isError && (
           <p role="alert" className="text-caution">
             {remove.error.message}

@@ -58,6 +58,11 @@ export function tickRemark(noteId: number, remarkId: number, mended: boolean): P
   });
 }
 
+/** Brings a removed note back as it was. */
+export function restoreNote(noteId: number): Promise<Draft> {
+  return send({ method: 'POST', path: address(noteId, 'restore'), answer: draftSchema });
+}
+
 export function removeNote(noteId: number) {
   return send({ method: 'DELETE', path: `/api/notes/${String(noteId)}`, answer: doneSchema });
 }

@@ -4,7 +4,7 @@ import type { Draft } from '#shared/api/notes.ts';
 import { paths } from '#shared/paths.ts';
 import { noteQueries } from '../notes/note-queries.ts';
 import { useMessages } from '../ui/useMessages.ts';
-import { handIn, removeNote, revise, takeBack } from './draft-mutations.ts';
+import { handIn, removeNote, restoreNote, revise, takeBack } from './draft-mutations.ts';
 import type { DraftKeeper } from './draft-keeper.ts';
 
 /** What an author does with a note as a whole. Each tells how it went and can be tried again. */
@@ -23,6 +23,22 @@ export function useDraftActs(keeper: DraftKeeper, noteId: number) {
     tell({ kind: 'done', text });
     window.scrollTo({ top: 0 });
     await refresh();
+  };
+  /** Goes on after this page has gone: the message with the way back outlives it. */
+  const bringBack = async (): Promise<void> => {
+    try {
+      const draft = await restoreNote(noteId);
+      client.setQueryData(noteQueries.draft(noteId).queryKey, draft);
+      tell({ kind: 'done', text: 'The note is back.' });
+      await navigate(paths.write(noteId));
+      await refresh();
+    } catch (error) {
+      tell({
+        kind: 'error',
+        text: `The note did not come back: ${error instanceof Error ? error.message : 'try again.'}`,
+        action: { label: 'Try again', onClick: () => void bringBack() },
+      });
+    }
   };
   return {
     handIn: useMutation({
@@ -44,10 +60,18 @@ export function useDraftActs(keeper: DraftKeeper, noteId: number) {
       onSuccess: done('Open for a new revision. What is published stays up meanwhile.'),
     }),
     remove: useMutation({
-      mutationFn: () => removeNote(noteId),
+      mutationFn: async () => {
+        // What was typed last goes along, so that it comes back with the note.
+        await keeper.flush();
+        return removeNote(noteId);
+      },
       onSuccess: async (answer) => {
         keeper.abandon();
-        tell({ kind: 'done', text: answer.message });
+        tell({
+          kind: 'done',
+          text: answer.message,
+          action: { label: 'Undo', onClick: () => void bringBack() },
+        });
         await navigate(paths.notebook);
         await refresh();
       },
