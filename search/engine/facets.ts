@@ -2,7 +2,7 @@ import type { Column } from './columns.ts';
 import { EngineError } from './errors.ts';
 import { filterablePatterns, isFilterable } from './filter-target.ts';
 import type { JsonObject } from './json.ts';
-import type { SearchIndex } from './search-index.ts';
+import type { FacetValues, SearchIndex } from './search-index.ts';
 import type { FacetOrder, Settings } from './settings.ts';
 
 export type FacetCount = { value: string; count: number };
@@ -66,6 +66,40 @@ export function orderedCounts(
   return ordered.slice(0, most);
 }
 
+function countValues(column: Column, documents: readonly number[]): FacetValues {
+  const numbers = new Map<number, number>();
+  for (const document of documents) {
+    const cell = column.cells[document];
+    if (cell === undefined) continue;
+    for (const number of cell.numbers) numbers.set(number, (numbers.get(number) ?? 0) + 1);
+  }
+  const ascending = [...numbers].sort(([a], [b]) => a - b);
+  return {
+    counts: [
+      ...ascending.map(([value, count]) => ({ value: String(value), count })),
+      ...countTexts(column, documents),
+    ],
+    lowest: ascending[0]?.[0],
+    highest: ascending.at(-1)?.[0],
+  };
+}
+
+/** Counts over all documents are asked for with every visit, so they are kept until the next write. */
+function valuesOf(
+  index: SearchIndex,
+  attribute: string,
+  column: Column,
+  documents: readonly number[],
+): FacetValues {
+  if (documents.length !== index.numberOfId.size) return countValues(column, documents);
+  let known = index.derived.counts.get(attribute);
+  if (known === undefined) {
+    known = countValues(column, documents);
+    index.derived.counts.set(attribute, known);
+  }
+  return known;
+}
+
 /** `facetDistribution` and `facetStats` over all given documents. */
 export function distributeFacets(
   index: SearchIndex,
@@ -80,22 +114,10 @@ export function distributeFacets(
       distribution.push([attribute, {}]);
       continue;
     }
-    const numbers = new Map<number, number>();
-    for (const document of documents) {
-      const cell = column.cells[document];
-      if (cell === undefined) continue;
-      for (const number of cell.numbers) numbers.set(number, (numbers.get(number) ?? 0) + 1);
-    }
-    const ascending = [...numbers].sort(([a], [b]) => a - b);
-    const lowest = ascending[0];
-    const highest = ascending.at(-1);
+    const { counts, lowest, highest } = valuesOf(index, attribute, column, documents);
     if (lowest !== undefined && highest !== undefined) {
-      stats.push([attribute, { min: lowest[0], max: highest[0] }]);
+      stats.push([attribute, { min: lowest, max: highest }]);
     }
-    const counts = [
-      ...ascending.map(([value, count]) => ({ value: String(value), count })),
-      ...countTexts(column, documents),
-    ];
     const kept = orderedCounts(
       counts,
       facetOrder(attribute, index.settings),

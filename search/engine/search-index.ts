@@ -61,6 +61,15 @@ export type Derived = {
   conditions: Map<string, Uint8Array>;
   /** Ways to satisfy a query, by its words. */
   graphs: Map<string, QueryGraph>;
+  /** Values of an attribute counted over all documents. */
+  counts: Map<string, FacetValues>;
+};
+
+/** Values counted for one attribute, in order of the values, and the extremes of its numbers. */
+export type FacetValues = {
+  counts: { value: string; count: number }[];
+  lowest: number | undefined;
+  highest: number | undefined;
 };
 
 export const nothingDerived = (): Derived => ({
@@ -68,6 +77,7 @@ export const nothingDerived = (): Derived => ({
   live: undefined,
   conditions: new Map(),
   graphs: new Map(),
+  counts: new Map(),
 });
 
 export function createSearchIndex(settings: Settings): SearchIndex {

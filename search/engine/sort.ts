@@ -39,6 +39,7 @@ export function sortKey(
 ): SortKey {
   const cell = column?.cells[document];
   if (column === undefined || cell === undefined) return undefined;
+  if (cell.numbers.length === 1) return cell.numbers[0];
   if (cell.numbers.length > 0) {
     return descending ? Math.max(...cell.numbers) : Math.min(...cell.numbers);
   }
