@@ -34,7 +34,7 @@ export function Layout() {
   return (
     <div className="mx-auto flex min-h-dvh max-w-page flex-col px-4 sm:px-8">
       <SkipLink to="#main">To the page</SkipLink>
-      <header className="not-in-print flex flex-wrap items-center gap-x-8 gap-y-1 border-b border-line py-3">
+      <header className="not-in-print relative flex flex-wrap items-center gap-x-8 gap-y-1 border-b border-line py-3">
         <Link
           to={paths.front}
           className="inline-flex min-h-11 items-center gap-2.5 text-lead font-[650] text-soot no-underline"

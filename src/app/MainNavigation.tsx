@@ -7,6 +7,8 @@ interface Way {
   readonly label: string;
   /** Pages below this address count as being here; the address itself when left out. */
   readonly below?: string;
+  /** On a phone beside the name of the site, so that the other ways have their rows to themselves. */
+  readonly aloft?: boolean;
 }
 
 /** Where one can go; the ways shown are those the server says this reader has. */
@@ -37,7 +39,7 @@ export function MainNavigation() {
         ))}
         {known &&
           (me ? (
-            <Item to={paths.settings} label={me.name} />
+            <Item to={paths.settings} label={me.name} aloft />
           ) : (
             <Item to={paths.signIn(here === '/' ? '' : here)} label="Sign in" />
           ))}
@@ -46,22 +48,22 @@ export function MainNavigation() {
   );
 }
 
-function Item({ to, label, below }: Way) {
+function Item({ to, label, below, aloft = false }: Way) {
   const { pathname } = useLocation();
   const isBelow = below !== undefined && pathname.startsWith(below);
   return (
-    <li>
+    <li className={aloft ? 'max-sm:absolute max-sm:top-3 max-sm:right-0 max-sm:max-w-[60%]' : ''}>
       <NavLink
         to={to}
         className={({ isActive }) =>
-          `inline-flex min-h-11 items-center border-b-2 no-underline ${
+          `inline-flex min-h-11 max-w-full items-center border-b-2 no-underline ${
             isActive || isBelow
               ? 'border-verdigris font-[600] text-verdigris'
               : 'border-transparent text-soot-2 hover:text-soot'
           }`
         }
       >
-        {label}
+        <span className="truncate">{label}</span>
       </NavLink>
     </li>
   );

@@ -187,6 +187,7 @@ function Results({ found, address, isSettled, hasTemperature, go }: ResultsProps
           {isNothing && (
             <NothingFound
               address={address}
+              partCount={found.parts.filter(({ off }) => !off).length}
               loosen={found.loosen}
               onLeaveOut={(key) => go(withPartToggled(address, key))}
               onClearFilters={() => go(withoutFacets(address))}

@@ -7,18 +7,20 @@ import { tickedCount, type FindAddress } from './find-address.ts';
 
 interface Props {
   readonly address: FindAddress;
+  /** How many parts the question was read as and asks for. */
+  readonly partCount: number;
   readonly loosen: FindAnswer['loosen'];
   readonly onLeaveOut: (key: string) => void;
   readonly onClearFilters: () => void;
 }
 
 /** No note fits: which part to leave out, and how many notes that would find. */
-export function NothingFound({ address, loosen, onLeaveOut, onClearFilters }: Props) {
+export function NothingFound({ address, partCount, loosen, onLeaveOut, onClearFilters }: Props) {
   const ticked = tickedCount(address);
   return (
     <EmptyState
       title={
-        ticked === 0 && loosen.length === 0 ? 'No note has these words' : 'No note fits all of this'
+        ticked === 0 && partCount === 0 ? 'No note has these words' : 'No note fits all of this'
       }
       action={
         <>
@@ -37,7 +39,9 @@ export function NothingFound({ address, loosen, onLeaveOut, onClearFilters }: Pr
     >
       {loosen.length > 0 || ticked > 0
         ? 'Loosen one part of it, or look through'
-        : 'Say it in other words, or with fewer; or look through'}{' '}
+        : partCount > 1
+          ? 'Leave more than one part of it out, say it otherwise, or look through'
+          : 'Say it in other words, or with fewer; or look through'}{' '}
       <Link to={paths.newest} className="link">
         all notes, newest first
       </Link>

@@ -28,7 +28,7 @@ export function ProblemPage({ error, onRetry }: Props) {
     );
   }
   if (error instanceof ProblemError) {
-    const { status, detail } = error.problem;
+    const { status, title, detail } = error.problem;
     if (status === 404) return <NotFoundPage />;
     if (status === 401) {
       return (
@@ -52,13 +52,15 @@ export function ProblemPage({ error, onRetry }: Props) {
           title="You may not see this"
           action={<LinkButton to={paths.front}>Front page</LinkButton>}
         >
-          {detail}
+          {detail === title
+            ? 'Your account does not open this page. If you think it should, ask whoever looks after Spyhole.'
+            : detail}
         </EmptyState>
       );
     }
     return (
-      <EmptyState headingLevel={1} title={error.problem.title} action={retry}>
-        {detail === error.problem.title
+      <EmptyState headingLevel={1} title={title} action={retry}>
+        {detail === title
           ? 'It is not your doing, and it has been noted down. Try again in a moment.'
           : detail}
         {error.problem.instance && (

@@ -4,7 +4,6 @@ import { formatTemperature } from '#shared/units/temperature.ts';
 import type { Units } from '#shared/units/units.ts';
 import {
   BARE_CLAY,
-  COLOURS,
   CRACK_NOTICED,
   CRACK_PLACES,
   FORMS,
@@ -14,6 +13,13 @@ import {
   SURFACE_FAULTS,
 } from '#shared/vocabulary/ware.ts';
 import { DataTable } from '../ui/DataTable.tsx';
+
+/** The colour against what was hoped for, in words that stand among others. */
+const COLOUR_WORDS = {
+  'as-hoped': 'colour as hoped',
+  partly: 'colour partly as hoped',
+  not: 'colour not as hoped',
+} as const;
 
 type Piece = NotePageData['fields']['pieces'][number];
 
@@ -42,7 +48,7 @@ function glazeWords(piece: Piece): string {
 function resultWords(piece: Piece): string {
   return joined([
     piece.melt !== null && MELTS[piece.melt].toLowerCase(),
-    piece.colour !== null && `colour ${COLOURS[piece.colour].toLowerCase()}`,
+    piece.colour !== null && COLOUR_WORDS[piece.colour],
     piece.bareClay !== null &&
       piece.bareClay !== 'not-applicable' &&
       `bare clay ${BARE_CLAY[piece.bareClay].toLowerCase()}`,

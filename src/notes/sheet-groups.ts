@@ -72,7 +72,7 @@ function climbGroup(
       figure('Target', planned(plan, units)),
       figure('Peak', peak(plan, units)),
       figure('To temperature', shown(plan.timeToTemperatureMinutes, formatDuration)),
-      figure('Hold', plan.noHold ? 'none' : shown(plan.holdKeptMinutes, formatDuration)),
+      figure('Hold', plan.noHold ? 'None' : shown(plan.holdKeptMinutes, formatDuration)),
       figure('550 to 600 °C', crossing(findings, units)),
       figure('Stall', stalls(findings, units)),
     ],
@@ -107,7 +107,7 @@ function recipeGroup({ reduction, pieces }: Fields, units: Units): SheetGroup {
       figure(
         'Burped',
         joined(
-          shown(reduction.burpedTimes, (times) => (times === 0 ? 'no' : `${String(times)} ×`)),
+          shown(reduction.burpedTimes, (times) => (times === 0 ? 'No' : `${String(times)} ×`)),
           shown(
             reduction.burpedFirstAfterSeconds,
             (seconds) => `first after ${formatSeconds(seconds)}`,
@@ -143,7 +143,7 @@ function burnerGroup({ setUp }: Fields, units: Units): SheetGroup {
       text('Flame at the spyhole', term(kilnWords.FLAMES, setUp.flameAtSpyhole)),
       figure(
         'Flue covered',
-        shown(setUp.flueCoverPercent, (value) => `up to ${String(value)}\u00a0%`),
+        shown(setUp.flueCoverPercent, (value) => `Up to ${String(value)}\u00a0%`),
       ),
       figure(
         'Lid gap',

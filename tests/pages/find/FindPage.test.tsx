@@ -132,6 +132,13 @@ describe('FindPage', () => {
     await waitFor(() => expect(router.state.location.search).toContain('off=temperature'));
   });
 
+  it('does not blame the words when it is the parts together that no note fits', async () => {
+    answerFetch({ ...VISITOR, [`GET ${QUESTION}`]: ok(anAnswer({ hits: [], total: 0 })) });
+    renderPages(ROUTES, '/find?q=stalled+at+700');
+    expect(await screen.findByText('No note fits all of this')).toBeVisible();
+    expect(screen.getByText(/Leave more than one part of it out/)).toBeVisible();
+  });
+
   it('gives the pooled answer with no change beside the changes, and cautions beside theirs', async () => {
     const pooled = {
       trouble: 'stall',
