@@ -1,4 +1,4 @@
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import type { FindingDispute } from '#shared/api/disputes.ts';
 import { findingText, type Finding } from '#shared/firing/findings.ts';
 import { DISPUTE_SENTENCE, isReason } from '#shared/note/finding-disputes.ts';
@@ -22,15 +22,9 @@ export function DisputeActs({ noteId, finding, dispute, units }: Props) {
   const [open, setOpen] = useState(false);
   const [sentence, setSentence] = useState('');
   const [asked, setAsked] = useState(false);
-  const button = useRef<HTMLButtonElement>(null);
   const tell = useMessages();
   const { disagree, takeBack } = useDisputes(noteId);
   const said = findingText(finding, units);
-  /** The button pressed is another one now; the focus stays where it was. */
-  const done = (text: string): void => {
-    tell({ kind: 'done', text });
-    button.current?.focus();
-  };
   const submit = (): void => {
     setAsked(true);
     if (!isReason(sentence)) return;
@@ -41,7 +35,7 @@ export function DisputeActs({ noteId, finding, dispute, units }: Props) {
           setOpen(false);
           setSentence('');
           setAsked(false);
-          done('Your disagreement stands beside the finding.');
+          tell({ kind: 'done', text: 'Your disagreement stands beside the finding.' });
         },
       },
     );
@@ -50,7 +44,7 @@ export function DisputeActs({ noteId, finding, dispute, units }: Props) {
     takeBack.mutate(
       { id, version },
       {
-        onSuccess: () => done('Taken back. The finding counts again.'),
+        onSuccess: () => tell({ kind: 'done', text: 'Taken back. The finding counts again.' }),
         onError: (error) =>
           tell({
             kind: 'error',
@@ -62,26 +56,16 @@ export function DisputeActs({ noteId, finding, dispute, units }: Props) {
   // A moderator’s word is the last one.
   const isSettled = dispute !== null && (dispute.state === 'restored' || dispute.id === null);
   return (
-    <div className="not-in-print">
-      {dispute === null && (
+    <div className="not-in-print -mx-1 -my-1">
+      {/* One button for both, so that the focus stays on it. */}
+      {!isSettled && (
         <Button
-          ref={button}
           kind="quiet"
-          label={`I disagree: ${said}`}
-          onClick={() => setOpen(true)}
-        >
-          I disagree
-        </Button>
-      )}
-      {dispute !== null && !isSettled && (
-        <Button
-          ref={button}
-          kind="quiet"
-          label={`Take it back: ${said}`}
+          label={`${dispute ? 'Take it back' : 'I disagree'}: ${said}`}
           busy={takeBack.isPending}
-          onClick={() => undo(dispute.id ?? 0, dispute.version)}
+          onClick={() => (dispute ? undo(dispute.id ?? 0, dispute.version) : setOpen(true))}
         >
-          Take it back
+          {dispute ? 'Take it back' : 'I disagree'}
         </Button>
       )}
       <Dialog

@@ -29,7 +29,7 @@ export function FindingList({ page, units, actOn }: Props) {
         return (
           <li
             key={`${finding.code}-${String(finding.fromMinute)}`}
-            className="flex flex-wrap items-baseline justify-between gap-x-6 border-b border-line py-1.5"
+            className="grid items-start gap-x-6 border-b border-line py-1.5 sm:grid-cols-[minmax(0,1fr)_auto]"
           >
             <div className="min-w-0">
               <p className={finding.trouble && counts ? 'font-[600]' : ''}>

@@ -28,12 +28,14 @@ interface Props {
   readonly recordOf?: RecordOf;
   /** Buttons and notices of the page that shows it. */
   readonly aside?: ReactNode;
+  /** What that page adds after all that the note itself says. */
+  readonly after?: ReactNode;
   /** What readers ask about it, where it is published. */
   readonly questions?: ReactNode;
 }
 
 /** A note whole: the same for readers, the author's preview and the desk. */
-export function NoteView({ page, units, recordOf = 'published', aside, questions }: Props) {
+export function NoteView({ page, units, recordOf = 'published', aside, after, questions }: Props) {
   const { row, fields, kiln } = page;
   const troubles = troubleWords(row, units);
   const disputed = disputedWords(row);
@@ -77,7 +79,6 @@ export function NoteView({ page, units, recordOf = 'published', aside, questions
           </>
         )}
         <p className="max-w-measure text-lead">{inShort(page.summary, units).join(' ')}</p>
-        {disputed !== null && <p className="text-small text-soot-2">{disputed}</p>}
         {troubles.length > 0 && (
           <p className="text-small">
             <span className="text-soot-2">Troubles: </span>
@@ -88,6 +89,7 @@ export function NoteView({ page, units, recordOf = 'published', aside, questions
                 {fields.result.causes.map((cause) => CAUSES[cause].toLowerCase()).join(', ')}
               </span>
             )}
+        {disputed !== null && <p className="text-small text-soot-2">{disputed}</p>}
           </p>
         )}
       </header>
@@ -111,6 +113,7 @@ export function NoteView({ page, units, recordOf = 'published', aside, questions
         units={units}
       />
       <TriedIt page={page} units={units} />
+      {after}
       {questions}
       <CautionNote>
         <p>{CAUTIONS_IN_BRIEF}</p>

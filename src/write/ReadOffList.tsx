@@ -48,16 +48,18 @@ function ReadOff({ finding }: { readonly finding: Finding }) {
   };
   return (
     <li className="@container border-b border-line py-1.5">
-      <div className="flex flex-wrap items-baseline justify-between gap-x-6">
+      <div className="grid items-start gap-x-6 sm:grid-cols-[minmax(0,1fr)_auto]">
         <p className={`min-w-0 ${finding.trouble && !dispute ? 'font-[600]' : ''}`}>{said}</p>
         {editable && (
-          <Button
-            kind="quiet"
-            label={dispute ? `Take it back: ${said}` : `I disagree: ${said}`}
-            onClick={dispute ? takeBack : () => put('')}
-          >
-            {dispute ? 'Take it back' : 'I disagree'}
-          </Button>
+          <div className="-mx-1 -my-1">
+            <Button
+              kind="quiet"
+              label={dispute ? `Take it back: ${said}` : `I disagree: ${said}`}
+              onClick={dispute ? takeBack : () => put('')}
+            >
+              {dispute ? 'Take it back' : 'I disagree'}
+            </Button>
+          </div>
         )}
       </div>
       {dispute && (

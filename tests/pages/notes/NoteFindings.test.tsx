@@ -144,6 +144,7 @@ describe('the findings of a note', () => {
     await userEvent.click(undo);
     expect(await screen.findByText('Taken back. The finding counts again.')).toBeInTheDocument();
     expect(screen.queryByText(/The author disagrees/)).toBeNull();
+    expect(screen.getByRole('button', { name: /I disagree: Levelled off/ })).toHaveFocus();
   });
 
   it('keep the sentence and say why when the server refuses', async () => {
