@@ -35,7 +35,8 @@ export function nearestMark(
 
 /**
  * What a chart shows at a minute, one part a line: the minute with its temperature, the second
- * probe, the record compared with, the nearest mark. What is not there is left out.
+ * probe, the record compared with, the nearest mark. What is not there is left out. Figures stand
+ * first: where a line has no room for all of it, a name is cut and no figure.
  */
 export function readOffParts(sources: ReadOffSources, minute: number): readonly string[] {
   const { points, secondProbe, overlay, marks, unit, window } = sources;
@@ -50,8 +51,8 @@ export function readOffParts(sources: ReadOffSources, minute: number): readonly 
   const mark = nearestMark(marks, minute, Math.max(NEAR_MINUTES, shown * NEAR_SHARE));
   return [
     own === null ? time : `${time}, ${own}`,
-    second === null ? '' : `second probe ${second}`,
-    other === null || !overlay ? '' : `${overlay.label} ${other}`,
-    mark ? `${mark.label} (${formatNumber(mark.minute, decimals)}\u00a0min)` : '',
+    second === null ? '' : `${second}, second probe`,
+    other === null || !overlay ? '' : `${other}, ${overlay.label}`,
+    mark ? `${formatNumber(mark.minute, decimals)}\u00a0min: ${mark.label}` : '',
   ].filter((part) => part !== '');
 }

@@ -69,7 +69,7 @@ describe('NoteRecord', () => {
     await user.keyboard('{Home}{PageUp}{PageUp}{PageUp}{PageUp}{PageUp}');
     const read = slider.getAttribute('aria-valuetext') ?? '';
     const [, minute, own, other] =
-      /^([\d.]+)\smin, (\d+)\s°C; earlier firing, “Before the fibre” (\d+)\s°C/.exec(read) ?? [];
+      /^([\d.]+)\smin, (\d+)\s°C; (\d+)\s°C, earlier firing, “Before the fibre”/.exec(read) ?? [];
     expect(Number(own)).toBeCloseTo(15 + 20 * (Number(minute) - 10), -1);
     expect(Number(other) - Number(own)).toBe(80);
 

@@ -206,9 +206,9 @@ describe('RecordChart of other lines', () => {
     fireEvent.change(slider, { target: { value: '60' } });
     expect(slider.getAttribute('aria-valuetext')?.split('; ')).toEqual([
       '60\u00a0min, 600\u00a0°C',
-      'second probe 540\u00a0°C',
-      'earlier firing, “Before the fibre” 300\u00a0°C',
-      'flue closed 40\u00a0% (61\u00a0min)',
+      '540\u00a0°C, second probe',
+      '300\u00a0°C, earlier firing, “Before the fibre”',
+      '61\u00a0min: flue closed 40\u00a0%',
     ]);
   });
 

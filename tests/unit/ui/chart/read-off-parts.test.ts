@@ -30,16 +30,16 @@ describe('readOffParts', () => {
   it('tells minute, temperature, second probe, the record compared with and the nearest mark', () => {
     expect(readOffParts(sources, 10)).toEqual([
       '10\u00a0min, 220\u00a0°C',
-      'second probe 200\u00a0°C',
-      'earlier firing 383\u00a0°C',
-      'gas up (10\u00a0min)',
+      '200\u00a0°C, second probe',
+      '383\u00a0°C, earlier firing',
+      '10\u00a0min: gas up',
     ]);
   });
 
   it('leaves out what is not there at that minute', () => {
     expect(readOffParts(sources, 30)).toEqual([
       '30\u00a0min, 620\u00a0°C',
-      'earlier firing 873\u00a0°C',
+      '873\u00a0°C, earlier firing',
     ]);
     expect(readOffParts({ ...sources, overlay: null, secondProbe: null }, -3)).toEqual([
       '−3\u00a0min',
