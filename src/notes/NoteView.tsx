@@ -89,9 +89,9 @@ export function NoteView({ page, units, recordOf = 'published', aside, after, qu
                 {fields.result.causes.map((cause) => CAUSES[cause].toLowerCase()).join(', ')}
               </span>
             )}
-        {disputed !== null && <p className="text-small text-soot-2">{disputed}</p>}
           </p>
         )}
+        {disputed !== null && <p className="text-small text-soot-2">{disputed}</p>}
       </header>
       <section aria-labelledby="sheet" className="space-y-3">
         <h2 id="sheet" className="text-section">
