@@ -230,6 +230,7 @@ CREATE TABLE `pictures` (
   `widths` longtext CHARACTER SET utf8mb4 COLLATE utf8mb4_bin NOT NULL CHECK (json_valid(`widths`)),
   `placeholder` varchar(2000) CHARACTER SET ascii COLLATE ascii_bin NOT NULL,
   `bytes` int(10) unsigned NOT NULL,
+  `taken_off_at` datetime(3) DEFAULT NULL,
   `created_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
   PRIMARY KEY (`id`),
   UNIQUE KEY `pictures_name_unique` (`name`),

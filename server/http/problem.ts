@@ -22,6 +22,7 @@ const CATALOGUE = {
   'already-claimed': [409, 'Another moderator has this note on the desk'],
   'stale-revision': [409, 'The note has changed since you read it'],
   'wrong-status': [409, 'The note is no longer where it was'],
+  'in-use': [409, 'This is in use'],
   'same-name': [409, 'Another member has this name'],
   stale: [412, 'A newer version was saved elsewhere'],
   'too-large': [413, 'This is too large'],

@@ -49,12 +49,44 @@ export async function insertPicture(trx: Knex, picture: NewPicture): Promise<num
   return id;
 }
 
+/** The pictures of a note's working copy. Those taken off it live on in revisions alone. */
 export async function picturesOfNote(db: Knex, noteId: number): Promise<Picture[]> {
   const rows = await db('pictures')
     .where('pictures.note_id', noteId)
+    .whereNull('pictures.taken_off_at')
     .orderBy('pictures.id')
     .select<RawPicture[]>(COLUMNS);
   return rows.map(toPicture);
+}
+
+/** The id of a picture of the note's working copy. */
+export async function findPictureOfNote(
+  db: Knex,
+  noteId: number,
+  name: string,
+): Promise<number | null> {
+  const row = await db('pictures')
+    .where({ note_id: noteId, name })
+    .whereNull('taken_off_at')
+    .first<{ id: number } | undefined>('id');
+  return row?.id ?? null;
+}
+
+export async function isInRevision(db: Knex, pictureId: number): Promise<boolean> {
+  const row = await db('revision_pictures')
+    .where({ picture_id: pictureId })
+    .first<{ picture_id: number } | undefined>('picture_id');
+  return row !== undefined;
+}
+
+export async function takeOffNote(db: Knex, pictureId: number): Promise<void> {
+  await db('pictures')
+    .where({ id: pictureId })
+    .update({ taken_off_at: db.fn.now(3) });
+}
+
+export async function deletePicture(db: Knex, pictureId: number): Promise<void> {
+  await db('pictures').where({ id: pictureId }).delete();
 }
 
 /** The note's pictures of these names, in the order of the names. */
@@ -92,7 +124,11 @@ export async function pictureUse(
   const [onNote, bytes] = await Promise.all([
     noteId === null
       ? undefined
-      : trx('pictures').where({ note_id: noteId }).count<{ n: number }>({ n: '*' }).first(),
+      : trx('pictures')
+          .where({ note_id: noteId })
+          .whereNull('taken_off_at')
+          .count<{ n: number }>({ n: '*' })
+          .first(),
     trx('pictures').where({ owner_id: ownerId }).sum<{ n: number | null }>({ n: 'bytes' }).first(),
   ]);
   return { onNote: Number(onNote?.n ?? 0), bytes: Number(bytes?.n ?? 0) };

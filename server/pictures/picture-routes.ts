@@ -7,6 +7,7 @@ import { idParams } from '../http/ids.ts';
 import { AppError } from '../http/problem.ts';
 import { RATES } from '../http/rates.ts';
 import { readSingleUpload, uploadOf } from '../http/single-upload.ts';
+import { removeKilnPicture, removeNotePicture } from './remove-picture.ts';
 import {
   addNotePicture,
   mayFetch,
@@ -60,6 +61,26 @@ export const pictureRoutes: readonly Route[] = [
     async handle({ db, deps, actor, params, request }) {
       const { bytes } = uploadOf(request);
       return reply(201, await setKilnPicture(db, deps.store, memberOf(actor), params.id, bytes));
+    },
+  }),
+  defineRoute({
+    method: 'delete',
+    path: '/api/notes/:id/pictures/:name',
+    access: 'member',
+    params: idParams.extend({ name: pictureNameSchema }),
+    async handle({ db, deps, actor, params }) {
+      await removeNotePicture(db, deps.store, actor, params.id, params.name);
+      return { message: 'The picture is deleted.' };
+    },
+  }),
+  defineRoute({
+    method: 'delete',
+    path: '/api/kilns/:id/picture',
+    access: 'member',
+    params: idParams,
+    async handle({ db, deps, actor, params }) {
+      await removeKilnPicture(db, deps.store, actor, params.id);
+      return { message: 'The picture is deleted.' };
     },
   }),
   defineRoute({

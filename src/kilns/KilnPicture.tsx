@@ -8,6 +8,7 @@ import { Button } from '../ui/Button.tsx';
 import { ProgressBar } from '../ui/ProgressBar.tsx';
 import { useMessages } from '../ui/useMessages.ts';
 import { kilnPath, kilnQueries } from './kiln-queries.ts';
+import { RemoveKilnPicture } from './RemoveKilnPicture.tsx';
 import { KilnPhotograph } from './KilnPhotograph.tsx';
 
 /** Why a chosen file cannot be a picture here, in a sentence; null when it can. */
@@ -82,9 +83,12 @@ export function KilnPicture({ kiln }: { readonly kiln: Kiln }) {
           cancel={<Button onClick={() => stop.current?.abort()}>Cancel</Button>}
         />
       ) : (
-        <Button icon="add" onClick={() => chooser.current?.click()}>
-          {kiln.picture ? 'Another picture' : 'Add a picture'}
-        </Button>
+        <div className="flex flex-wrap gap-3">
+          <Button icon="add" onClick={() => chooser.current?.click()}>
+            {kiln.picture ? 'Another picture' : 'Add a picture'}
+          </Button>
+          {kiln.picture && <RemoveKilnPicture kiln={kiln} />}
+        </div>
       )}
       {refused !== null && (
         <p role="alert" className="text-small text-caution">

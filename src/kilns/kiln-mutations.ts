@@ -56,6 +56,15 @@ export function useLendKiln(kilnId: number) {
   });
 }
 
+export function useRemoveKilnPicture(kilnId: number) {
+  const anew = useKilnsAnew();
+  return useMutation({
+    mutationFn: () =>
+      send({ method: 'DELETE', path: kilnPath(kilnId, '/picture'), answer: doneSchema }),
+    onSuccess: anew,
+  });
+}
+
 export function useRemoveKiln(kilnId: number) {
   const anew = useKilnsAnew();
   return useMutation({

@@ -58,6 +58,15 @@ export function tickRemark(noteId: number, remarkId: number, mended: boolean): P
   });
 }
 
+/** Deletes a picture that stands in no story. */
+export function removePicture(noteId: number, name: string) {
+  return send({
+    method: 'DELETE',
+    path: address(noteId, `pictures/${name}`),
+    answer: doneSchema,
+  });
+}
+
 /** Brings a removed note back as it was. */
 export function restoreNote(noteId: number): Promise<Draft> {
   return send({ method: 'POST', path: address(noteId, 'restore'), answer: draftSchema });

@@ -7,8 +7,9 @@ import { useMessages } from '../../ui/useMessages.ts';
 import { useWriteForm } from '../form-context.ts';
 import { LinkDialog } from './LinkDialog.tsx';
 import { placePicture } from './picture-places.ts';
-import { PictureUploads, UnplacedPictures } from './PictureUploads.tsx';
+import { PictureUploads } from './PictureUploads.tsx';
 import { StoryToolbar } from './StoryToolbar.tsx';
+import { UnplacedPictures } from './UnplacedPictures.tsx';
 import { looksLikeTable, useFileDrop } from './useFileDrop.ts';
 import { usePictureUploads } from './usePictureUploads.ts';
 import { useStoryEditor } from './useStoryEditor.ts';
@@ -138,6 +139,8 @@ export function StoryEditor() {
       <UnplacedPictures
         pictures={draft.pictures.filter(({ name }) => !placed.has(name))}
         numberOf={numberOf}
+        editable={editable}
+        keeper={keeper}
         onPlace={(picture) => placePicture(editor, picture.name)}
       />
       <LinkDialog address={address} onClose={() => setAddress(null)} onAddress={setLink} />

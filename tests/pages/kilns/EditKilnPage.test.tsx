@@ -4,6 +4,7 @@ import { afterEach, describe, expect, it, vi } from 'vitest';
 import { kilnPageSchema } from '#shared/api/kilns.ts';
 import { EditKilnPage } from '../../../src/kilns/EditKilnPage.tsx';
 import { kilnFields } from '../../support/notes.ts';
+import { giveDialogs } from '../../support/dialogs.ts';
 import { answerFetch, ok, refused } from '../../support/page-fetch.ts';
 import { aMe, aSession, renderPages } from '../../support/render-pages.tsx';
 
@@ -97,5 +98,25 @@ describe('EditKilnPage', () => {
       'A picture may have at most 16 MiB; this one has 17.3 MiB.',
     );
     expect(sent.filter(({ method }) => method !== 'GET')).toEqual([]);
+  });
+
+  it('deletes the kiln’s picture after asking once more', async () => {
+    giveDialogs();
+    const picture = { name: 'a'.repeat(32), width: 4, height: 3, widths: [4], placeholder: '' };
+    let isThere = true;
+    const sent = answerFetch({
+      ...SIGNED_IN,
+      'GET /api/kilns/4': () => ok({ ...aKiln(3), picture: isThere ? picture : null }),
+      'DELETE /api/kilns/4/picture': () => {
+        isThere = false;
+        return ok({ message: 'The picture is deleted.' });
+      },
+    });
+    renderPages(ROUTES, '/kilns/4/edit');
+    await userEvent.click(await screen.findByRole('button', { name: 'Delete the picture' }));
+    expect(sent.filter(({ method }) => method === 'DELETE')).toEqual([]);
+    await userEvent.click(screen.getByRole('button', { name: 'Delete it' }));
+    expect(await screen.findByRole('button', { name: 'Add a picture' })).toBeVisible();
+    expect(screen.queryByRole('button', { name: 'Delete the picture' })).toBeNull();
   });
 });
