@@ -36,6 +36,11 @@ const FIXED: Readonly<Partial<Record<PagePattern, PageHead>>> = {
     'Ask what happened in the kiln, and find who had it and what helped.',
     '/find',
   ),
+  '/look-alikes': page(
+    'Look-alikes',
+    'Give a temperature record, and find the published firings that climbed like it, and what was changed next.',
+    '/look-alikes',
+  ),
   '/notes': page('Newest notes', 'The newest notes of raku firings.', '/notes'),
   '/what-helped': page(
     'What helped',

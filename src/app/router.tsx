@@ -12,6 +12,7 @@ type Page = () => Promise<ComponentType>;
 const PAGES: Readonly<Record<Exclude<PagePattern, '/workbench'>, Page>> = {
   '/': async () => (await import('./FrontPage.tsx')).FrontPage,
   '/find': async () => (await import('../find/FindPage.tsx')).FindPage,
+  '/look-alikes': async () => (await import('../look-alikes/LookAlikesPage.tsx')).LookAlikesPage,
   '/notes': async () => (await import('../notes/NewestPage.tsx')).NewestPage,
   '/notes/:id': async () => (await import('../notes/NotePage.tsx')).NotePage,
   '/notes/:id/:slug': async () => (await import('../notes/NotePage.tsx')).NotePage,

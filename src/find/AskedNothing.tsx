@@ -14,6 +14,12 @@ export function AskedNothing() {
   const shares = useQuery(figureQueries.shares());
   return (
     <>
+      <p className="max-w-measure">
+        Have a temperature record?{' '}
+        <Link to={paths.lookAlikes} className="link">
+          Find firings that climbed like it
+        </Link>
+      </p>
       {recent.length > 0 && (
         <section aria-labelledby="recent" className="space-y-2">
           <h2 id="recent" className="text-small font-[650]">

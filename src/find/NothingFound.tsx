@@ -45,6 +45,10 @@ export function NothingFound({ address, partCount, loosen, onLeaveOut, onClearFi
       <Link to={paths.newest} className="link">
         all notes, newest first
       </Link>
+      . Or, with a temperature record,{' '}
+      <Link to={paths.lookAlikes} className="link">
+        find firings that climbed like it
+      </Link>
       .
     </EmptyState>
   );

@@ -4,6 +4,7 @@ import { paths } from '#shared/paths.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { TakeDownButton } from '../desk/TakeDownButton.tsx';
 import { ProblemPage } from '../http/ProblemPage.tsx';
+import { LookAlikesOfNote } from '../look-alikes/LookAlikesOfNote.tsx';
 import { NoteQuestions } from '../questions/NoteQuestions.tsx';
 import { LinkButton } from '../ui/LinkButton.tsx';
 import { Notice } from '../ui/Notice.tsx';
@@ -36,8 +37,14 @@ export function NotePage() {
     <NoteView
       page={page}
       units={units}
-      questions={page.publishedAt !== null && <NoteQuestions noteId={page.id} />}
       recordOf={page.publishedAt === null ? 'handed-in' : 'published'}
+      questions={page.publishedAt !== null && <NoteQuestions noteId={page.id} />}
+      after={
+        page.publishedAt !== null &&
+        page.hasRecord && (
+          <LookAlikesOfNote noteId={page.id} revision={page.revision} units={units} />
+        )
+      }
       aside={
         <div className="not-in-print space-y-3">
           {page.publishedAt === null && (

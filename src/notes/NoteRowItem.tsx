@@ -25,23 +25,27 @@ interface Props {
   /** Why it was found, the passage that matched: between the facts and what came next. */
   readonly children?: ReactNode;
   readonly headingLevel?: 2 | 3;
+  /** In place of its strip. */
+  readonly drawing?: ReactNode;
 }
 
 /** A published note as a row: its strip, title, troubles, figures, and what was changed next. */
-export function NoteRowItem({ row, units, scaleMinutes, children, headingLevel = 3 }: Props) {
+export function NoteRowItem(props: Props) {
+  const { row, units, scaleMinutes, children, headingLevel = 3, drawing } = props;
   const Heading = `h${headingLevel}` as const;
   const troubles = troubleWords(row, units);
   const disputed = disputedWords(row);
   return (
     <li className="grid gap-x-8 gap-y-2 border-b border-line py-5 sm:grid-cols-[minmax(0,17rem)_minmax(0,1fr)]">
       <div>
-        {row.strip && row.strip.length > 1 ? (
-          <SmallGlowStrip points={row.strip} scaleMinutes={scaleMinutes} alt={row.stripWords} />
-        ) : (
-          <p className="border-y border-dashed border-line py-2 text-note text-soot-2">
-            No record kept
-          </p>
-        )}
+        {drawing ??
+          (row.strip && row.strip.length > 1 ? (
+            <SmallGlowStrip points={row.strip} scaleMinutes={scaleMinutes} alt={row.stripWords} />
+          ) : (
+            <p className="border-y border-dashed border-line py-2 text-note text-soot-2">
+              No record kept
+            </p>
+          ))}
         <p className="mt-1.5 flex flex-wrap gap-x-3 text-note text-soot-2">
           {rowFigures(row, units).map((figure) => (
             <Reading key={figure}>{figure}</Reading>

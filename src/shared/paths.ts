@@ -9,6 +9,7 @@ export const paths = {
   front: '/',
   find: (question = '') => (question ? `/find?q=${encodeURIComponent(question)}` : '/find'),
   newest: '/notes',
+  lookAlikes: '/look-alikes',
   note: noteAddress,
   write: (noteId: number) => `/write/${String(noteId)}`,
   newNote: (options: { kilnId?: number; tried?: number } = {}) => {
@@ -45,6 +46,7 @@ export const paths = {
 export const PAGE_PATTERNS = [
   '/',
   '/find',
+  '/look-alikes',
   '/notes',
   '/notes/:id',
   '/notes/:id/:slug',

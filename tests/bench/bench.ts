@@ -10,8 +10,10 @@ import type { Deps } from '../../server/deps.ts';
 import { encodePicture } from '../../server/pictures/encode-picture.ts';
 import { reindex } from '../../server/search/reindex.ts';
 import { benchEngine } from './bench-engine.ts';
+import { benchManyNotes } from './bench-many-notes.ts';
 import { benchSearch } from './bench-search.ts';
 import { get, listen, withStack } from './bench-stack.ts';
+import { benchLookAlikes } from './look-alikes.ts';
 import { milliseconds, percentile, print, throughput, timeEach } from './measure.ts';
 
 /**
@@ -102,13 +104,19 @@ async function benchPictures(): Promise<void> {
   );
 }
 
-/** `npm run bench -- --documents 100000`: the engine alone; without, the usual run. */
+/**
+ * `npm run bench -- --documents 100000`: the engine alone. `-- --notes 10000`: the whole product
+ * with so many notes, which takes a while. Without either, the usual run.
+ */
 const { values: options } = parseArgs({
-  options: { documents: { type: 'string' } },
+  options: { documents: { type: 'string' }, notes: { type: 'string' } },
 });
 
 if (options.documents !== undefined) {
   await benchEngine(Number(options.documents));
+} else if (options.notes !== undefined) {
+  const count = Number(options.notes);
+  await withStack((stack) => benchManyNotes(stack, count));
 } else {
   await withStack(async ({ deps, databaseUrl, serve }) => {
     await loadDemo(deps);
@@ -117,6 +125,7 @@ if (options.documents !== undefined) {
     await benchNotePage(deps, port, databaseUrl);
     await benchSearch(deps, port);
     await benchReading();
+    await benchLookAlikes();
     await benchPictures();
   });
 }

@@ -35,7 +35,7 @@ export function whyAlike(one: ClimbTraits, other: ClimbTraits, units: Units): st
     levelsAlike(one, other, ['pause'], 'wait', unit),
     // Where both stop short, how the top was come to has been said.
     stall === null ? topsAlike(one, other, unit) : null,
-    holdsAlike(one, other, unit),
+    holdsAlike(one, other, unit) ?? (stall === null ? staysAlike(one, other, unit) : null),
     levelsAlike(one, other, ['warm-up'], 'warm up', unit),
     ratesAlike(one, other, unit),
     stall !== null && isRacing(one, other) ? null : shapesAlike(one, other),
@@ -67,13 +67,15 @@ function levelsAlike(
   kinds: readonly Level['kind'][],
   verb: string,
   unit: TemperatureUnit,
+  may: (a: Level, b: Level) => boolean = () => true,
 ): string | null {
   const of = (traits: ClimbTraits) => traits.levels.filter(({ kind }) => kinds.includes(kind));
   let best: { a: Level; b: Level; apart: number } | null = null;
   for (const a of of(one)) {
     for (const b of of(other)) {
       const apart = Math.abs(a.levelCelsius - b.levelCelsius);
-      if (apart <= SAME_LEVEL && apart < (best?.apart ?? Infinity)) best = { a, b, apart };
+      if (may(a, b) && apart <= SAME_LEVEL && apart < (best?.apart ?? Infinity))
+        best = { a, b, apart };
     }
   }
   if (best === null) return null;
@@ -82,6 +84,18 @@ function levelsAlike(
   const stay = `, for ${both(a.minutes, b.minutes)}`;
   const end = a.then === 'shut-off' && b.then === 'shut-off' ? ', and are shut off there' : '';
   return `Both ${verb} ${nearWords(a.levelCelsius, b.levelCelsius, unit)}${start}${stay}${end}.`;
+}
+
+/** A stay that is a hold in one and a stall in the other is still a stay in both. */
+function staysAlike(one: ClimbTraits, other: ClimbTraits, unit: TemperatureUnit): string | null {
+  return levelsAlike(
+    one,
+    other,
+    ['stall', 'just-short', 'hold', 'approach', 'pause'],
+    'stay',
+    unit,
+    (a, b) => a.kind !== b.kind,
+  );
 }
 
 function sagsAlike(one: ClimbTraits, other: ClimbTraits, unit: TemperatureUnit): string | null {

@@ -3,6 +3,7 @@ import type { Reading } from '#shared/firing/types.ts';
 import { MAX_TYPED_ROWS } from '#shared/note/plan.ts';
 import { RecordError } from '#shared/record/record-error.ts';
 import type { RecordChoice } from '#shared/record/record-choice.ts';
+import { LookAlikesOfDraft } from '../../look-alikes/LookAlikesOfDraft.tsx';
 import { Button } from '../../ui/Button.tsx';
 import { IssueList } from '../../ui/IssueList.tsx';
 import { Notice } from '../../ui/Notice.tsx';
@@ -228,6 +229,7 @@ export function RecordSection() {
           </p>
         )}
         {candidate === null && <DraftRecordChart record={status.record} />}
+        {candidate === null && <LookAlikesOfDraft draft={draft} units={units} />}
         <PinnedField pointer="/record/marks">
           <MarksEditor />
         </PinnedField>
