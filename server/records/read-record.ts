@@ -87,4 +87,4 @@ export async function readRecord(
 }
 
 const isSameChoice = (a: RecordChoice, b: RecordChoice): boolean =>
-  (Object.keys(a) as (keyof RecordChoice)[]).every((part) => a[part] === b[part]);
+  (Object.keys({ ...a, ...b }) as (keyof RecordChoice)[]).every((part) => a[part] === b[part]);

@@ -3,20 +3,79 @@ import { RECORD_LIMITS } from './record-limits.ts';
 
 const CHUNK = 8192;
 const REPLACEMENT = 0xfffd;
+const SPREADSHEET = 'This is a spreadsheet’s own file. Save the table as CSV and choose that.';
+
+/** A record's text, and what was taken for granted to get it. */
+export interface DecodedRecord {
+  readonly text: string;
+  readonly assumed: readonly string[];
+}
+
+/** The text of a record's bytes; see `decodeRecord`. */
+export function decodeRecordBytes(bytes: Uint8Array): string {
+  return decodeRecord(bytes).text;
+}
 
 /**
- * The text of a record's bytes: UTF-16 by its byte-order mark; else UTF-8, with or without one, if
- * the bytes are valid; else Latin-1, as older loggers write. The mark itself is dropped.
- * @throws RecordError over 10 MiB
+ * The text of a record's bytes: UTF-16 by its byte-order mark or by its empty halves; else UTF-8, with
+ * or without a mark, if the bytes are valid; else Latin-1, as older loggers write. The mark is dropped.
+ * @throws RecordError over 10 MiB, and for files that are no text
  */
-export function decodeRecordBytes(bytes: Uint8Array): string {
+export function decodeRecord(bytes: Uint8Array): DecodedRecord {
   if (bytes.length > RECORD_LIMITS.bytes) {
     throw new RecordError('The file is larger than 10 MiB, the most a record may be.');
   }
-  if (bytes[0] === 0xff && bytes[1] === 0xfe) return utf16(bytes, true);
-  if (bytes[0] === 0xfe && bytes[1] === 0xff) return utf16(bytes, false);
+  if (bytes[0] === 0xff && bytes[1] === 0xfe) return { text: utf16(bytes, 2, true), assumed: [] };
+  if (bytes[0] === 0xfe && bytes[1] === 0xff) return { text: utf16(bytes, 2, false), assumed: [] };
+  refuseForeign(bytes);
+  const halves = emptyHalves(bytes);
+  if (halves !== null) {
+    return {
+      text: utf16(bytes, 0, halves === 'second'),
+      assumed: ['The file is read as UTF-16, though it does not say so.'],
+    };
+  }
   const hasMark = bytes[0] === 0xef && bytes[1] === 0xbb && bytes[2] === 0xbf;
-  return utf8(bytes, hasMark ? 3 : 0, hasMark) ?? latin1(bytes);
+  const text = utf8(bytes, hasMark ? 3 : 0, hasMark);
+  return text === null
+    ? { text: latin1(bytes), assumed: ['The file is no UTF-8; its letters are read as Latin-1.'] }
+    : { text, assumed: [] };
+}
+
+/** First bytes of files that people choose instead of the table in them. */
+const FOREIGN: readonly { readonly bytes: readonly number[]; readonly words: string }[] = [
+  { bytes: [0x50, 0x4b, 3, 4], words: SPREADSHEET },
+  { bytes: [0xd0, 0xcf, 0x11, 0xe0], words: SPREADSHEET },
+  {
+    bytes: [0x25, 0x50, 0x44, 0x46],
+    words: 'This is a PDF, no table of text. Save the table as CSV and choose that.',
+  },
+  { bytes: [0x1f, 0x8b], words: 'This file is packed. Unpack it and choose the table in it.' },
+  { bytes: [0x89, 0x50, 0x4e, 0x47], words: 'This is a picture, no table of text.' },
+  { bytes: [0xff, 0xd8, 0xff], words: 'This is a picture, no table of text.' },
+];
+
+function refuseForeign(bytes: Uint8Array): void {
+  for (const foreign of FOREIGN) {
+    if (foreign.bytes.every((byte, i) => bytes[i] === byte)) throw new RecordError(foreign.words);
+  }
+}
+
+/** How much of a file is looked at for empty halves. */
+const HALVES_LOOKED_AT = 1024;
+
+/** Which half of most pairs of bytes is zero, as in UTF-16 of plain letters without its mark. */
+function emptyHalves(bytes: Uint8Array): 'first' | 'second' | null {
+  const pairs = Math.floor(Math.min(bytes.length, HALVES_LOOKED_AT) / 2);
+  let first = 0;
+  let second = 0;
+  for (let i = 0; i < 2 * pairs; i += 2) {
+    if (bytes[i] === 0) first += 1;
+    if (bytes[i + 1] === 0) second += 1;
+  }
+  if (pairs < 4 || first + second === 0) return null;
+  if (second > 0.8 * pairs && first === 0) return 'second';
+  return first > 0.8 * pairs && second === 0 ? 'first' : null;
 }
 
 /** Collects code units and turns them into text a chunk at a time. */
@@ -39,9 +98,9 @@ function textBuilder(): { push: (unit: number) => void; text: () => string } {
   };
 }
 
-function utf16(bytes: Uint8Array, isLittle: boolean): string {
+function utf16(bytes: Uint8Array, from: number, isLittle: boolean): string {
   const out = textBuilder();
-  for (let i = 2; i + 1 < bytes.length; i += 2) {
+  for (let i = from; i + 1 < bytes.length; i += 2) {
     const first = bytes[i] ?? 0;
     const second = bytes[i + 1] ?? 0;
     out.push(isLittle ? first | (second << 8) : (first << 8) | second);

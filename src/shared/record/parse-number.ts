@@ -1,3 +1,5 @@
+import { isDegreeSign, temperatureUnit } from './record-words.ts';
+
 const ZERO = 48;
 const NINE = 57;
 
@@ -13,9 +15,11 @@ function isDigit(code: number): boolean {
 
 /**
  * Reads the number a cell begins with, one character at a time. Thousands may be set apart by the
- * other separator or an apostrophe, in groups of three. `null` for no number.
+ * other separator, an apostrophe or a blank, in groups of three. `null` for no number.
  */
 export function leadingNumber(cell: string, decimal: '.' | ','): LeadingNumber | null {
+  const plain = plainNumber(cell, decimal);
+  if (plain !== null) return { value: plain, rest: '' };
   const text = cell.trim();
   const thousands = decimal === '.' ? ',' : '.';
   let at = 0;
@@ -33,7 +37,11 @@ export function leadingNumber(cell: string, decimal: '.' | ','): LeadingNumber |
       digits += char;
       whole += 1;
       at += 1;
-    } else if ((char === thousands || char === "'") && whole > 0 && isGroup(text, at + 1, first)) {
+    } else if (
+      (char === thousands || isThousandsSign(char)) &&
+      whole > 0 &&
+      isGroup(text, at + 1, first)
+    ) {
       at += 1;
     } else break;
   }
@@ -59,11 +67,38 @@ export function leadingNumber(cell: string, decimal: '.' | ','): LeadingNumber |
   return Number.isFinite(value) ? { value, rest: text.slice(at).trim() } : null;
 }
 
+/** Apostrophes and blanks of every width; a plain blank too, since a table's cells are parted before. */
+function isThousandsSign(char: string): boolean {
+  return char !== '' && "'’ \u00a0\u202f\u2009".includes(char);
+}
+
+/** The usual number, digits with one decimal sign at most: most of a file, so it is read fast. */
+function plainNumber(cell: string, decimal: '.' | ','): number | null {
+  const { length } = cell;
+  if (length === 0 || length > 15) return null;
+  let at = cell.charCodeAt(0) === 45 ? 1 : 0;
+  let whole = 0;
+  let digits = 0;
+  let scale = 0;
+  for (; at < length; at += 1) {
+    const code = cell.charCodeAt(at);
+    if (isDigit(code)) {
+      whole = whole * 10 + (code - ZERO);
+      digits += 1;
+      scale *= 10;
+    } else if (scale === 0 && cell.charAt(at) === decimal) scale = 1;
+    else return null;
+  }
+  if (digits === 0) return null;
+  const value = scale > 1 ? whole / scale : whole;
+  return cell.charCodeAt(0) === 45 ? 0 - value : value;
+}
+
 /** Three digits and then no fourth: a group of thousands; the first group has at most three. */
 function isGroup(text: string, at: number, first: number): boolean {
   const isThree = [0, 1, 2].every((i) => isDigit(text.charCodeAt(at + i)));
   const before = at - 1 - first;
-  const isFirst = before <= 3;
+  const isFirst = before <= 3 && text.charCodeAt(first) !== ZERO;
   const isLater = before > 3 && !isDigit(text.charCodeAt(at - 5));
   return isThree && !isDigit(text.charCodeAt(at + 3)) && (isFirst || isLater);
 }
@@ -87,16 +122,6 @@ export function parseNumber(cell: string, decimal: '.' | ','): number | null {
 
 export type TemperatureUnit = 'C' | 'F' | 'K';
 
-/** The temperature unit a few letters stand for ("°C", "[K]", "degF"); null for none. */
-export function temperatureUnit(text: string): TemperatureUnit | null {
-  let word = '';
-  for (const char of text.toLowerCase()) if (!'°º˚[](). _'.includes(char)) word += char;
-  if (word === 'c' || word === 'degc' || word === 'celsius' || word === 'degreesc') return 'C';
-  if (word === 'f' || word === 'degf' || word === 'fahrenheit' || word === 'degreesf') return 'F';
-  if (word === 'k' || word === 'degk' || word === 'kelvin') return 'K';
-  return null;
-}
-
 /** A cell with a temperature: a number, alone or with its unit or a degree sign behind it. */
 export function parseTemperature(
   cell: string,
@@ -104,7 +129,8 @@ export function parseTemperature(
 ): { value: number; unit: TemperatureUnit | null } | null {
   const number = leadingNumber(cell, decimal);
   if (number === null) return null;
-  if (number.rest === '' || number.rest === '°') return { value: number.value, unit: null };
+  if (number.rest === '' || (number.rest.length === 1 && isDegreeSign(number.rest)))
+    return { value: number.value, unit: null };
   const unit = temperatureUnit(number.rest);
   return unit === null ? null : { value: number.value, unit };
 }

@@ -1,8 +1,9 @@
 import type { Reading } from '../firing/types.ts';
 import { fToC, kToC } from '../units/temperature.ts';
 import type { TemperatureUnit } from './parse-number.ts';
-import { parseTemperature, temperatureUnit } from './parse-number.ts';
-import { parseTime, timeUnit } from './parse-time.ts';
+import { parseTemperature } from './parse-number.ts';
+import { parseTime } from './parse-time.ts';
+import { temperatureUnit, timeUnit } from './record-words.ts';
 import type { SkippedLine } from './read-table.ts';
 import { RecordError } from './record-error.ts';
 import { RECORD_LIMITS } from './record-limits.ts';

@@ -1,8 +1,19 @@
 import { RecordError } from './record-error.ts';
 import { RECORD_LIMITS } from './record-limits.ts';
 
-/** Between cells; a space stands for any run of spaces and tabs. */
-export type Delimiter = ',' | ';' | '\t' | ' ';
+/** Between cells; one space stands for any run of spaces and tabs, two for a run of two or more. */
+export const DELIMITERS = [',', ';', '\t', '|', ' ', '  '] as const;
+export type Delimiter = (typeof DELIMITERS)[number];
+
+/** Signs a line of remarks begins with. */
+const REMARKS = ['#', '//', '%', '!'];
+
+/** Whether a row is a remark and no data. A semicolon begins one only where it is no delimiter. */
+export function isComment(cells: readonly string[]): boolean {
+  const first = cells[0] ?? '';
+  if (first === '') return false;
+  return REMARKS.some((sign) => first.startsWith(sign)) || first.startsWith(';');
+}
 
 /**
  * Walks the rows of a text once, character by character: cells trimmed, quotes as in RFC 4180 (a
@@ -35,7 +46,7 @@ export function scanRows(
       }
       if (at >= text.length || isLineEnd(text.charCodeAt(at))) break;
       at += 1;
-      if (delimiter === ' ') {
+      if (delimiter === ' ' || delimiter === '  ') {
         at = skipBlanks(text, at);
         if (at >= text.length || isLineEnd(text.charCodeAt(at))) break;
       }
@@ -60,8 +71,11 @@ function isLineEnd(code: number): boolean {
 function isBlank(code: number): boolean {
   return code === 32 || code === 9 || code === 0xa0;
 }
-function isDelimiter(code: number, delimiter: Delimiter): boolean {
-  return delimiter === ' ' ? code === 32 || code === 9 : code === delimiter.charCodeAt(0);
+function isDelimiterAt(text: string, at: number, delimiter: Delimiter): boolean {
+  const code = text.charCodeAt(at);
+  if (delimiter === ' ') return code === 32 || code === 9;
+  if (delimiter === '  ') return code === 9 || (code === 32 && isBlank(text.charCodeAt(at + 1)));
+  return code === delimiter.charCodeAt(0);
 }
 
 function skipBlanks(text: string, at: number): number {
@@ -81,7 +95,7 @@ function readCell(
   while (
     at < text.length &&
     isBlank(text.charCodeAt(at)) &&
-    (delimiter === ' ' || !isDelimiter(text.charCodeAt(at), delimiter))
+    (delimiter === ' ' || delimiter === '  ' || !isDelimiterAt(text, at, delimiter))
   ) {
     at += 1;
   }
@@ -89,7 +103,7 @@ function readCell(
   const start = at;
   while (at < text.length) {
     const code = text.charCodeAt(at);
-    if (isLineEnd(code) || isDelimiter(code, delimiter)) break;
+    if (isLineEnd(code) || isDelimiterAt(text, at, delimiter)) break;
     at += 1;
     if (at - start > RECORD_LIMITS.cellCharacters) throw tooLong(line, column);
   }
@@ -125,7 +139,7 @@ function readQuoted(
   const rest = at;
   while (at < text.length) {
     const code = text.charCodeAt(at);
-    if (isLineEnd(code) || isDelimiter(code, delimiter)) break;
+    if (isLineEnd(code) || isDelimiterAt(text, at, delimiter)) break;
     at += 1;
     if (at - rest > RECORD_LIMITS.cellCharacters) throw tooLong(line, column);
   }

@@ -95,6 +95,13 @@ export function ChoiceForm({ source, onSource, unit, onConfirm, onCancel, busy =
           blank={null}
         />
         <SelectField
+          label="Date in a column of its own"
+          value={choice.dateColumn == null ? null : String(choice.dateColumn)}
+          onValue={(value) => change({ dateColumn: value === null ? null : Number(value) })}
+          options={columnOptions}
+          blank="None"
+        />
+        <SelectField
           label="Temperature in column"
           value={String(choice.temperatureColumn)}
           onValue={(value) => change({ temperatureColumn: Number(value) })}

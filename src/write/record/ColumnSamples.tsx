@@ -9,6 +9,7 @@ interface Props {
 
 function roleOf(index: number, choice: RecordChoice): string {
   if (index === choice.timeColumn) return 'Time';
+  if (index === choice.dateColumn) return 'Date';
   if (index === choice.temperatureColumn) return 'Temperature';
   return index === choice.secondColumn ? 'Second probe' : '';
 }

@@ -1,13 +1,15 @@
 import type { RecordChoice } from '#shared/record/record-choice.ts';
 import { RecordError } from '#shared/record/record-error.ts';
-import { scanRows, type Delimiter } from '#shared/record/scan-rows.ts';
+import { isComment, scanRows, type Delimiter } from '#shared/record/scan-rows.ts';
 import type { TimeFormat } from '#shared/record/parse-time.ts';
 
 export const DELIMITER_WORDS: Readonly<Record<Delimiter, string>> = {
   ',': 'Comma',
   ';': 'Semicolon',
   '\t': 'Tab',
+  '|': 'Bar',
   ' ': 'Spaces',
+  '  ': 'Two spaces or more',
 };
 
 export const TIME_FORMAT_WORDS: Readonly<Record<TimeFormat, string>> = {
@@ -22,6 +24,7 @@ export const TIME_FORMAT_WORDS: Readonly<Record<TimeFormat, string>> = {
   timestamp: 'Date and time, year first',
   'timestamp-dmy': 'Date and time, day first',
   'timestamp-mdy': 'Date and time, month first',
+  'timestamp-ymd': 'Date and time, two figures of the year first',
 };
 
 export interface TableColumn {
@@ -46,7 +49,7 @@ export function columnsUnder(
         if (line === choice.headerLine) names = cells;
         return true;
       }
-      if (cells.some((cell) => cell !== '') && !cells[0]?.startsWith('#')) rows.push(cells);
+      if (cells.some((cell) => cell !== '') && !isComment(cells)) rows.push(cells);
       return rows.length < SAMPLE_LINES && line < LINES_LOOKED_AT;
     });
   } catch (error) {
@@ -65,6 +68,7 @@ export function withinColumns(choice: RecordChoice, width: number): RecordChoice
   const fits = (column: number): boolean => column < width;
   return {
     ...choice,
+    ...(choice.dateColumn == null || fits(choice.dateColumn) ? {} : { dateColumn: null }),
     timeColumn: fits(choice.timeColumn) ? choice.timeColumn : 0,
     temperatureColumn: fits(choice.temperatureColumn)
       ? choice.temperatureColumn

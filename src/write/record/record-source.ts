@@ -1,6 +1,6 @@
 import type { FiringRecord } from '#shared/api/records.ts';
 import type { Reading } from '#shared/firing/types.ts';
-import { decodeRecordBytes } from '#shared/record/decode-record-bytes.ts';
+import { decodeRecord, decodeRecordBytes } from '#shared/record/decode-record-bytes.ts';
 import { detectTable } from '#shared/record/detect-table.ts';
 import { parsePastedRows } from '#shared/record/parse-pasted-rows.ts';
 import type { SkippedLine } from '#shared/record/read-table.ts';
@@ -62,14 +62,9 @@ export async function sourceOfFile(file: File): Promise<RecordSource> {
   const tooLarge = whyTooLarge('record', file.size);
   if (tooLarge !== null) throw new RecordError(tooLarge);
   const bytes = new Uint8Array(await file.arrayBuffer());
-  // A spreadsheet's own file is a ZIP (PK) or an older compound file (D0 CF 11 E0).
-  const [a, b, c, d] = bytes;
-  if ((a === 0x50 && b === 0x4b) || (a === 0xd0 && b === 0xcf && c === 0x11 && d === 0xe0)) {
-    throw new RecordError(
-      'This is a spreadsheet’s own file. Save the table as CSV and choose that.',
-    );
-  }
-  return sourceOf(decodeRecordBytes(bytes), file.name || 'record.csv', 'file', file);
+  const { text, assumed } = decodeRecord(bytes);
+  const source = sourceOf(text, file.name || 'record.csv', 'file', file);
+  return { ...source, assumed: [...assumed, ...source.assumed] };
 }
 
 /**

@@ -60,15 +60,16 @@ describe('detectTable', () => {
   it('takes °F where no unit is named and the numbers are above any kiln in °C, and says so', () => {
     const { table, pairs } = taken('Min,Temp\n0,70\n10,500\n20,1000\n30,1500\n40,1850');
     expect(table.choice.unit).toBe('F');
-    expect(table.assumed.join(' ')).toContain('taken as °F, because 1850');
+    expect(table.assumed.join(' ')).toContain('taken as °F, because its numbers, 70 to 1850');
     expect(pairs[4]).toEqual([40, 1010]);
   });
 
   it('says so when it takes °C and minutes without being told', () => {
     const { assumed } = detectTable('0,20\n10,300\n20,600\n');
     expect(assumed).toEqual([
-      'The time column names no unit; it is taken as minutes.',
-      'Column 2 names no unit; it is taken as °C.',
+      'Column 1 names no unit of time; it is taken as minutes, by how fast the temperature climbs.',
+      'Column 2 names no unit; it is taken as °C, because its numbers, 20 to 600, are those of a kiln in °C.',
+      'Column 2 is taken as the temperature.',
     ]);
   });
 
@@ -99,7 +100,7 @@ describe('detectTable', () => {
       'Date,Time,Kiln (F),Setpoint\n2026-05-01,23:59:00,68,100\n2026-05-01,23:59:30,77,100\n2026-05-02,00:00:00,86,100\n';
     const { table, pairs } = taken(text);
     expect(table.columns.map((column) => column.role)).toEqual([
-      'other',
+      'date',
       'time',
       'temperature',
       'other',

@@ -116,7 +116,8 @@ describe('readTable', () => {
       { timeColumn: 50 },
       { timeColumn: -1 },
       { timeFormat: 'weeks' },
-      { delimiter: '|' },
+      { delimiter: '/' },
+      { dateColumn: 50 },
       { unit: 'R' },
     ]) {
       expect(recordChoiceSchema.safeParse({ ...CHOICE, ...wrong }).success).toBe(false);
