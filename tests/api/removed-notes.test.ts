@@ -1,15 +1,17 @@
 import { readdir, utimes } from 'node:fs/promises';
 import path from 'node:path';
 import { describe, expect, vi } from 'vitest';
+import { DESK_QUESTIONS } from '#shared/api/desk.ts';
 import { draftSchema, notebookSchema } from '#shared/api/notes.ts';
 import { tidyUp } from '../../server/housekeeping.ts';
 import { sweepUploads } from '../../server/storage/sweep-uploads.ts';
-import { test, type Api, type Client } from '../support/api.ts';
+import { test, type Api, type ApiAnswer, type Client } from '../support/api.ts';
 import {
   addKiln,
   completeFields,
   decideOn,
   handIn,
+  ifMatch,
   publishedNote,
   saveDraft,
   startNote,
@@ -73,6 +75,43 @@ describe('a removed note', () => {
     const up = await publishedNote(author, moderator, kiln.id);
     expect((await moderator.post(at(up, '/restore'))).status).toBe(404);
     expect((await author.post(at(up, '/restore'))).as(draftSchema).status).toBe('published');
+  });
+
+  test('is nothing to every other act, of its author and of staff, and comes back to each state', async ({
+    api,
+  }) => {
+    const author = await api.signedIn();
+    const moderator = await api.signedIn('moderator');
+    const kiln = await addKiln(author);
+    const draft = await startNote(author, kiln.id);
+    const desk = `/api/desk/notes/${String(draft.id)}`;
+    const decision = { revisionId: 1, reason: 'Because.', checklist: DESK_QUESTIONS };
+    const note = at(draft.id);
+    const tag = ifMatch(draft.version);
+    const acts: Record<string, () => Promise<ApiAnswer>> = {
+      read: () => author.get(`${note}/draft`),
+      edit: () => author.put(`${note}/draft`, { fields: draft.fields }, tag),
+      'hand in': () => author.post(`${note}/hand-in`, undefined, tag),
+      'take back': () => author.post(`${note}/take-back`),
+      revise: () => author.post(`${note}/revise`),
+      remove: () => author.delete(note),
+      preview: () => author.get(`${note}/preview`),
+      look: () => moderator.get(desk),
+      claim: () => moderator.put(`${desk}/claim`),
+      'give up': () => moderator.delete(`${desk}/claim`),
+      publish: () => moderator.post(`${desk}/decision`, { ...decision, decision: 'publish' }),
+      decline: () => moderator.post(`${desk}/decision`, { ...decision, decision: 'decline' }),
+      'take down': () => moderator.post(`${note}/take-down`, { reason: 'Because.' }),
+    };
+    for (const status of ['draft', 'sent-back', 'declined', 'taken-down']) {
+      await api.db('notes').where({ id: draft.id }).update({ status });
+      expect((await author.delete(note)).status).toBe(200);
+      for (const [act, send] of Object.entries(acts)) {
+        expect([status, act, (await send()).status]).toEqual([status, act, 404]);
+      }
+      const back = (await author.post(`${note}/restore`)).as(draftSchema);
+      expect(back.status).toBe(status);
+    }
   });
 
   test('goes for good after thirty days, with its files; others stay', async ({ api }) => {
