@@ -229,7 +229,7 @@ export const pellow: readonly FiringTold[] = [
     climb: {
       level: 765,
       rate: 23,
-      then: { at: 60, mark: 'air-more', level: 1008 },
+      then: { at: 60, mark: 'air-more', level: 1040 },
       hold: 2,
       by: 'hand-5',
     },

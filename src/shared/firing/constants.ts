@@ -19,19 +19,14 @@ export const FEWEST_READINGS = 3;
 /** Half width of the straight-line regression behind rates: long enough for a rate, short enough for a stall (our definition). */
 export const WIDE_HALF_MINUTES = 2.5;
 
-/** Half width of the regression behind peak, reached, hold and sag (our definition). */
-export const FINE_HALF_MINUTES = 0.5;
-
-/** A window may be narrowed while the rate is still known to this, °C/min: less smoothing keeps corners where they are (our definition). */
-export const RATE_ERROR_WANTED = 0.25;
-
-/** A window may be narrowed while the level is still known to this, °C (our definition). */
-export const LEVEL_ERROR_WANTED = 1;
-
-/** A jump both in and out faster than this, °C/min, within WILD_MINUTES is a wild reading, no kiln: a small kiln's own climb stays well below (our definition). */
+/** A jump both in and out faster than this, °C/min, is a wild reading, no kiln: a small kiln's own climb stays well below (our definition). */
 export const WILD_RATE = 100;
-export const WILD_MINUTES = 1;
 export const WILD_CELSIUS = 25;
+/** A probe is back in its place within so many minutes; one that shows a single value may be dead for longer (our definition). */
+export const WILD_MINUTES = 5;
+export const STUCK_MINUTES = 60;
+/** Meanwhile the kiln itself went on by no more than this, °C/min (our definition). */
+export const COURSE_RATE = 40;
 
 /** The fire is burning once the curve rises this fast for so long: slower drifts are weather (our definition). */
 export const START_RATE = 3;

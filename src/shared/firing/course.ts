@@ -1,24 +1,21 @@
 import type { CleanReadings } from './clean-readings.ts';
 import { cleanReadings } from './clean-readings.ts';
-import {
-  FARTHEST_MINUTE,
-  FEWEST_READINGS,
-  FINE_HALF_MINUTES,
-  WIDE_HALF_MINUTES,
-} from './constants.ts';
+import { FARTHEST_MINUTE, FEWEST_READINGS, WIDE_HALF_MINUTES } from './constants.ts';
 import type { Curve } from './curve.ts';
-import { curveOf, errorOf, halfWidthFor, stepFor } from './curve.ts';
+import { curveAlong, curveOf, stepFor } from './curve.ts';
+import { pointsOf } from './points.ts';
 import type { Scatter } from './scatter.ts';
 import { scatterOf } from './scatter.ts';
 import { shutOffOf } from './shut-off.ts';
 import type { Moment } from './start.ts';
 import { startOf } from './start.ts';
+import { cornersOf } from './straight-stretches.ts';
 import { swingPeriod } from './swing.ts';
 import type { FiringInput, Mark } from './types.ts';
 
 /**
  * A record made ready to be read: its curves cut at the start and the end of the firing, so that no
- * window mixes burning with cooling. All three curves of the firing share their steps.
+ * window mixes burning with cooling. Both curves of the firing share their steps.
  */
 export interface Course {
   readonly record: CleanReadings;
@@ -29,12 +26,12 @@ export interface Course {
   /** Readings of the firing: record indices from (included) to (excluded). */
   readonly from: number;
   readonly to: number;
-  /** Rates as told apart from noise over ±2.5 min. */
-  readonly wide: Curve;
-  /** Rates over the narrowest window that this record's noise allows. */
-  readonly narrow: Curve;
-  /** Levels. */
+  /** Levels, and the rates of the moment. */
   readonly fine: Curve;
+  /** `fine` with regular swings taken out: what levels, sags and holds are read from. */
+  readonly steady: Curve;
+  /** Rates over ±2.5 min of `fine`, or over the period of a record that swings. */
+  readonly wide: Curve;
   /** Standard error of `fine`, °C. */
   readonly fineError: number;
   /** Levels after the end of the firing. */
@@ -52,12 +49,18 @@ export function courseOf(input: FiringInput): Course | null {
   const step = stepFor(span);
   const scatter = scatterOf(record.minutes, record.celsius);
 
-  const levelHalf = levelHalfFor(scatter);
-  const rateHalf = halfWidthFor('rate', WIDE_HALF_MINUTES, scatter);
-  const wholeFine = curveOf(record, levelHalf, step);
-  const levelError = errorOf('level', levelHalf, scatter.noiseCelsius, scatter.readingsPerMinute);
-  const start = startOf(curveOf(record, rateHalf, step), wholeFine, levelError, marks);
-  const shutOff = shutOffOf(wholeFine, levelError, record.minutes, start.minute, marks);
+  const corners = cornersOf(pointsOf(record, scatter));
+  const first = record.minutes[0] ?? 0;
+  const whole = curveAlong(corners, first, first + span, step);
+  const fineError = errorOfLevel(scatter);
+  const start = startOf(whole, marks);
+  const shutOff = shutOffOf(whole, {
+    fineError,
+    readingMinutes: record.minutes,
+    startMinute: start.minute,
+    targetCelsius: input.targetCelsius ?? null,
+    marks,
+  });
 
   let from = indexAtOrAfter(record.minutes, start.minute - 1e-9);
   let to = indexAtOrAfter(record.minutes, shutOff.minute + 1e-9);
@@ -65,9 +68,11 @@ export function courseOf(input: FiringInput): Course | null {
     from = 0;
     to = n;
   }
-  const cut = (half: number) => curveOf(record, half, step, from, to);
-  const swingMinutes = swingPeriod(cut(Math.max(levelHalf, FINE_HALF_MINUTES)));
-  const fineHalf = swingMinutes === null ? levelHalf : Math.max(levelHalf, swingMinutes / 2);
+  const between = (a: number, b: number) =>
+    curveAlong(corners, record.minutes[a] ?? 0, record.minutes[b] ?? 0, step);
+  const fine = between(from, to - 1);
+  const swingMinutes = swingOf(fine, input);
+  const wideHalf = Math.max(WIDE_HALF_MINUTES, swingMinutes ?? 0);
   return {
     record,
     scatter,
@@ -76,19 +81,26 @@ export function courseOf(input: FiringInput): Course | null {
     shutOff,
     from,
     to,
-    wide: cut(Math.max(WIDE_HALF_MINUTES, swingMinutes ?? 0)),
-    narrow: cut(Math.max(rateHalf, swingMinutes ?? 0)),
-    fine: cut(fineHalf),
-    fineError: errorOf('level', fineHalf, scatter.noiseCelsius, scatter.readingsPerMinute),
-    after: n - to >= 1 && to < n ? curveOf(record, levelHalf, step, Math.max(0, to - 1), n) : null,
+    fine,
+    steady: swingMinutes === null ? fine : curveOf(fine, swingMinutes / 2, step),
+    wide: curveOf(fine, wideHalf, step),
+    fineError,
+    after: to < n ? between(to - 1, n - 1) : null,
     swingMinutes,
   };
 }
 
-/** None where single readings are good enough; half a minute; wider only for few noisy readings. */
-function levelHalfFor(scatter: Scatter): number {
-  const half = halfWidthFor('level', WIDE_HALF_MINUTES, scatter);
-  return half === 0 ? 0 : Math.max(FINE_HALF_MINUTES, half);
+/** Stoking swings like this where the record does not show it better, minutes (common practice, no source). */
+const STOKING_SWING = 8;
+
+/** The period of a record that swings regularly; a kiln fired with wood always does. */
+function swingOf(fine: Curve, input: FiringInput): number | null {
+  return swingPeriod(fine) ?? (input.fuel === 'wood' ? STOKING_SWING : null);
+}
+
+/** Standard error of the mean of a minute's readings, °C; of one where there are fewer. */
+function errorOfLevel({ noiseCelsius, readingsPerMinute }: Scatter): number {
+  return noiseCelsius / Math.sqrt(readingsPerMinute + 1);
 }
 
 /** Index of the first value at or after a minute. */

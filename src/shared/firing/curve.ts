@@ -1,17 +1,14 @@
-import { LEVEL_ERROR_WANTED, RATE_ERROR_WANTED } from './constants.ts';
 import type { CleanReadings } from './clean-readings.ts';
-import type { Scatter } from './scatter.ts';
+import type { Corners } from './straight-stretches.ts';
 
-/**
- * The course of a firing at even steps: value and rate by local straight-line regression, or, where
- * a window holds fewer than three readings, along the straight line between the two around it.
- */
+/** The course of a firing at even steps. */
 export interface Curve {
   readonly minutes: Float64Array;
   readonly celsius: Float64Array;
   /** °C/min. */
   readonly rates: Float64Array;
   readonly stepMinutes: number;
+  /** Half width of the window its rates were taken over; 0 where they are those of the moment. */
   readonly halfMinutes: number;
 }
 
@@ -26,7 +23,39 @@ export function stepFor(spanMinutes: number): number {
   return Math.max(STEP_MINUTES, spanMinutes / MOST_STEPS);
 }
 
-/** Evaluates the curve of readings[from..to) from the first to the last of them. */
+/** The course along its corners, from one minute to another. */
+export function curveAlong(
+  corners: Corners,
+  fromMinute: number,
+  toMinute: number,
+  stepMinutes: number,
+): Curve {
+  const t = corners.minutes;
+  const y = corners.celsius;
+  const span = Math.max(0, toMinute - fromMinute);
+  const steps = Math.max(1, Math.ceil(span / stepMinutes - 1e-9) + 1);
+  const minutes = new Float64Array(steps);
+  const celsius = new Float64Array(steps);
+  const rates = new Float64Array(steps);
+  let c = 0;
+  for (let i = 0; i < steps; i += 1) {
+    const at = Math.min(fromMinute + i * stepMinutes, fromMinute + span);
+    while (c < t.length - 2 && (t[c + 1] ?? Infinity) <= at) c += 1;
+    const t0 = t[c] ?? 0;
+    const y0 = y[c] ?? 0;
+    const run = (t[c + 1] ?? t0) - t0;
+    const rate = run > 0 ? ((y[c + 1] ?? y0) - y0) / run : 0;
+    minutes[i] = at;
+    celsius[i] = y0 + rate * (at - t0);
+    rates[i] = rate;
+  }
+  return { minutes, celsius, rates, stepMinutes, halfMinutes: 0 };
+}
+
+/**
+ * Local straight-line regression about every step: value and rate over ± half minutes, or, where a
+ * window holds fewer than three readings, along the straight line between the two around it.
+ */
 export function curveOf(
   record: Pick<CleanReadings, 'minutes' | 'celsius'>,
   halfMinutes: number,
@@ -132,42 +161,6 @@ function slidingWindow(t: Float64Array, y: Float64Array, from: number): SlidingW
       return Number.isFinite(value) ? { value, rate } : null;
     },
   };
-}
-
-/** Half widths tried from the narrowest, as shares of the widest allowed. */
-const SHARES = [0, 0.2, 0.4, 0.6, 0.8, 1];
-/** Bins in which readings closer together than that are averaged, to see wander as well as noise. */
-const BINS_PER_MINUTE = 4;
-
-/**
- * The narrowest half width, minutes, that still gives the rate (or the level) as exactly as is
- * wanted for this record's scatter and spacing; the widest where none does.
- */
-export function halfWidthFor(wanted: 'rate' | 'level', widest: number, scatter: Scatter): number {
-  for (const share of SHARES) {
-    const half = share * widest;
-    const error = Math.max(
-      errorOf(wanted, half, scatter.noiseCelsius, scatter.readingsPerMinute),
-      scatter.readingsPerMinute > 2 * BINS_PER_MINUTE && half > 0
-        ? errorOf(wanted, half, scatter.binNoiseCelsius, BINS_PER_MINUTE)
-        : 0,
-    );
-    if (error <= (wanted === 'level' ? LEVEL_ERROR_WANTED : RATE_ERROR_WANTED)) return half;
-  }
-  return widest;
-}
-
-/** Standard error of a line's level (°C) or rate (°C/min) in a window of this half width. */
-export function errorOf(
-  wanted: 'rate' | 'level',
-  half: number,
-  noiseCelsius: number,
-  perMinute: number,
-): number {
-  const inWindow = 2 * half * perMinute + 1;
-  if (wanted === 'level') return noiseCelsius / Math.sqrt(inWindow);
-  if (half === 0) return 2 * noiseCelsius * perMinute;
-  return noiseCelsius / (half * Math.sqrt(inWindow / 3));
 }
 
 /** Index of the last step at or before a minute. */

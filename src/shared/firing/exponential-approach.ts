@@ -13,7 +13,7 @@ export interface ApproachOptions {
   readonly start?: number;
 }
 
-const TRIED = 160;
+const TRIED = 80;
 
 /**
  * Fits the approach by searching the rate k = 1 ÷ τ alone: for a given k the other parameters follow

@@ -14,6 +14,8 @@ import type { Hold } from './types.ts';
 const BIN = 0.1;
 /** Farther from the aim no value can belong to a hold. */
 const REACH = HOLD_BAND + HOLD_OFF_AIM;
+/** The ends of a line through n readings lie apart by √(8 ÷ n) of their scatter by chance: half of that is let pass. */
+const ENDS_VARIANCE = 2;
 /** A search over more moments than this is no more exact. */
 const MOST_MOMENTS = 600;
 
@@ -24,7 +26,7 @@ const MOST_MOMENTS = 600;
  * @param hasAim false when `aim` is only the peak standing in for an unknown target
  */
 export function holdOf(course: Course, aim: number, hasAim: boolean): Hold | null {
-  const { fine } = course;
+  const { steady: fine } = course;
   const near = firstAtOrAbove(fine, aim - HOLD_OFF_AIM);
   if (near === null) return null;
   const first = fine.minutes.findIndex((minute) => minute >= near - 1e-9);
@@ -35,7 +37,13 @@ export function holdOf(course: Course, aim: number, hasAim: boolean): Hold | nul
     minutes.push(fine.minutes[i] ?? 0);
     celsius.push(fine.celsius[i] ?? 0);
   }
-  const best = longest(minutes, celsius, aim);
+  const { noiseCelsius, readingsPerMinute } = course.scatter;
+  const best = longest(
+    minutes,
+    celsius,
+    aim,
+    (length) => noiseCelsius * Math.sqrt(ENDS_VARIANCE / (1 + length * readingsPerMinute)),
+  );
   if (best === null) return null;
   const fromMinute = minutes[best.from] ?? 0;
   const toMinute = minutes[best.to] ?? 0;
@@ -59,6 +67,7 @@ function longest(
   minutes: readonly number[],
   celsius: readonly number[],
   aim: number,
+  slack: (length: number) => number,
 ): Stretch | null {
   const n = minutes.length;
   let best: Stretch | null = null;
@@ -82,7 +91,7 @@ function longest(
         Math.abs(median - aim) <= HOLD_OFF_AIM &&
         high - median <= HOLD_BAND &&
         median - low <= HOLD_BAND &&
-        Math.abs(y - y0) <= Math.max(HOLD_ENDS, HOLD_ENDS_PER_MINUTE * length);
+        Math.abs(y - y0) <= Math.max(HOLD_ENDS, HOLD_ENDS_PER_MINUTE * length) + slack(length);
       if (isHold) {
         best = { from, to, median };
         bestMinutes = length;

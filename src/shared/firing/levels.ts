@@ -19,8 +19,12 @@ import {
 } from './constants.ts';
 import type { Course } from './course.ts';
 import { indexAtOrAfter } from './course.ts';
-import { firstAtOrAbove } from './curve.ts';
+import { firstAtOrAbove, stepAt } from './curve.ts';
+import { settledMinute } from './settling.ts';
 import type { LevelAnswer, LevelKind, LevelStretch } from './types.ts';
+
+/** A stretch's first and last half minute may hold the corner itself. */
+const EDGE_MINUTES = 0.5;
 
 /** A stretch by its first and last step. */
 interface Run {
@@ -50,19 +54,22 @@ export function levelStretches(
 ): LevelStretch[] {
   const limit = levelRateLimit(pace);
   const shortest = shortestLevelMinutes(pace);
-  const { minutes, celsius } = course.fine;
+  const { minutes, celsius } = course.steady;
   const at = (step: number) => minutes[step] ?? 0;
   const level = (step: number) => celsius[step] ?? 0;
   const runs = merged(
-    levelRuns(course.wide.rates, limit).map((run) => adjusted(course, run, limit)),
+    levelRuns(course.wide.rates, limit)
+      .map((run) => adjusted(course, run, limit))
+      .map((run) => settled(course, run, limit)),
     at,
     level,
   );
+  const edge = Math.round(EDGE_MINUTES / course.steady.stepMinutes);
   const stretches: LevelStretch[] = [];
   for (const run of runs) {
     const length = at(run.to) - at(run.from);
     if (length < shortest - 0.01) continue;
-    if (level(run.to) - level(run.from) <= -LEVEL_FALL) continue;
+    if (fallOver(run, level, edge) >= LEVEL_FALL) continue;
     const inside = readingsIn(course, at(run.from), at(run.to));
     if (inside.length < LEVEL_FEWEST_READINGS) continue;
     const median = quantile(inside, 0.5) ?? level(run.from);
@@ -77,6 +84,17 @@ export function levelStretches(
     });
   }
   return stretches.map((stretch) => answered(course, stretch, stretches, answers));
+}
+
+/** From its beginning to its end, the corners at both ends included. */
+function fallOver(run: Run, level: (step: number) => number, edge: number): number {
+  let top = -Infinity;
+  let bottom = Infinity;
+  for (let i = 0; i <= Math.min(edge, run.to - run.from); i += 1) {
+    top = Math.max(top, level(run.from + i));
+    bottom = Math.min(bottom, level(run.to - i));
+  }
+  return top - bottom;
 }
 
 function levelRuns(rates: Float64Array, limit: number): Run[] {
@@ -95,32 +113,27 @@ function levelRuns(rates: Float64Array, limit: number): Run[] {
 
 /**
  * The wide window rounds corners off: its ends are moved, by no more than its half width, to where
- * the narrow rate (or, in noisy records, the level itself) leaves the stretch.
+ * the rate of the moment leaves the stretch.
  */
 function adjusted(course: Course, run: Run, limit: number): Run {
   if (course.swingMinutes !== null) return run;
-  const { narrow, fine } = course;
+  const { fine } = course;
   const most = Math.round(WIDE_HALF_MINUTES / fine.stepMinutes);
   const last = fine.minutes.length - 1;
-  const isExact = narrow.halfMinutes <= 0.5;
-  const isLevel = (i: number) => Math.abs(narrow.rates[i] ?? Infinity) <= limit + 1e-9;
+  const isLevel = (i: number) => Math.abs(fine.rates[i] ?? Infinity) <= limit + 1e-9;
   let { from, to } = run;
-  if (isExact) {
-    while (from < to && from < run.from + most && !isLevel(from)) from += 1;
-    while (to > from && to > run.to - most && !isLevel(to - 1)) to -= 1;
-    if (from === run.from)
-      while (from > 0 && from > run.from - most && isLevel(from - 1)) from -= 1;
-    if (to === run.to) while (to < last && to < run.to + most && isLevel(to)) to += 1;
-    return { from, to };
-  }
-  const near = Math.max(1, 4 * course.fineError);
-  const start = fine.celsius[run.from] ?? 0;
-  const slope = run.to > run.from ? ((fine.celsius[run.to] ?? 0) - start) / (run.to - run.from) : 0;
-  const isNear = (i: number) =>
-    Math.abs((fine.celsius[i] ?? Infinity) - start - slope * (i - run.from)) <= near;
-  while (from > 0 && from > run.from - most && isNear(from - 1)) from -= 1;
-  while (to < last && to < run.to + most && isNear(to + 1)) to += 1;
+  while (from < to && from < run.from + most && !isLevel(from)) from += 1;
+  while (to > from && to > run.to - most && !isLevel(to - 1)) to -= 1;
+  if (from === run.from) while (from > 0 && from > run.from - most && isLevel(from - 1)) from -= 1;
+  if (to === run.to) while (to < last && to < run.to + most && isLevel(to)) to += 1;
   return { from, to };
+}
+
+/** Begins where a climb that settles by itself comes to be level. */
+function settled(course: Course, run: Run, limit: number): Run {
+  const { minutes } = course.steady;
+  const minute = settledMinute(course, minutes[run.from] ?? 0, minutes[run.to] ?? 0, limit);
+  return minute === null ? run : { ...run, from: Math.min(stepAt(course.steady, minute), run.to) };
 }
 
 /** Stretches less than 2 min and 10 °C apart are one. */
@@ -134,8 +147,9 @@ function merged(
     const last = out[out.length - 1];
     const isOne =
       last !== undefined &&
-      at(run.from) - at(last.to) < LEVEL_GAP_MINUTES &&
-      Math.abs(level(run.from) - level(last.to)) < LEVEL_GAP_CELSIUS;
+      (run.from <= last.to ||
+        (at(run.from) - at(last.to) < LEVEL_GAP_MINUTES &&
+          Math.abs(level(run.from) - level(last.to)) < LEVEL_GAP_CELSIUS));
     if (isOne) last.to = Math.max(last.to, run.to);
     else out.push({ ...run });
   }
@@ -155,7 +169,7 @@ function readingsIn(course: Course, from: number, to: number): number[] {
 
 /** The first name that fits. */
 function kindOf(course: Course, run: Run, median: number, aim: number): LevelKind {
-  const { fine } = course;
+  const { steady: fine } = course;
   const end = fine.celsius[run.to] ?? 0;
   const endMinute = fine.minutes[run.to] ?? 0;
   const reachedLater = firstAtOrAbove(fine, aim - REACHED_BELOW_AIM, endMinute);
@@ -171,7 +185,7 @@ function kindOf(course: Course, run: Run, median: number, aim: number): LevelKin
 }
 
 function whatCameAfter(course: Course, run: Run, median: number): LevelStretch['then'] {
-  const { fine } = course;
+  const { steady: fine } = course;
   const endMinute = fine.minutes[run.to] ?? 0;
   if (endMinute >= course.shutOff.minute - APPROACH_MINUTES) return 'shut-off';
   if (firstAtOrAbove(fine, median + LEVEL_GAP_CELSIUS, endMinute) !== null) return 'climbed';

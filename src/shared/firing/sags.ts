@@ -15,6 +15,8 @@ import type { Sag } from './types.ts';
 const TURNED_BY = 8;
 /** Drawn rather than held when the firing ends so soon after the bottom, minutes. */
 const DRAWN_WITHIN = 3;
+/** A fall begins and ends within so much of its top and bottom, °C. */
+const MOST_NEAR = 2;
 /** Regained when the curve comes back within this of the top, °C. */
 const REGAINED_WITHIN = 5;
 /** Steps of the curve and corners rounded by it may cost so much of a fall's length, minutes. */
@@ -26,13 +28,13 @@ const MINUTES_SLACK = 0.25;
  * lid lifted or loaded (or shut off and lit again).
  */
 export function sagsOf(course: Course, aim: number): Sag[] {
-  const { minutes, celsius } = course.fine;
+  const { minutes, celsius } = course.steady;
   const sags: Sag[] = [];
   for (const { top, bottom } of falls(celsius)) {
     const topCelsius = celsius[top] ?? 0;
     const bottomCelsius = celsius[bottom] ?? 0;
     if (topCelsius < SAG_FROM || topCelsius >= aim - JUST_SHORT) continue;
-    const near = Math.max(0.1, 2 * course.fineError);
+    const near = Math.min(MOST_NEAR, Math.max(0.1, course.fineError / 2));
     let from = bottom;
     while (from > top && (celsius[from] ?? 0) < topCelsius - near) from -= 1;
     let to = from;
@@ -45,7 +47,7 @@ export function sagsOf(course: Course, aim: number): Sag[] {
       continue;
     }
     if (isExplained(course, fromMinute)) continue;
-    const regained = firstAtOrAbove(course.fine, topCelsius - REGAINED_WITHIN, toMinute) !== null;
+    const regained = firstAtOrAbove(course.steady, topCelsius - REGAINED_WITHIN, toMinute) !== null;
     const isLast = course.shutOff.minute - toMinute < DRAWN_WITHIN;
     sags.push({
       fromMinute,

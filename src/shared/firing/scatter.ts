@@ -10,10 +10,14 @@ export interface Scatter {
   readonly readingsPerMinute: number;
 }
 
-const BIN_MINUTES = 0.25;
+/** Means over a quarter of a minute show wander that neighbouring readings share. */
+export const WANDER_BINS_PER_MINUTE = 4;
+const BIN_MINUTES = 1 / WANDER_BINS_PER_MINUTE;
 /** The display's last digit, tried from the coarsest, °C. */
 const DIGITS = [5, 1, 0.5, 0.1];
 const FINEST_SCATTER = 0.005;
+/** Differences larger than this between far readings are the course, not scatter (our definition). */
+const MOST_NOISE = 8;
 
 /** Measures the scatter of readings in order of time. Linear but for the medians. */
 export function scatterOf(minutes: Float64Array, celsius: Float64Array): Scatter {
@@ -26,8 +30,11 @@ export function scatterOf(minutes: Float64Array, celsius: Float64Array): Scatter
   const step = quantileOfSorted(steps, 0.5) ?? 1;
   const binned = meansOf(minutes, celsius);
   return {
-    noiseCelsius: Math.max(neighbourNoise(minutes, celsius), roundingScatter(celsius)),
-    binNoiseCelsius: neighbourNoise(binned.minutes, binned.celsius),
+    noiseCelsius: Math.max(
+      Math.min(MOST_NOISE, neighbourNoise(minutes, celsius)),
+      roundingScatter(celsius),
+    ),
+    binNoiseCelsius: Math.min(MOST_NOISE, neighbourNoise(binned.minutes, binned.celsius)),
     readingsPerMinute: step > 0 ? 1 / step : 1,
   };
 }
@@ -35,9 +42,16 @@ export function scatterOf(minutes: Float64Array, celsius: Float64Array): Scatter
 /** Fewer readings than this are mostly corners and bends: their scatter cannot be told from the course. */
 const FEWEST_FOR_NOISE = 15;
 
+/** In a record of fewer readings than this many a difference spans a corner: their lower quarter does not. */
+const MANY = 100;
+const LOW_SHARE = 0.25;
+/** Quarter and half of |z| lie below these, z of the normal distribution. */
+const LOW_QUANTILE = 0.3186;
+const MEDIAN_QUANTILE = 0.6745;
+
 /**
  * Scatter of single readings by third differences of four neighbours, which no straight line and no
- * even bend of the course has: 1.4826 × their median size, each over the deviation that white noise
+ * even bend of the course has: from the median of their sizes, each over the deviation that white noise
  * of 1 °C would give it. A corner of the course moves the median little.
  */
 export function neighbourNoise(minutes: Float64Array, celsius: Float64Array): number {
@@ -61,7 +75,8 @@ export function neighbourNoise(minutes: Float64Array, celsius: Float64Array): nu
     sizes[at] = Number.isFinite(size) ? size : 0;
   }
   sizes.sort();
-  return 1.4826 * (quantileOfSorted(sizes, 0.5) ?? 0);
+  const share = n < MANY ? LOW_SHARE : 0.5;
+  return (quantileOfSorted(sizes, share) ?? 0) / (n < MANY ? LOW_QUANTILE : MEDIAN_QUANTILE);
 }
 
 /** A median of this many is as good as one of them all. */

@@ -1,4 +1,4 @@
-import { COOLED_BY, STEEP_MINUTES, STEEP_RATE } from './constants.ts';
+import { COOLED_BY, JUST_SHORT, STEEP_MINUTES, STEEP_RATE } from './constants.ts';
 import type { Curve } from './curve.ts';
 import { stepAt } from './curve.ts';
 import type { Moment } from './start.ts';
@@ -10,16 +10,21 @@ const CLIMBED_AGAIN = 100;
 const STAYS_BELOW = 15;
 const SLOW_FALL_RATE = 2;
 
+interface ShutOffClues {
+  readonly fineError: number;
+  readonly readingMinutes: Float64Array;
+  readonly startMinute: number;
+  readonly targetCelsius: number | null;
+  readonly marks: readonly Mark[];
+}
+
 /**
  * End of the firing: the last shut-off mark not followed by lighting again; else the last reading
  * before a lasting steep fall after the peak; else the last reading.
  */
 export function shutOffOf(
   fine: Curve,
-  fineError: number,
-  readingMinutes: Float64Array,
-  startMinute: number,
-  marks: readonly Mark[],
+  { fineError, readingMinutes, startMinute, targetCelsius, marks }: ShutOffClues,
 ): Moment {
   const last = fine.minutes[fine.minutes.length - 1] ?? 0;
   const off = latest(marks, ['shut-off']);
@@ -32,6 +37,7 @@ export function shutOffOf(
     fine,
     Math.max(from, fine.minutes[0] ?? 0),
     Math.min(3, Math.max(0.25, 3 * fineError)),
+    targetCelsius,
   );
   return { minute: knee === null ? last : readingBefore(readingMinutes, knee), inferred: true };
 }
@@ -54,7 +60,12 @@ function readingBefore(minutes: Float64Array, minute: number): number {
 }
 
 /** Where the lasting fall after the peak begins; null where the record has none. */
-function kneeOf(fine: Curve, fromMinute: number, near: number): number | null {
+function kneeOf(
+  fine: Curve,
+  fromMinute: number,
+  near: number,
+  targetCelsius: number | null,
+): number | null {
   const v = fine.celsius;
   const n = v.length;
   const peak = highest(v, stepAt(fine, fromMinute), n);
@@ -73,7 +84,7 @@ function kneeOf(fine: Curve, fromMinute: number, near: number): number | null {
     const knee = lastNearTop(v, i, to, near);
     if ((highestAfter[to] ?? 0) <= (v[knee] ?? 0) - STAYS_BELOW) return fine.minutes[knee] ?? null;
   }
-  return slowFall(fine, Math.max(peak, climbsAgain), near);
+  return slowFall(fine, Math.max(peak, climbsAgain), near, targetCelsius);
 }
 
 /** The last step near the highest of a span: where a level ends and the fall begins. */
@@ -84,15 +95,24 @@ function lastNearTop(v: Float64Array, from: number, to: number, near: number): n
   return knee;
 }
 
-/** A kiln that cools slowly to the record's end without ever turning was shut off at its peak. */
-function slowFall(fine: Curve, from: number, near: number): number | null {
+/**
+ * A kiln that cools slowly to the record's end without ever turning was shut off at its peak; below
+ * its target it may only sag, until it has lost COOLED_BY.
+ */
+function slowFall(
+  fine: Curve,
+  from: number,
+  near: number,
+  targetCelsius: number | null,
+): number | null {
   const v = fine.celsius;
   const n = v.length;
   const top = highest(v, from, n);
   const knee = lastNearTop(v, top, n - 1, near);
   const drop = (v[knee] ?? 0) - (v[n - 1] ?? 0);
   const minutes = (n - 1 - knee) * fine.stepMinutes;
-  return drop >= COOLED_BY && drop >= SLOW_FALL_RATE * minutes
+  const isDone = targetCelsius !== null && (v[knee] ?? 0) >= targetCelsius - JUST_SHORT;
+  return drop >= (isDone ? STAYS_BELOW : COOLED_BY) && drop >= SLOW_FALL_RATE * minutes
     ? (fine.minutes[knee] ?? null)
     : null;
 }

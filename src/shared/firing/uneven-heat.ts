@@ -1,7 +1,10 @@
 import { cleanReadings } from './clean-readings.ts';
 import { FEWEST_READINGS, UNEVEN_ABOVE, UNEVEN_CELSIUS, UNEVEN_MINUTES } from './constants.ts';
 import type { Course } from './course.ts';
-import { curveOf, valueAt } from './curve.ts';
+import { curveAlong, valueAt } from './curve.ts';
+import { pointsOf } from './points.ts';
+import { scatterOf } from './scatter.ts';
+import { cornersOf } from './straight-stretches.ts';
 import type { ProbeSpread, Reading } from './types.ts';
 
 /** The second probe says nothing across a silence longer than this, minutes. */
@@ -19,7 +22,13 @@ export function unevenHeat(
   const record = cleanReadings(secondProbe);
   const n = record.minutes.length;
   if (n < FEWEST_READINGS) return null;
-  const second = curveOf(record, course.fine.halfMinutes, course.fine.stepMinutes);
+  const corners = cornersOf(pointsOf(record, scatterOf(record.minutes, record.celsius)));
+  const second = curveAlong(
+    corners,
+    record.minutes[0] ?? 0,
+    record.minutes[n - 1] ?? 0,
+    course.fine.stepMinutes,
+  );
   const { minutes, celsius } = course.fine;
   let best: ProbeSpread | null = null;
   let from: number | null = null;
