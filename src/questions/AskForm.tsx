@@ -30,11 +30,7 @@ export function AskForm({ ofNote: { ask } }: { readonly ofNote: OfNote }) {
     );
   };
   return (
-    <form
-      noValidate
-      onSubmit={onSubmit}
-      className="not-in-print @container max-w-measure space-y-2"
-    >
+    <form noValidate onSubmit={onSubmit} className="not-in-print @container max-w-measure">
       <TextArea
         label="Your question"
         hint="Plain text that everybody can read. You get a mail when it is answered."
@@ -56,14 +52,16 @@ export function AskForm({ ofNote: { ask } }: { readonly ofNote: OfNote }) {
             : []
         }
       />
-      {ask.isError && (
-        <p role="alert" className="text-small font-[650] text-caution">
-          It was not asked: {ask.error.message}
-        </p>
-      )}
-      <Button type="submit" busy={ask.isPending}>
-        {ask.isError ? 'Try again' : 'Ask'}
-      </Button>
+      <div className="space-y-2 pt-1 @2xl:pl-[11.75rem]">
+        {ask.isError && (
+          <p role="alert" className="text-small font-[650] text-caution">
+            It was not asked: {ask.error.message}
+          </p>
+        )}
+        <Button type="submit" busy={ask.isPending}>
+          {ask.isError ? 'Try again' : 'Ask'}
+        </Button>
+      </div>
     </form>
   );
 }

@@ -28,7 +28,7 @@ export function QuestionRow({ question, ofNote }: Props) {
   const { answer, remove } = question.abilities;
   const own = question.answers.find(({ mine }) => mine) ?? null;
   return (
-    <li className="grid gap-x-8 gap-y-1 border-b border-line py-4 sm:grid-cols-[11rem_minmax(0,1fr)]">
+    <li className="grid gap-x-5 gap-y-1 border-b border-line py-4 sm:grid-cols-[10.5rem_minmax(0,1fr)]">
       <p className="text-small">
         <Person by={question.by} />
         <Moment at={question.at} />
