@@ -61,9 +61,11 @@ export function DeskPage() {
           <HeatLegend unit={units.temperature} withSentence />
         </>
       )}
-      <div className="pt-8">
-        <DisputedFindings units={units} />
-      </div>
+      {queue.data && (
+        <div className="pt-8">
+          <DisputedFindings units={units} />
+        </div>
+      )}
     </div>
   );
 }
