@@ -95,9 +95,12 @@ function Compared({ record, units, onTarget, onOther }: ComparedProps) {
   return (
     <>
       <section aria-labelledby="own" className="space-y-4">
-        <h2 id="own" className="text-section">
-          {record.name}
-        </h2>
+        <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2">
+          <h2 id="own" className="min-w-0 text-section [overflow-wrap:anywhere]">
+            {record.name}
+          </h2>
+          <Button onClick={onOther}>Another record</Button>
+        </div>
         <GlowStrip
           points={own.strip}
           alt={own.words || 'Too short to be read'}
@@ -105,7 +108,7 @@ function Compared({ record, units, onTarget, onOther }: ComparedProps) {
           unit={units.temperature}
         />
         {own.words && <p className="max-w-measure first-letter:uppercase">{own.words}.</p>}
-        <div className="@container flex flex-wrap items-end gap-x-6 gap-y-3">
+        <div className="@container max-w-measure">
           <TemperatureField
             label="Aimed at"
             hint="Tells a hold from a stall. Blank if unknown."
@@ -115,7 +118,6 @@ function Compared({ record, units, onTarget, onOther }: ComparedProps) {
             minCelsius={400}
             maxCelsius={1150}
           />
-          <Button onClick={onOther}>Another record</Button>
         </div>
       </section>
       <LiveRegion

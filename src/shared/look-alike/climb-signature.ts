@@ -2,8 +2,11 @@ import type { Course } from '../firing/course.ts';
 import { valueAt } from '../firing/curve.ts';
 import { FEWEST_MINUTES, MOST_MINUTES } from './constants.ts';
 
-/** Goes up when a signature of the same record would become another: kept ones are then made anew. */
-export const SIGNATURE_VERSION = 1;
+/**
+ * Goes up when the signature or the traits of the same record would become others: kept ones are
+ * then made anew.
+ */
+export const SIGNATURE_VERSION = 2;
 
 /** °C at each minute from the start of a firing to its end, rounded to whole degrees. */
 export type ClimbSignature = Int16Array;

@@ -31,6 +31,8 @@ export type ClimbTraits = z.infer<typeof climbTraitsSchema>;
 
 export function climbTraits(reading: FiringReading): ClimbTraits {
   const since = (minute: number) => minute - reading.start.minute;
+  // A record that just ends does not say that anything was shut off.
+  const endsOpen = reading.shutOff.inferred && reading.shutOff.minute >= reading.lastMinute;
   return {
     minutes: since(reading.shutOff.minute),
     peakCelsius: reading.peak.celsius,
@@ -44,7 +46,7 @@ export function climbTraits(reading: FiringReading): ClimbTraits {
       atMinute: since(fromMinute),
       minutes,
       levelCelsius,
-      then,
+      then: then === 'shut-off' && endsOpen ? null : then,
     })),
     sags: reading.sags.map(({ fromMinute, topCelsius, dropCelsius }) => ({
       atMinute: since(fromMinute),

@@ -112,6 +112,23 @@ describe('why two climbs are alike', () => {
     expect(why({ ...full, sags: [] }, slow)[0]).toBe('Both peak within 5 °C of 1000 °C.');
   });
 
+  test('never says of a record that just ends that the kiln was shut off', () => {
+    const readings = Array.from({ length: 60 }, (_, minute) => ({
+      minute,
+      celsius: Math.min(700, 20 + 27 * minute),
+    }));
+    const traitsWith = (marks: { minute: number; kind: 'shut-off' }[]) => {
+      const reading = readFiring({ readings, marks, targetCelsius: 1000 });
+      if (reading === null) throw new Error('It can be read.');
+      return climbTraits(reading);
+    };
+    const ended = traitsWith([]);
+    const off = traitsWith([{ minute: 59, kind: 'shut-off' }]);
+    expect(why(off, off)[0]).toMatch(/and are shut off there/);
+    expect(why(ended, off)[0]).toMatch(/^Both level off within 5 °C of 700 °C, for \d+ min/);
+    expect(why(ended, off)[0]).not.toMatch(/shut off/);
+  });
+
   test('of a simulated stall and its like speaks of the stall, from what was read off each', () => {
     const traitsOf = (seed: number) => {
       const { readings, marks } = simulateFiring({ ...FIRING_KINDS['stalled-then-off'], seed });
