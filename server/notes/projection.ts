@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import type { FollowOn } from '#shared/api/note-rows.ts';
+import type { CountedFacts } from '#shared/note/counted-facts.ts';
 import { storyTexts } from '#shared/note/story.ts';
 import type { Trouble } from '#shared/vocabulary/troubles.ts';
 import { countedRevision, type CountedRevision } from '../disputes/counted-revision.ts';
@@ -64,39 +65,48 @@ async function insertFiring(
   authorId: number | null,
   publishedAt: Date,
 ): Promise<void> {
-  const { fields, facts } = revision;
+  const { firing, troubles } = projectedRows(revision, storedRow(revision), authorId, publishedAt);
+  await trx('published_firings').insert(firing);
+  if (troubles.length > 0) await trx('firing_troubles').insert(troubles);
+}
+
+/** The rows of `published_firings` and `firing_troubles` that a published revision stands for. */
+export function projectedRows(
+  revision: Pick<CountedRevision, 'id' | 'noteId' | 'kilnId' | 'fields' | 'facts'>,
+  row: StoredRow,
+  authorId: number | null,
+  publishedAt: Date,
+) {
+  const { fields, facts, noteId } = revision;
   const measured = new Set<Trouble>(facts.measuredTroubles);
   const named = new Set<Trouble>(facts.namedTroubles);
   const disputed = new Set<Trouble>(facts.disputed);
-  const troubles = [...new Set([...measured, ...named, ...disputed])];
-  await trx('published_firings').insert({
-    note_id: revision.noteId,
-    revision_id: revision.id,
-    kiln_id: revision.kilnId,
-    author_id: authorId,
-    fired_on: fields.when.date,
-    fired_at_time: fields.when.startTime,
-    tried_note_id: fields.triedNoteId,
-    slug: slugOf(fields.title),
-    title: fields.title,
-    facts: JSON.stringify(facts),
-    note_row: JSON.stringify(storedRow(revision)),
-    story_text: storyTexts(fields.story)
-      .map((part) => part.text)
-      .join('\n'),
-    published_at: publishedAt,
-  });
-  if (troubles.length > 0) {
-    await trx('firing_troubles').insert(
-      troubles.map((trouble) => ({
-        note_id: revision.noteId,
-        trouble,
-        measured: measured.has(trouble),
-        named: named.has(trouble),
-        disputed: disputed.has(trouble),
-      })),
-    );
-  }
+  return {
+    firing: {
+      note_id: noteId,
+      revision_id: revision.id,
+      kiln_id: revision.kilnId,
+      author_id: authorId,
+      fired_on: fields.when.date,
+      fired_at_time: fields.when.startTime,
+      tried_note_id: fields.triedNoteId,
+      slug: slugOf(fields.title),
+      title: fields.title,
+      facts: JSON.stringify(facts),
+      note_row: JSON.stringify(row),
+      story_text: storyTexts(fields.story)
+        .map((part) => part.text)
+        .join('\n'),
+      published_at: publishedAt,
+    },
+    troubles: [...new Set([...measured, ...named, ...disputed])].map((trouble) => ({
+      note_id: noteId,
+      trouble,
+      measured: measured.has(trouble),
+      named: named.has(trouble),
+      disputed: disputed.has(trouble),
+    })),
+  };
 }
 
 /** The row of a revision, without what is joined in when it is read. */
@@ -126,22 +136,34 @@ export function storedRow(
   };
 }
 
+/** What a firing's row tells of the next firing of its kiln. */
+export function followOnOf(
+  facts: CountedFacts,
+  next: {
+    noteId: number;
+    title: string;
+    firedOn: string;
+    row: Pick<StoredRow, 'changes'>;
+    facts: CountedFacts;
+  },
+): FollowOn {
+  return {
+    noteId: next.noteId,
+    title: next.title,
+    firedOn: next.firedOn,
+    changes: next.row.changes,
+    peakCelsius: next.facts.peakCelsius,
+    timeToTemperatureMinutes: next.facts.timeToTemperatureMinutes,
+    outcomes: outcomesBetween(facts, next.facts),
+  };
+}
+
 /** Tells every firing of the kiln what came after it; only rows that change are written. */
 async function relinkKiln(trx: Knex, kilnId: number): Promise<void> {
   const firings = await factsOfKiln(trx, kilnId);
   for (const [index, firing] of firings.entries()) {
     const next = firings[index + 1];
-    const followOn: FollowOn | null = next
-      ? {
-          noteId: next.noteId,
-          title: next.title,
-          firedOn: next.firedOn,
-          changes: next.row.changes,
-          peakCelsius: next.facts.peakCelsius,
-          timeToTemperatureMinutes: next.facts.timeToTemperatureMinutes,
-          outcomes: outcomesBetween(firing.facts, next.facts),
-        }
-      : null;
+    const followOn = next ? followOnOf(firing.facts, next) : null;
     if (JSON.stringify(firing.row.followOn) === JSON.stringify(followOn)) continue;
     await trx('published_firings')
       .where({ note_id: firing.noteId })
