@@ -31,7 +31,9 @@ export const ReadingsTable = memo(function ReadingsTable(props: Props) {
   return (
     <Disclosure summary="The readings as a table">
       <div className="overflow-x-auto">
-        <table className="w-full max-w-measure text-small">
+        <table
+          className={`w-full text-small ${columns.length === 0 ? 'max-w-80' : 'max-w-measure'}`}
+        >
           <caption className="pb-2 text-left text-note text-soot-2">
             {stepMinutes === null
               ? `All ${rows.length} readings from ${windowWords(window)}.`
@@ -54,7 +56,7 @@ export const ReadingsTable = memo(function ReadingsTable(props: Props) {
               <tr key={index} className="border-b border-line">
                 <th scope="row" className="reading py-1 text-left font-[400]">
                   {formatNumber(row.minute, decimals)}
-                  {row.highest && <span className="font-sans text-soot-2"> highest</span>}
+                  {row.highest && <span className="font-sans text-soot-2">{' highest'}</span>}
                 </th>
                 <td className="reading py-1 pl-4 text-right">{shown(row.celsius)}</td>
                 {sources.secondProbe && (
