@@ -40,6 +40,14 @@ export function chooseUnit(
         : [],
     };
   }
+  const told = columns.find((column) => column.index > probe.index && unitOfCells(column) !== null);
+  const toldUnit = told === undefined ? null : unitOfCells(told);
+  if (told !== undefined && toldUnit !== null) {
+    return {
+      unit: toldUnit,
+      assumed: [`${name} is in ${WORDS[toldUnit]}, as ${columnWords(told)} says.`],
+    };
+  }
   const isType = probe.name.temperatureUnit === 'K' && probe.low < COLDEST_KELVIN;
   const assumed = isType
     ? [
@@ -77,6 +85,14 @@ export function chooseUnit(
   const words = [...taken.assumed];
   const last = words.pop() ?? '';
   return { unit: guess.unit, assumed: [...words, `${last}${doubt}`] };
+}
+
+/** The unit that is all a column holds, one and the same: "°C" on every line. */
+function unitOfCells(column: TableColumn): TemperatureUnit | null {
+  if (/type|typ\b/i.test(column.name.text)) return null;
+  const filled = column.cells.filter((cell) => cell !== '');
+  const unit = temperatureUnit(filled[0] ?? '');
+  return unit !== null && filled.every((cell) => temperatureUnit(cell) === unit) ? unit : null;
 }
 
 /** The unit a column's name tells, if its numbers allow it. */

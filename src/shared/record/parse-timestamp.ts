@@ -5,7 +5,7 @@ import { monthOfName, ZONE_MINUTES } from './record-words.ts';
 export type DateOrder = 'own' | 'dmy' | 'mdy' | 'ymd';
 
 /** Longer than any date with time, zone and weekday. */
-const LONGEST = 60;
+const LONGEST = 90;
 
 /** Minutes since 1970 of a date with a time; of a date alone, its midnight. Null if unreadable. */
 export function timestampMinutes(cell: string, order: DateOrder): number | null {
@@ -112,9 +112,9 @@ function isDigitAt(text: string, at: number): boolean {
   return code >= 48 && code <= 57;
 }
 
-/** Minutes ahead of UTC of "Z", "+01:00", "-0500", "+2", "CEST", "utc+1", "[Europe/…]" after one. */
+/** Minutes ahead of UTC of "Z", "+01:00", "-0500", "+2", "CEST", "utc+1", a name in brackets after one. */
 function zoneMinutes(zone: string): number | null {
-  const bracket = zone.indexOf('[');
+  const bracket = zone.search(/[[(]/);
   const text = (bracket < 0 ? zone : zone.slice(0, bracket)).trim();
   if (text === '' || text === 'z') return 0;
   const named = ZONE_MINUTES.get(text);

@@ -107,7 +107,18 @@ function readCell(
     at += 1;
     if (at - start > RECORD_LIMITS.cellCharacters) throw tooLong(line, column);
   }
-  return { value: text.slice(start, at).trim(), next: at, newlines: 0 };
+  return { value: withoutWrapping(text.slice(start, at).trim()), next: at, newlines: 0 };
+}
+
+/** A cell wrapped in single quotes, or as a spreadsheet's formula of a text: '20' and ="20". */
+function withoutWrapping(value: string): string {
+  const first = value.charCodeAt(0);
+  if (first !== 39 && first !== 61) return value;
+  const isWrapped = value.length >= 2 && value.endsWith("'");
+  if (first === 39) return isWrapped ? value.slice(1, -1).trim() : value;
+  return value.length >= 3 && value.startsWith('="') && value.endsWith('"')
+    ? value.slice(2, -1).trim()
+    : value;
 }
 
 function readQuoted(

@@ -163,4 +163,37 @@ export const ODD_SHAPES: readonly LoggerShape[] = [
       row: ({ minute, T }) => [4321 + minute * 60_000, T],
     },
   },
+  {
+    name: 'a column that holds nothing but the unit',
+    shape: {
+      head: ['Time,Value,Unit'],
+      unit: 'F',
+      startCelsius: 100,
+      peakCelsius: 450,
+      row: ({ minute, T }) => [moment(minute).clock, T, 'F'],
+    },
+    expected: { says: ['as Column 3 (Unit) says'] },
+  },
+  {
+    name: 'cells as a spreadsheet’s formulas of texts',
+    shape: { head: ['Time (min),Temp (C)'], row: ({ minute, T }) => [`="${minute}"`, `="${T}"`] },
+  },
+  {
+    name: 'cells in single quotes',
+    shape: { head: ["'Time (min)','Temp (C)'"], row: ({ minute, T }) => [`'${minute}'`, `'${T}'`] },
+  },
+  {
+    name: 'a date as a browser prints it, the zone spelled out',
+    shape: {
+      head: ['time;C'],
+      delimiter: ';',
+      row: ({ minute, T }) => {
+        const p = moment(minute);
+        return [
+          `Tue ${p.mon} ${p.d} ${p.y} ${p.clock} GMT+0100 (Central European Standard Time)`,
+          T,
+        ];
+      },
+    },
+  },
 ];
