@@ -1,7 +1,7 @@
 import { isDeepStrictEqual } from 'node:util';
 import { NOTES_INDEX, type NoteDocument } from '../../search/note-document.ts';
 import type { Deps } from '../deps.ts';
-import { currentDocument, indexNote } from './index-note.ts';
+import { currentDocuments, indexNote } from './index-note.ts';
 import { writingClient } from './search-client.ts';
 
 const BATCH = 200;
@@ -24,9 +24,13 @@ export async function mendIndex(deps: Deps): Promise<number> {
   const seen = new Set<number>();
   for (let offset = 0; ; offset += BATCH) {
     const documents = await documentsIn(deps, offset);
+    const current = await currentDocuments(
+      deps,
+      documents.map(({ noteId }) => noteId),
+    );
     for (const document of documents) {
       seen.add(document.noteId);
-      const now = await currentDocument(deps, document.noteId);
+      const now = current.get(document.noteId);
       if (!isDeepStrictEqual({ ...document }, now)) wrong.add(document.noteId);
     }
     if (documents.length < BATCH) break;

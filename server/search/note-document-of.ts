@@ -33,7 +33,10 @@ function outcomeOf(row: NoteRow, hasRecord: boolean): NoteDocument['outcome'] {
  * A published note as the engine holds it, from the projection and its revision. A trouble that its
  * author disputes is not sought or shown by: neither as a trouble, nor by its level, nor in short.
  */
-export function noteDocumentOf(row: NoteRow, revision: CountedRevision): NoteDocument {
+export function noteDocumentOf(
+  row: NoteRow,
+  revision: Pick<CountedRevision, 'facts' | 'fields'>,
+): NoteDocument {
   const { facts, fields } = revision;
   const texts = storyTexts(fields.story);
   const glazes: GlazeAsked[] = [

@@ -1,10 +1,12 @@
 import { NOTE_INDEX_SETTINGS } from '../../search/index-settings.ts';
 import { NOTES_INDEX, NOTES_REBUILD_INDEX, type NoteDocument } from '../../search/note-document.ts';
 import type { Deps } from '../deps.ts';
-import { currentDocument, finished, indexNote } from './index-note.ts';
+import { currentDocuments, finished, indexNote } from './index-note.ts';
 import { writingClient } from './search-client.ts';
 
-const BATCH = 200;
+const BATCH = 500;
+/** Batches that the engine works on while the next is read. */
+const BATCHES_WAITING = 2;
 
 /**
  * Rebuilds the index from the database without a gap: fills a second one, swaps the two, and then
@@ -27,17 +29,23 @@ export async function reindex(
     .db('published_firings')
     .orderBy('published_firings.note_id')
     .pluck<number[]>('published_firings.note_id');
+  const rebuilt = client.index<NoteDocument>(NOTES_REBUILD_INDEX);
+  const waiting: { task: Promise<void>; done: number }[] = [];
+  const settleOldest = async (): Promise<void> => {
+    const oldest = waiting.shift();
+    if (!oldest) return;
+    await oldest.task;
+    onProgress(oldest.done, ids.length);
+  };
   for (let from = 0; from < ids.length; from += BATCH) {
-    const documents: NoteDocument[] = [];
-    for (const id of ids.slice(from, from + BATCH)) {
-      const document = await currentDocument(deps, id);
-      if (document) documents.push(document);
-    }
-    await finished(
-      client.index<NoteDocument>(NOTES_REBUILD_INDEX).addDocuments(documents, { primaryKey: 'id' }),
-    );
-    onProgress(Math.min(from + BATCH, ids.length), ids.length);
+    const documents = await currentDocuments(deps, ids.slice(from, from + BATCH));
+    if (waiting.length >= BATCHES_WAITING) await settleOldest();
+    const task = finished(rebuilt.addDocuments([...documents.values()], { primaryKey: 'id' }));
+    // A refusal is thrown where it is waited for; until then it is nobody's.
+    task.catch(() => undefined);
+    waiting.push({ task, done: Math.min(from + BATCH, ids.length) });
   }
+  while (waiting.length > 0) await settleOldest();
   const existing = await client.getIndexes({ limit: 1000 });
   if (!existing.results.some((index) => index.uid === NOTES_INDEX)) {
     await finished(client.createIndex(NOTES_INDEX, { primaryKey: 'id' }));
