@@ -73,7 +73,7 @@ describe('files of every kind', () => {
     const bad: Record<string, unknown>[] = [
       { timeColumn: -1 },
       { temperatureColumn: 50 },
-      { delimiter: '|' },
+      { delimiter: '/' },
       { unit: 'R' },
       { headerLine: 0 },
       { timeFormat: '__proto__' },

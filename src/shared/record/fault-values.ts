@@ -2,7 +2,7 @@ import { FAULT_NUMBERS } from './record-words.ts';
 
 /** A leap to a number that faults are written as, degrees of any unit: more than a kiln goes in one step. */
 const LEAP = 60;
-/** At a record's very beginning zero is left at once for the air's temperature, which is less far. */
+/** From zeros at a record's very beginning it goes at once to the air's temperature, which is less far. */
 const FIRST_LEAP = 5;
 /** Larger than this no cell of a temperature is, whatever its unit. */
 const MOST = 1e5;
@@ -26,7 +26,8 @@ export function faultsIn(values: readonly (number | null)[]): Uint8Array {
     }
     if (FAULT_NUMBERS.has(value)) {
       const beside: number = before ?? next[i] ?? NaN;
-      const least = before === null && value === 0 ? FIRST_LEAP : LEAP;
+      const isWaiting = value === 0 && (values[i - 1] === 0 || values[i + 1] === 0);
+      const least = before === null && isWaiting ? FIRST_LEAP : LEAP;
       if (Math.abs(value - beside) > least) {
         faults[i] = 1;
         return;
