@@ -29,13 +29,14 @@ type Level = ClimbTraits['levels'][number];
 export function whyAlike(one: ClimbTraits, other: ClimbTraits, units: Units): string[] {
   const unit = units.temperature;
   const stall = levelsAlike(one, other, ['stall', 'just-short'], 'level off', unit);
+  const stay = stall ?? staysAlike(one, other, unit);
   return [
-    stall,
+    stay,
     sagsAlike(one, other, unit),
     levelsAlike(one, other, ['pause'], 'wait', unit),
-    // Where both stop short, how the top was come to has been said.
-    stall === null ? topsAlike(one, other, unit) : null,
-    holdsAlike(one, other, unit) ?? (stall === null ? staysAlike(one, other, unit) : null),
+    // Where both stay at one level, that says more than the top does.
+    stay === null ? topsAlike(one, other, unit) : null,
+    holdsAlike(one, other, unit),
     levelsAlike(one, other, ['warm-up'], 'warm up', unit),
     ratesAlike(one, other, unit),
     stall !== null && isRacing(one, other) ? null : shapesAlike(one, other),
