@@ -45,11 +45,11 @@ export function UnplacedPictures({ pictures, onPlace, numberOf, editable, keeper
         Uploaded, and seen by nobody but you until placed. They count among the {MAX_PICTURES} a
         note may have.
       </p>
-      <ul className="border-t border-line">
+      <ul className="max-w-measure border-t border-line">
         {pictures.map((picture) => (
           <li
             key={picture.name}
-            className="flex max-w-measure flex-wrap items-center gap-x-4 gap-y-1 border-b border-line py-1.5"
+            className="flex flex-wrap items-center gap-x-4 gap-y-1 border-b border-line py-1.5"
           >
             <img
               src={pictureUrl(picture.name, picture.widths[0] ?? picture.width)}
