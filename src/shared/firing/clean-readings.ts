@@ -61,7 +61,7 @@ export function cleanReadings(readings: readonly Reading[]): CleanReadings {
     from = to;
   }
   const repeatedCount = inside.length - count;
-  const kept = withoutWild(minutes.subarray(0, count), celsius.subarray(0, count));
+  const kept = rareOnly(minutes.subarray(0, count), celsius.subarray(0, count));
   return {
     minutes: kept.minutes,
     celsius: kept.celsius,
@@ -72,18 +72,34 @@ export function cleanReadings(readings: readonly Reading[]): CleanReadings {
   };
 }
 
+/** Wild readings are rare: where more than this share were, it is the record's own scatter. */
+const RARE = 0.03;
+const TRIES = 4;
+
+function rareOnly(minutes: Float64Array, celsius: Float64Array): Columns {
+  let least = Math.max(WILD_CELSIUS, 6 * neighbourNoise(minutes, celsius));
+  let kept = withoutWild({ minutes, celsius, least });
+  for (let tried = 1; tried < TRIES; tried += 1) {
+    if (minutes.length - kept.minutes.length <= RARE * minutes.length) break;
+    least *= 2;
+    kept = withoutWild({ minutes, celsius, least });
+  }
+  return kept;
+}
+
+interface Columns {
+  readonly minutes: Float64Array;
+  readonly celsius: Float64Array;
+}
+
 /**
  * Sets aside what a probe shows that is pulled out, torn off or touched: runs that jump away from the
  * course faster than a kiln can, and jump back to it as fast, and a first or last run that jumps so
  * and then stays put.
  */
-function withoutWild(
-  minutes: Float64Array,
-  celsius: Float64Array,
-): { minutes: Float64Array; celsius: Float64Array } {
+function withoutWild(record: Jumpy): Columns {
+  const { minutes, celsius } = record;
   const n = minutes.length;
-  const least = Math.max(WILD_CELSIUS, 6 * neighbourNoise(minutes, celsius));
-  const record = { minutes, celsius, least };
   const keptMinutes = new Float64Array(n);
   const keptCelsius = new Float64Array(n);
   let count = 0;
@@ -102,9 +118,7 @@ function withoutWild(
   return { minutes: keptMinutes.slice(0, count), celsius: keptCelsius.slice(0, count) };
 }
 
-interface Jumpy {
-  readonly minutes: Float64Array;
-  readonly celsius: Float64Array;
+interface Jumpy extends Columns {
   /** A change smaller than this is scatter, °C. */
   readonly least: number;
 }
