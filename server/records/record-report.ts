@@ -6,8 +6,8 @@ import { rangeChecks } from '#shared/note/checks/range-checks.ts';
 import { recordChecks } from '#shared/note/checks/record-checks.ts';
 import { emptyNoteFields } from '#shared/note/note-fields.ts';
 import { decodeRecordBytes } from '#shared/record/decode-record-bytes.ts';
-import { detectTable } from '#shared/record/detect-table.ts';
 import type { TemperatureUnit } from '#shared/record/parse-number.ts';
+import { readAnyRecord } from '#shared/record/read-any-record.ts';
 import { readTable } from '#shared/record/read-table.ts';
 import { RecordError } from '#shared/record/record-error.ts';
 import { METRIC_UNITS } from '#shared/units/units.ts';
@@ -34,15 +34,15 @@ export function recordReport(
 ): RecordReport | ReportError {
   try {
     const { unit, ...firing } = options;
-    const text = decodeRecordBytes(bytes);
-    const table = detectTable(text);
-    const choice = { ...table.choice, unit: unit ?? table.choice.unit };
-    const { readings, secondProbe, assumed } = readTable(text, choice);
+    const proposed = readAnyRecord(bytes);
+    const choice = { ...proposed.choice, unit: unit ?? proposed.choice.unit };
+    const { readings, secondProbe, assumed } =
+      choice.unit === proposed.unit ? proposed : readTable(decodeRecordBytes(bytes), choice);
     const reading = readFiring({ ...firing, readings, secondProbe });
     if (reading === null) {
       return failure(`Only ${String(readings.length)} readings: at least three are needed.`);
     }
-    const said = [...new Set([...table.assumed, ...assumed, ...reading.assumed])];
+    const said = [...new Set([...assumed, ...reading.assumed])];
     return reportOf(reading, firing, choice.unit, said);
   } catch (error) {
     if (!(error instanceof RecordError)) throw error;
