@@ -11,7 +11,8 @@ import { searchRoutes } from './routes-search.ts';
 import { serverRoutes } from './routes-server.ts';
 import { settingsRoutes } from './routes-settings.ts';
 import { taskRoutes } from './routes-tasks.ts';
-import { openStorage } from './storage.ts';
+import { DamagedStorageError } from './checked-lines.ts';
+import { openStorage, setAside } from './storage.ts';
 import { stopQueue, wakeQueue } from './task-queue.ts';
 
 export type EngineOptions = {
@@ -36,9 +37,24 @@ const ROUTES: readonly Route[] = [
   ...documentRoutes,
 ];
 
+/**
+ * What the folder holds; where that cannot be trusted, nothing: the files are set aside, and the
+ * application fills the empty index from the database.
+ */
+async function openOrBeginAnew(folder: string): ReturnType<typeof openStorage> {
+  try {
+    return await openStorage(folder);
+  } catch (error) {
+    if (!(error instanceof DamagedStorageError)) throw error;
+    console.error(`${error.message} It is set aside; the index has to be made anew.`);
+    await setAside(folder);
+    return openStorage(folder);
+  }
+}
+
 /** Starts the engine on what its folder holds, and resumes tasks that were not finished. */
 export async function startEngine(options: EngineOptions): Promise<RunningEngine> {
-  const { state, storage } = await openStorage(options.dataDir);
+  const { state, storage } = await openOrBeginAnew(options.dataDir);
   if (options.masterKey !== null && state.keys.size === 0) {
     for (const key of defaultKeys(new Date().toISOString())) {
       state.keys.set(key.uid, key);

@@ -1,9 +1,19 @@
-import { mkdir, open, readdir, readFile, rename, unlink, type FileHandle } from 'node:fs/promises';
+import {
+  mkdir,
+  open,
+  readdir,
+  readFile,
+  rename,
+  rm,
+  unlink,
+  type FileHandle,
+} from 'node:fs/promises';
 import { join } from 'node:path';
 import { applyTask } from './apply-task.ts';
 import { createEngineState, type EngineState } from './engine-state.ts';
 import type { ApiKey } from './keys.ts';
-import { readSnapshotLine, snapshotLines } from './snapshot.ts';
+import { createLineChain, DamagedStorageError, linesOf, type LineChain } from './checked-lines.ts';
+import { readSnapshot, snapshotLines } from './snapshot.ts';
 import type { Task, TaskPayload } from './tasks.ts';
 
 /** One line of the log. Replaying the lines in order gives the state again. */
@@ -47,18 +57,9 @@ async function readIfThere(path: string): Promise<Buffer | undefined> {
   }
 }
 
-/** Lines of a file without decoding it as one string, which V8 limits to half a gigabyte. */
-function* linesOf(content: Buffer): Iterable<{ text: string; end: number; complete: boolean }> {
-  let start = 0;
-  while (start < content.length) {
-    const newline = content.indexOf(10, start);
-    const end = newline < 0 ? content.length : newline;
-    yield { text: content.toString('utf8', start, end), end: end + 1, complete: newline >= 0 };
-    start = end + 1;
-  }
-}
-
-function parseEntry(text: string): LogEntry | undefined {
+function parseEntry(line: string, chain: LineChain): LogEntry | undefined {
+  const text = chain.read(line);
+  if (text === undefined) return undefined;
   try {
     const value: unknown = JSON.parse(text);
     // Only this program writes the log, one checked entry per line.
@@ -107,16 +108,21 @@ export function replayEntry(state: EngineState, entry: LogEntry): void {
   }
 }
 
-async function replayLog(state: EngineState, path: string, isNewest: boolean): Promise<number> {
+async function replayLog(
+  state: EngineState,
+  path: string,
+  isNewest: boolean,
+  chain: LineChain,
+): Promise<number> {
   const content = await readIfThere(path);
   if (content === undefined) return 0;
   let sound = 0;
-  for (const { text, end, complete } of linesOf(content)) {
-    const entry = complete ? parseEntry(text) : undefined;
+  for (const { line, end, complete } of linesOf(content)) {
+    const entry = complete ? parseEntry(line, chain) : undefined;
     if (entry === undefined) {
       // The last line may be torn: its append was never acknowledged. Damage before it is not that.
       if (isNewest && end >= content.length) break;
-      throw new Error(`The search log ${path} is damaged at byte ${sound}.`);
+      throw new DamagedStorageError(`The search log ${path} is damaged at byte ${sound}.`);
     }
     replayEntry(state, entry);
     sound = end;
@@ -133,12 +139,29 @@ async function replayLog(state: EngineState, path: string, isNewest: boolean): P
 async function loadSnapshot(state: EngineState, path: string): Promise<number> {
   const content = await readIfThere(path);
   if (content === undefined) return 0;
-  let generation = 0;
-  for (const { text } of linesOf(content)) generation = readSnapshotLine(state, text, generation);
-  return generation;
+  const found = readSnapshot(state, linesOf(content));
+  if (found === undefined) throw new DamagedStorageError(`The snapshot ${path} is damaged.`);
+  return found;
 }
 
-/** Opens the folder, reads the state kept there, and prepares to append to its log. */
+/** Where files that cannot be trusted are put, so that nobody has to start without them. */
+const SET_ASIDE = 'damaged';
+
+/** Moves all files of the folder into one beside them; what was moved before is overwritten. */
+export async function setAside(folder: string): Promise<void> {
+  const aside = join(folder, SET_ASIDE);
+  await rm(aside, { recursive: true, force: true });
+  await mkdir(aside, { recursive: true });
+  for (const name of await readdir(folder)) {
+    if (name !== SET_ASIDE) await rename(join(folder, name), join(aside, name));
+  }
+}
+
+/**
+ * Opens the folder, reads the state kept there, and prepares to append to its log.
+ *
+ * @throws DamagedStorageError where the files are not what was written
+ */
 export async function openStorage(
   folder: string,
   compactAfterBytes = COMPACT_AFTER_BYTES,
@@ -154,8 +177,10 @@ export async function openStorage(
     .sort((a, b) => a - b);
   let generation = generations.at(-1) ?? first;
   let logBytes = 0;
+  let chain = createLineChain();
   for (const each of generations.filter((candidate) => candidate >= first)) {
-    logBytes = await replayLog(state, join(folder, logName(each)), each === generation);
+    chain = createLineChain();
+    logBytes = await replayLog(state, join(folder, logName(each)), each === generation, chain);
   }
   for (const old of generations.filter((each) => each < first)) {
     await unlink(join(folder, logName(old)));
@@ -163,7 +188,7 @@ export async function openStorage(
 
   let log: FileHandle = await open(join(folder, logName(generation)), 'a');
   await syncFolder(folder);
-  let waiting: { line: string; resolve: () => void; reject: (error: Error) => void }[] = [];
+  let waiting: { text: string; resolve: () => void; reject: (error: Error) => void }[] = [];
   let writing: Promise<void> = Promise.resolve();
   let failure: Error | undefined;
   let snapshotBytes = 0;
@@ -175,7 +200,7 @@ export async function openStorage(
     if (batch.length === 0) return;
     try {
       if (failure) throw failure;
-      const bytes = Buffer.from(batch.map(({ line }) => line).join(''));
+      const bytes = Buffer.from(batch.map(({ text }) => chain.write(text)).join(''));
       await log.appendFile(bytes);
       await log.datasync();
       logBytes += bytes.length;
@@ -189,7 +214,7 @@ export async function openStorage(
 
   function append(entry: LogEntry): Promise<void> {
     return new Promise((resolve, reject) => {
-      waiting.push({ line: `${JSON.stringify(entry)}\n`, resolve, reject });
+      waiting.push({ text: JSON.stringify(entry), resolve, reject });
       if (waiting.length === 1) writing = writing.then(flush);
     });
   }
@@ -205,6 +230,7 @@ export async function openStorage(
     writing = writing.then(() => {
       previous = log;
       log = nextLog;
+      chain = createLineChain();
       generation = next;
       logBytes = 0;
     });

@@ -119,18 +119,46 @@ describe('restarting', () => {
     await third.close();
   });
 
-  it('refuses to start on a log that is damaged in the middle', async () => {
-    const first = await start();
-    await connect(first.url)
-      .index('notes')
-      .addDocuments([{ id: 1 }])
-      .waitTask();
-    await first.close();
-    const path = join(folder, 'log-0.jsonl');
-    const lines = (await readFile(path, 'utf8')).split('\n');
-    lines[1] = '{"kind":';
-    await writeFile(path, lines.join('\n'));
-    await expect(start()).rejects.toThrow(/damaged/);
+  it('sets aside files that are not what was written, and begins with an empty index', async () => {
+    const write = async (ids: number[]): Promise<void> => {
+      const engine = await start();
+      const documents = ids.map((id) => ({ id, text: 'a bowl' }));
+      await connect(engine.url).index('notes').addDocuments(documents).waitTask();
+      await engine.close();
+    };
+    const damages: [name: string, damage: (text: string) => string][] = [
+      // Still JSON, but another word: only the checksum tells.
+      ['log-0.jsonl', (text) => text.replace('a bowl', 'a dish')],
+      ['log-0.jsonl', (text) => text.replace(/^[^\n]*\n/, '')],
+      ['snapshot.jsonl', (text) => text.replace('a bowl', 'a dish')],
+      // The end is missing, whole lines of it.
+      ['snapshot.jsonl', (text) => text.split('\n').slice(0, -2).join('\n')],
+    ];
+    for (const [name, damage] of damages) {
+      await rm(folder, { recursive: true, force: true });
+      await write([1, 2]);
+      if (name === 'snapshot.jsonl') {
+        const { state, storage } = await openStorage(folder, 1);
+        await storage.compactIfLarge(state);
+        await storage.close();
+      }
+      const path = join(folder, name);
+      const sound = await readFile(path, 'utf8');
+      await writeFile(path, damage(sound));
+
+      const engine = await start();
+      const client = connect(engine.url);
+      expect([name, (await client.getIndexes()).results]).toEqual([name, []]);
+      expect(await readFile(join(folder, 'damaged', name), 'utf8')).toBe(damage(sound));
+      await client
+        .index('notes')
+        .addDocuments([{ id: 5 }])
+        .waitTask();
+      await engine.close();
+      const again = await start();
+      expect((await connect(again.url).index('notes').getStats()).numberOfDocuments).toBe(1);
+      await again.close();
+    }
   });
 
   it('gives the same state from a snapshot and the log after it as from the log alone', async () => {
