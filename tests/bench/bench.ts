@@ -2,19 +2,17 @@ import { parseArgs } from 'node:util';
 import express from 'express';
 import mysql from 'mysql2/promise';
 import sharp from 'sharp';
-import { readFiring } from '#shared/firing/read-firing.ts';
 import { loadDemo } from '../../seeds/development/load-demo.ts';
-import { FIRING_KINDS } from '../../seeds/simulation/firing-kinds.ts';
-import { simulateFiring } from '../../seeds/simulation/simulate-firing.ts';
 import type { Deps } from '../../server/deps.ts';
 import { encodePicture } from '../../server/pictures/encode-picture.ts';
 import { reindex } from '../../server/search/reindex.ts';
 import { benchEngine } from './bench-engine.ts';
 import { benchManyNotes } from './bench-many-notes.ts';
+import { benchReader } from './bench-reader.ts';
 import { benchSearch } from './bench-search.ts';
 import { get, listen, withStack } from './bench-stack.ts';
 import { benchLookAlikes } from './look-alikes.ts';
-import { milliseconds, percentile, print, throughput, timeEach } from './measure.ts';
+import { percentile, print, throughput, timeEach } from './measure.ts';
 
 /**
  * `npm run bench`: performance as ratios of one run, because absolute times belong to a machine.
@@ -64,16 +62,6 @@ async function benchNotePage(deps: Deps, port: number, databaseUrl: string): Pro
   await pool.end();
 }
 
-async function benchReading(): Promise<void> {
-  const { readings, marks } = simulateFiring({ ...FIRING_KINDS.plain, seed: 1 });
-  const step = Math.max(1, Math.floor(readings.length / 500));
-  const points = readings.filter((_reading, index) => index % step === 0).slice(0, 500);
-  const times = await timeEach(200, () =>
-    readFiring({ readings: points, marks, targetCelsius: 1000, fuel: 'propane' }),
-  );
-  print(`reading one note (${String(points.length)} points)`, milliseconds(times));
-}
-
 async function benchPictures(): Promise<void> {
   const photo = await sharp({
     create: {
@@ -106,14 +94,21 @@ async function benchPictures(): Promise<void> {
 
 /**
  * `npm run bench -- --documents 100000`: the engine alone. `-- --notes 10000`: the whole product
- * with so many notes, which takes a while. Without either, the usual run.
+ * with so many notes, which takes a while. `-- --reader`: the reading of records alone. Without
+ * any of them, the usual run.
  */
 const { values: options } = parseArgs({
-  options: { documents: { type: 'string' }, notes: { type: 'string' } },
+  options: {
+    documents: { type: 'string' },
+    notes: { type: 'string' },
+    reader: { type: 'boolean' },
+  },
 });
 
 if (options.documents !== undefined) {
   await benchEngine(Number(options.documents));
+} else if (options.reader === true) {
+  await benchReader();
 } else if (options.notes !== undefined) {
   const count = Number(options.notes);
   await withStack((stack) => benchManyNotes(stack, count));
@@ -124,7 +119,7 @@ if (options.documents !== undefined) {
     const port = await serve();
     await benchNotePage(deps, port, databaseUrl);
     await benchSearch(deps, port);
-    await benchReading();
+    await benchReader();
     await benchLookAlikes();
     await benchPictures();
   });

@@ -15,8 +15,14 @@ const FEWEST_MEANS = 8;
 const LONGEST_WINDOW = 60;
 /** Time constants tried, evenly in the logarithm. */
 const TRIED = 240;
-/** A meter that shows whole degrees: the fit is never trusted further than this, °C. */
+/** A meter that shows whole degrees: a reading is never trusted further than this, °C. */
 const LEAST_SD = 0.5;
+/** T∞, T0 and τ. */
+const PARAMETERS = 3;
+/** Fewer means than this, counted as if they were independent, cannot judge three numbers. */
+const FEWEST_EFFECTIVE = 4.5;
+/** How closely the ends of the interval are sought, °C. */
+const EDGE_STEP = 0.02;
 const FURTHEST = 400;
 
 /**
@@ -44,7 +50,13 @@ export function levellingOff(
   const spanned = (means.x[means.x.length - 1] ?? 0) - (means.x[0] ?? 0);
   if (means.x.length < FEWEST_MEANS) return null;
   if (spanned < FORECAST_FEWEST_MINUTES - FORECAST_MEAN_MINUTES - 1e-6) return null;
-  return forecast(means, aimCelsius, now - since);
+  const perMean = Math.max(1, readingsIn(minutes, since) / means.x.length);
+  return forecast(means, perMean, aimCelsius, now - since);
+}
+
+function readingsIn(minutes: Float64Array, since: number): number {
+  const from = minutes.findIndex((minute) => minute >= since - 1e-9);
+  return minutes.length - from;
 }
 
 interface Means {
@@ -91,7 +103,12 @@ interface Fit {
   readonly fall: number;
 }
 
-function forecast(means: Means, aim: number | null, nowX: number): LevellingOff | null {
+function forecast(
+  means: Means,
+  perMean: number,
+  aim: number | null,
+  nowX: number,
+): LevellingOff | null {
   const n = means.x.length;
   const level = means.y.reduce((sum, value) => sum + value, 0) / n;
   const y = means.y.map((value) => value - level);
@@ -119,10 +136,10 @@ function forecast(means: Means, aim: number | null, nowX: number): LevellingOff 
   if (roughEnd === null) return null;
   const end = lowestNear(roughEnd, (value) => fitAt(value).rss);
   const best = fitAt(end);
-  const sd2 = Math.max(best.rss / Math.max(1, n - 3), LEAST_SD ** 2);
   const rho = lagOne(means.x.map((x, i) => (y[i] ?? 0) - end + best.fall * Math.exp(-best.k * x)));
-  const effective = (n * (1 - rho)) / (1 + rho);
-  const allowed = best.rss + studentSquared(effective - 3) * sd2 * (n / effective);
+  const effective = Math.max(FEWEST_EFFECTIVE, (n * (1 - rho)) / (1 + rho));
+  const sd2 = Math.max(best.rss / (n * (1 - PARAMETERS / effective)), LEAST_SD ** 2 / perMean);
+  const allowed = best.rss + studentSquared(effective - PARAMETERS) * sd2 * (n / effective);
   const high = edge(end, FURTHEST, (value) => fitAt(value).rss <= allowed);
   const low = edge(end, -FURTHEST, (value) => fitAt(value).rss <= allowed);
   if (high === null || low === null || high - low >= FORECAST_WIDEST) return null;
@@ -198,7 +215,7 @@ function edge(from: number, reach: number, isAllowed: (value: number) => boolean
   let inside = 0;
   let outside = reach;
   if (isAllowed(from + reach)) return null;
-  while (Math.abs(outside - inside) > 0.25) {
+  while (Math.abs(outside - inside) > EDGE_STEP) {
     const middle = (inside + outside) / 2;
     if (isAllowed(from + middle)) inside = middle;
     else outside = middle;
@@ -211,7 +228,10 @@ function minutesToReach(fit: Fit, end: number, aim: number | null, nowX: number)
   return Math.log(fit.fall / (end - aim)) / fit.k - nowX;
 }
 
-/** Lag-1 correlation of residuals, between 0 and 0.95. */
+/**
+ * Lag-1 correlation of residuals, between 0 and 0.95. From n residuals of a fitted curve it comes out
+ * too low by about (1 + 4ρ) ÷ n (Marriott and Pope, Biometrika 41, 390, 1954): put back here.
+ */
 function lagOne(residuals: readonly number[]): number {
   let sum = 0;
   let power = 0;
@@ -219,7 +239,9 @@ function lagOne(residuals: readonly number[]): number {
     power += (residuals[i] ?? 0) ** 2;
     if (i > 0) sum += (residuals[i] ?? 0) * (residuals[i - 1] ?? 0);
   }
-  return power > 0 ? Math.min(0.95, Math.max(0, sum / power)) : 0;
+  if (!(power > 0)) return 0;
+  const rho = sum / power;
+  return Math.min(0.95, Math.max(0, rho + (1 + 4 * rho) / residuals.length));
 }
 
 /** Square of Student's 97.5 % quantile, by its expansion about the normal one (from 2 degrees up, within 2 %). */

@@ -189,19 +189,48 @@ function isTooSparse(record: JudgedRecord, one: { from: number; to: number }): b
   return inside.length < 4;
 }
 
-export function table(judgement: Judgement): string[] {
-  const q = (values: readonly number[], p: number) => (quantile(values, p) ?? NaN).toFixed(2);
+/** The judgement as lines of a table. */
+export function judgedLines(
+  judgement: Judgement,
+): { readonly what: string; readonly value: string; readonly aim: string }[] {
   const { stalls, sags } = judgement;
-  const counts = (score: Score) =>
-    `${score.found} found, ${score.missed} missed, ${score.invented} invented`;
+  const number = (values: readonly number[], share: number) =>
+    (quantile(values, share) ?? Number.NaN).toFixed(2);
+  const percent = (values: readonly number[], share: number) =>
+    (100 * (quantile(values, share) ?? Number.NaN)).toFixed(1);
+  const scored = (score: Score) =>
+    `F1 ${f1(score).toFixed(3)}: ${String(score.found)} found, ${String(score.missed)} missed, ${String(score.invented)} invented`;
   return [
-    `records ${judgement.records}`,
-    `stall F1 ${f1(stalls).toFixed(3)} (${counts(stalls)})`,
-    `sag F1 ${f1(sags).toFixed(3)} (${counts(sags)})`,
-    `stall level, median error ${q(judgement.stallLevelErrors, 0.5)} °C`,
-    `stall start, median error ${q(judgement.stallStartErrors, 0.5)} min, p90 ${q(judgement.stallStartErrors, 0.9)}`,
-    `time to temperature, p90 ${q(judgement.timeErrors, 0.9)} min`,
-    `hold, median error ${q(judgement.holdErrors, 0.5)} min, p90 ${q(judgement.holdErrors, 0.9)}`,
-    `crossing, median error ${(100 * (quantile(judgement.crossingErrors, 0.5) ?? NaN)).toFixed(1)} %, p90 ${q(judgement.crossingErrors, 0.9)}`,
+    {
+      what: `stalls in ${String(judgement.records)} records`,
+      value: scored(stalls),
+      aim: 'aim ≥ 0.98',
+    },
+    { what: 'sags', value: scored(sags), aim: 'aim ≥ 0.97' },
+    {
+      what: 'level of a stall, error',
+      value: `median ${number(judgement.stallLevelErrors, 0.5)} °C`,
+      aim: 'aim ≤ 2 °C',
+    },
+    {
+      what: 'start of a stall, error',
+      value: `median ${number(judgement.stallStartErrors, 0.5)} min, p90 ${number(judgement.stallStartErrors, 0.9)} min`,
+      aim: 'aim ≤ 2 min',
+    },
+    {
+      what: 'time to temperature, error',
+      value: `p90 ${number(judgement.timeErrors, 0.9)} min`,
+      aim: 'aim ≤ 1 min',
+    },
+    {
+      what: 'hold, error',
+      value: `median ${number(judgement.holdErrors, 0.5)} min, p90 ${number(judgement.holdErrors, 0.9)} min`,
+      aim: 'aim ≤ 0.5 min',
+    },
+    {
+      what: 'quartz crossing, error',
+      value: `median ${percent(judgement.crossingErrors, 0.5)} %, p90 ${percent(judgement.crossingErrors, 0.9)} %`,
+      aim: 'aim ≤ 8 %',
+    },
   ];
 }

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { levellingOff } from '#shared/firing/levelling-off.ts';
 import type { Mark } from '#shared/firing/types.ts';
+import { levellingOffCoverage } from '../../../support/judged/levelling-off-coverage.ts';
 import { normalNumber, seededRandom } from '../../../../seeds/simulation/seeded-random.ts';
 
 const forecast = (
@@ -42,6 +43,25 @@ describe('the levelling-off', () => {
     expect(said).toBeGreaterThan(150);
     expect(inside / said).toBeGreaterThan(0.88);
   });
+
+  it.each([1, 10])(
+    'the interval allows for wind that lasts a minute, at one reading every %i s',
+    (secondsBetween) => {
+      const { told, share } = levellingOffCoverage(
+        {
+          secondsBetween,
+          windCelsius: 2,
+          noiseCelsius: 1.5,
+          timeConstantMinutes: 8,
+          stillToClimb: 150,
+        },
+        300,
+      );
+      expect(told).toBeGreaterThan(250);
+      expect(share).toBeGreaterThan(0.89);
+      expect(share).toBeLessThan(0.98);
+    },
+  );
 
   it('says when the aim will be reached', () => {
     const found = forecast(1100, 15, 30, 0.5)!;
