@@ -28,8 +28,16 @@ export interface QuantityItem extends Place {
 export type Quantity =
   /** A number with nothing to say what it counts. */
   | { readonly type: 'bare'; readonly value: number }
-  /** A number that is a temperature; `unit` null when only "degrees" was said. */
-  | { readonly type: 'heat'; readonly value: number; readonly unit: 'C' | 'F' | 'K' | null }
+  /**
+   * A number that is a temperature; `unit` null when only "degrees" was said. `hundreds` is "the
+   * 700s": from 700 to 799.
+   */
+  | {
+      readonly type: 'heat';
+      readonly value: number;
+      readonly unit: 'C' | 'F' | 'K' | null;
+      readonly hundreds?: true;
+    }
   | { readonly type: 'cone'; readonly cone: string }
   | { readonly type: 'minutes'; readonly minutes: number; op?: MinutesOp; of?: MinutesOf }
   | { readonly type: 'rate'; readonly ratePerMin: number }

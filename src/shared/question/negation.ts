@@ -21,9 +21,17 @@ export interface Negated {
 }
 
 function isKept(match: Match): boolean {
-  return match.means.some(
-    (meaning) =>
-      meaning.startsWith('form:') || meaning.startsWith('glaze:') || meaning.startsWith('place:'),
+  const of = (kind: string): boolean => match.means.some((meaning) => meaning.startsWith(kind));
+  return of('form:') || of('glaze:') || (of('place:') && !of('cause:'));
+}
+
+/** "The temperature did not drop": the negation stands in a gap of what the climb did. */
+function isRuledOutInside(match: Match, negation: number): boolean {
+  const own = [...match.taken, ...match.seen];
+  return (
+    !own.includes(negation) &&
+    own.some((index) => index < negation) &&
+    match.means.includes('trouble:sag')
   );
 }
 
@@ -45,7 +53,8 @@ export function findNegated(items: readonly Item[], matches: readonly Match[]): 
     if (item === undefined || item.kind === 'stop') {
       negation = null;
     } else if (match !== undefined) {
-      if (negation === null || firstItem(match) < negation) continue;
+      if (negation === null || (firstItem(match) < negation && !isRuledOutInside(match, negation)))
+        continue;
       if (isKept(match)) continue;
       negated.add(match);
       used.add(negation);

@@ -44,11 +44,15 @@ const classes = new Map<string, readonly string[]>(
   Object.entries(WORD_CLASSES).map(([name, words]) => [name, words.split(' ')]),
 );
 
+/** Ware and cylinders are needed by a phrase, and still say what piece or change is meant. */
+const SHARED_CLASSES: readonly string[] = ['@ware', '@sticky', '@tank'];
+
 function parseElement(source: string): Element {
   if (source === '..') return { kind: 'gap' };
   const optional = source.endsWith('?');
   const bare = source.replace(/[()?]/g, '');
-  const takes = !source.startsWith('(');
+  const shared = SHARED_CLASSES.some((name) => bare.includes(name));
+  const takes = !source.startsWith('(') && !shared;
   if (bare === '#') return { kind: 'temperature', takes: false, optional };
   if (bare === '#min') return { kind: 'minutes', takes: false, optional };
   if (bare === '#step') return { kind: 'step', takes: false, optional };

@@ -18,6 +18,11 @@ type Tokens = readonly Token[];
 const MAX_CONE = 14;
 const MAX_CONE_BELOW_ZERO = 22;
 const CONE_MARKS: ReadonlySet<string> = new Set(['cone', 'cones', '^']);
+/** Between a step verb and its number: "slid back 40 degrees". */
+const STEP_LEADS: ReadonlySet<string> = new Set(
+  'back down off away about around another nearly almost roughly some'.split(' '),
+);
+const HUNDREDS_LEADS: ReadonlySet<string> = new Set('the low mid middle high upper'.split(' '));
 const STOPS: ReadonlySet<string> = new Set(['.', ',', ';', ':', '!', '?', '(', ')']);
 
 function textAt(tokens: Tokens, index: number): string {
@@ -97,11 +102,24 @@ function heatAfter(tokens: Tokens, start: number, number: TypedNumber): Found | 
       (before[0] === 'of' && units.DIFFERENCE_WORDS.has(before[1] ?? '')) ||
       (before[0] === 'by' && ['differ', 'differs', 'differed'].includes(before[1] ?? ''));
     if (differs) return { quantity: { type: 'difference', diffC: roundTo(inC) }, next: at };
-    if (units.OFFSET_WORDS.has(near[0] ?? '') || units.STEP_VERBS.has(before[0] ?? '')) {
+    const verb = STEP_LEADS.has(before[0] ?? '') ? before[1] : before[0];
+    if (units.OFFSET_WORDS.has(near[0] ?? '') || units.STEP_VERBS.has(verb ?? '')) {
       return { quantity: byPlaces(tokens, before, inC), next: at };
     }
   }
   return { quantity: { type: 'heat', value: number.value, unit: named ?? null }, next: at };
+}
+
+/** "The 700s", "the high 1200s"; "300s" by itself is seconds. */
+function hundredsAfter(tokens: Tokens, start: number, number: TypedNumber): Found | null {
+  const plural = tokens[number.next];
+  const named = HUNDREDS_LEADS.has(textAt(tokens, start - 1));
+  const round = number.value % 100 === 0 && number.value >= 300 && number.value <= 2300;
+  if (plural?.text !== 's' || !plural.glued || !named || !round) return null;
+  return {
+    quantity: { type: 'heat', value: number.value, unit: null, hundreds: true },
+    next: number.next + 1,
+  };
 }
 
 /** "hotter than bottom BY 100 degrees" is a difference; "dropped BY 100 degrees" is a step. */
@@ -166,6 +184,7 @@ function quantityAt(tokens: Tokens, index: number): (Found & { text: string }) |
   const number = numberAt(tokens, index);
   if (number === null) return null;
   const found =
+    hundredsAfter(tokens, index, number) ??
     heatAfter(tokens, index, number) ??
     sizeAfter(tokens, number) ??
     otherAfter(tokens, index, number);

@@ -111,7 +111,17 @@ export function readQuestion(text: string, options: ReadOptions = {}): QuestionR
   ) {
     trouble.push('slow-climb');
   }
-  const causes: Cause[] = unique(meaningsIn(said, 'cause'));
+  // So many degrees between two places, and nothing else said, is a kiln that heats unevenly.
+  if (trouble.length === 0 && cracks.length === 0 && quantities(items, 'difference').length > 0) {
+    trouble.push('uneven-heat');
+  }
+  const causes: Cause[] = unique(
+    said.flatMap((match) =>
+      match.means.includes('fast') && (trouble.length > 0 || cracks.length > 0)
+        ? (['fast-heating'] as const)
+        : meaningsIn([match], 'cause'),
+    ),
+  );
   if (trouble.length === 0) {
     trouble.push(
       ...unique(
@@ -149,6 +159,10 @@ export function readQuestion(text: string, options: ReadOptions = {}): QuestionR
     cracks.length > 0 && means.every((meaning) => meaning.startsWith('place:')) ? taken : [],
   );
   placeItems.forEach((index) => used.add(index));
+  // The cylinder a frost is on says nothing more to a search by text.
+  for (const { means, seen } of said) {
+    if (means.includes('trouble:tank-chill')) seen.forEach((index) => used.add(index));
+  }
   for (const value of trouble) {
     const own = itemsSaying(said, `trouble:${value}`);
     const isCrackKind = value === 'crack-in-firing' || value === 'crack-after-draw';

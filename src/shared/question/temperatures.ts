@@ -54,7 +54,11 @@ const OUTDOORS: ReadonlySet<string> = new Set(
 );
 const JOINTS: ReadonlySet<string> = new Set(['-', 'to', '/', 'and', 'through', 'until', 'till']);
 
-type Candidate = { readonly value: number; readonly unit: 'C' | 'F' | 'K' | null };
+type Candidate = {
+  readonly value: number;
+  readonly unit: 'C' | 'F' | 'K' | null;
+  readonly hundreds?: true;
+};
 
 function wordAt(items: readonly Item[], index: number): string {
   const item = items[index];
@@ -70,7 +74,9 @@ function candidateAt(items: readonly Item[], index: number, burst: boolean): Can
     const near = [-2, -1, 1, 2].map((offset) => wordAt(items, index + offset));
     const weather =
       quantity.value <= MAX_WEATHER_CELSIUS && near.some((word) => OUTDOORS.has(word));
-    return weather ? null : { value: quantity.value, unit: quantity.unit };
+    if (weather) return null;
+    const { value, unit, hundreds } = quantity;
+    return { value, unit, ...(hundreds === undefined ? {} : { hundreds }) };
   }
   if (quantity.type !== 'bare') return null;
   const { value } = quantity;
@@ -78,6 +84,18 @@ function candidateAt(items: readonly Item[], index: number, burst: boolean): Can
   if (value >= BARE_MIN && value <= BARE_MAX_F) return { value, unit: null };
   const low = burst && value >= BURST_MIN && HAPPENED.has(wordAt(items, index - 1));
   return low ? { value, unit: null } : null;
+}
+
+/** "Between 200 and 400", "from 150 to 600": a low bare number is a temperature if its other end is. */
+function lowEndAt(items: readonly Item[], index: number): Candidate | null {
+  const item = items[index];
+  if (item?.kind !== 'quantity' || item.quantity.type !== 'bare') return null;
+  const { value } = item.quantity;
+  if (value < BURST_MIN || !['between', 'from'].includes(wordAt(items, index - 1))) return null;
+  const other = candidateAt(items, index + 2, false);
+  return JOINTS.has(wordAt(items, index + 1)) && other !== null
+    ? { value, unit: other.unit }
+    : null;
 }
 
 function unitOf({ value, unit }: Candidate, preferred: 'C' | 'F'): 'C' | 'F' | 'K' {
@@ -170,13 +188,15 @@ export function readTemperatures(
   for (let index = 0; index < items.length; index += 1) {
     const item = items[index];
     if (item === undefined) break;
-    const candidate = candidateAt(items, index, burst);
+    const candidate = candidateAt(items, index, burst) ?? lowEndAt(items, index);
     if (candidate === null || item.kind !== 'quantity') {
       result.push(item);
       continue;
     }
     const { words, directionItem } = leadsTo(items, index);
-    const range = rangeEnd(items, index, burst, words);
+    const range = candidate.hundreds
+      ? { end: { value: candidate.value + 99, unit: candidate.unit }, at: index }
+      : rangeEnd(items, index, burst, words);
     const unit = unitOf(
       candidate.unit === null && range !== null
         ? { ...candidate, unit: range.end.unit }

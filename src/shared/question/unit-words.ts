@@ -77,7 +77,8 @@ export const OFFSET_WORDS: ReadonlySet<string> = new Set(
 /** Before "N degrees": the number is a step, "dropped 50 degrees", "by 60 degrees". */
 export const STEP_VERBS: ReadonlySet<string> = new Set(
   (
-    'by drop drops dropped dropping fall falls fell falling lose loses lost losing gain gains ' +
+    'by drop drops dropped dropping slid slide slides sliding slipping dips dipped sank sinks dip ' +
+    'fall falls fell falling lose loses lost losing gain gains ' +
     'gained gaining rise rises rose rising jump jumps jumped climb climbs climbed climbing ' +
     'within another extra slipped slips overshot overshoot last'
   ).split(' '),

@@ -62,6 +62,9 @@ export const CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
       'burner .. angle|angled|tangent|tangential|sideways|swirl',
       'angle burner',
       'swirl|sweep|sweeping flame|burner',
+      'aim|point|turn|direct|tilt|set burner .. along|round|around|sideways|tangentially|tangent',
+      'burner aim|point|turn|direct|tilt .. along|round|around|sideways|tangentially|tangent',
+      'tangentially',
       'burner sweep|swirl',
       'burner round|around wall',
       'tangential',
@@ -96,7 +99,7 @@ export const CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
   {
     means: ['change:cylinder-bigger'],
     says: [
-      '@bigger cylinder|tank|bottle',
+      '@bigger (gas|propane|butane)? cylinder|tank|bottle',
       'second|two|another|twin cylinder|tank|cylinders|tanks',
       'manifold',
     ],
@@ -125,6 +128,8 @@ export const CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
     says: [
       'seal|plug|fill|stop leak|leaks|gap|gaps|crack|cracks|lid|door',
       'seal up? lid|door|gaps|leaks',
+      'seal|plug|fill|stop|block lid|door|hat gap|gaps|leak|leaks|joint',
+      'seal|plug|fill|stop|block gap|gaps|leak|leaks around|round|at|in|under|by lid|door|hat|kiln',
     ],
   },
   {

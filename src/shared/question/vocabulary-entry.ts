@@ -20,6 +20,8 @@ export type Meaning =
   /** Where a crack happened. */
   | 'place:firing'
   | 'place:after'
+  /** A fast climb: a suspected cause beside a trouble, and otherwise what is wished for. */
+  | 'fast'
   /** "took N hours": slow when N is an hour or more. */
   | 'took'
   /** The minutes are minutes of a hold. */

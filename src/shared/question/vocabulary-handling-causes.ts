@@ -129,6 +129,7 @@ export const HANDLING_CAUSE_VOCABULARY: readonly VocabularyEntry[] = [
     says: [
       'thick|heavy|thickly glaze|coat|coats|layer|glazed|application',
       'glaze .. thick|thickly|heavy|heavily',
+      'where|when .. thick|thicker|thickest|thickly',
       'glaze|apply|applied|brush|sprayed|dipped too? thick|thickly|heavily',
       'too many|much coat|coats|layers|glaze',
       'too much glaze',

@@ -18,19 +18,16 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
   {
     means: ['change:ware-dried'],
     says: [
-      'dry|drying pot|pots|ware|plate|plates|piece|pieces|bowl first?',
-      'dry out pot|pots|ware',
+      'dry @ware first?',
+      'dry out @ware',
+      'dry|drying bisque|biscuit',
+      'dry|drying .. in|on oven|radiator|stove|airing',
       'pots dry first',
     ],
   },
   {
     means: ['change:ware-preheated'],
-    says: [
-      'preheat',
-      'preheat pot|pots|ware|plate|plates',
-      'warm pot|pots|ware|plate|plates first|on',
-      'pre heat|warm',
-    ],
+    says: ['preheat', 'preheat @ware', 'warm @ware first|on', 'pre heat|warm'],
   },
   {
     means: ['change:ware-off-the-shelf'],
@@ -73,12 +70,18 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
     says: [
       'fire|go|take|aim higher|hotter',
       'higher target|temperature|temp|peak',
+      'raise|up|increase target|temperature|temp|peak',
       'hotter firing',
     ],
   },
   {
     means: ['change:target-down'],
-    says: ['fire|go|aim lower|cooler', 'lower target|temperature|temp|peak', 'cooler firing'],
+    says: [
+      'fire|go|aim lower|cooler',
+      'lower|reduce|drop target|peak',
+      'lower temperature|temp',
+      'cooler firing',
+    ],
   },
   {
     means: ['change:hold-longer'],
@@ -127,7 +130,8 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
     says: [
       'other|different combustible|material',
       '@combustible instead of? @combustible',
-      'switch|change to @combustible',
+      'switch|change|swap|move to (@combustible)',
+      'switch|change|swap from? (@combustible) to|for (@combustible)',
     ],
   },
   {
@@ -155,7 +159,7 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
   {
     means: ['change:covered-sooner'],
     says: [
-      'cover sooner|faster|quicker|quickly',
+      'cover @ware? sooner|faster|quicker|quickly|earlier',
       'quicker|faster to|into @bin',
       'faster|quicker transfer',
       'lid on faster|sooner',
@@ -184,7 +188,7 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
     means: ['change:not-quenched'],
     says: [
       'without|not|no|never quench|quenching',
-      'leave to? cool slowly|itself|alone',
+      'leave|let to? cool slow|slowly|slower|itself|alone|naturally',
       'instead of quench',
     ],
   },

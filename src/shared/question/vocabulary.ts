@@ -1,5 +1,6 @@
 import { CAUSE_VOCABULARY } from './vocabulary-causes.ts';
 import { CHANGE_VOCABULARY } from './vocabulary-changes.ts';
+import { CRACK_VOCABULARY } from './vocabulary-cracks.ts';
 import type { VocabularyEntry } from './vocabulary-entry.ts';
 import { FLAME_VOCABULARY } from './vocabulary-flame.ts';
 import { HANDLING_CAUSE_VOCABULARY } from './vocabulary-handling-causes.ts';
@@ -17,6 +18,7 @@ export const VOCABULARY: readonly VocabularyEntry[] = [
   ...NOT_MEANT,
   ...HEAT_VOCABULARY,
   ...FLAME_VOCABULARY,
+  ...CRACK_VOCABULARY,
   ...WARE_VOCABULARY,
   ...SUBJECT_VOCABULARY,
   ...CAUSE_VOCABULARY,

@@ -14,6 +14,8 @@ export interface ChosenTemperature extends TemperatureWindow {
 }
 
 const DIRECTIONS: ReadonlySet<string> = new Set('past above over beyond up through'.split(' '));
+/** "Fine until 850, then stalls": the trouble is there, and not below. */
+const UNTIL: ReadonlySet<string> = new Set(['until', 'till', 'til']);
 /** Troubles whose phrases take the direction for themselves. */
 const DIRECTED: ReadonlySet<string> = new Set([
   'trouble:stall',
@@ -139,7 +141,10 @@ export function chooseTemperature(
     if (far < least) [chosen, least] = [other, far];
   }
   const { heat, index } = chosen;
-  const point = !heat.bound.startsWith('just') && directedByPhrase(items, index, matches);
+  const until = heat.directionItem !== null && UNTIL.has(textOf(items, heat.directionItem));
+  const point =
+    !heat.bound.startsWith('just') &&
+    (directedByPhrase(items, index, matches) || (until && troubles.length > 0));
   return {
     ...windowOf(heat, point),
     tempUnit: heat.unit,

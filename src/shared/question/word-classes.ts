@@ -2,7 +2,7 @@
 export const WORD_CLASSES: Readonly<Record<string, string>> = {
   /** Cannot, does not, refuses to. */
   cannot:
-    'wont cant cannot not isnt arent wasnt werent never hasnt havent hadnt didnt doesnt dont couldnt wouldnt refuse fail struggle unable barely hardly aint',
+    'wont cant cannot not isnt arent wasnt werent never hasnt havent hadnt didnt doesnt dont couldnt wouldnt refuse fail struggle unable barely hardly aint reluctant unwilling hesitate decline loath',
   climb: 'get go climb rise move push pass come make creep crawl nudge inch break heat fire',
   past: 'past above over beyond up further farther higher hotter through',
   heat: 'temperature temp temps temperatures heat kiln reading needle display digits',
@@ -22,7 +22,7 @@ export const WORD_CLASSES: Readonly<Record<string, string>> = {
   bigger: 'bigger larger big large',
   smaller: 'smaller small',
   combustible:
-    'sawdust newspaper paper straw hay leaf leaves shavings needles combustible combustibles',
+    'sawdust newspaper paper straw hay leaf leaves shavings needles combustible combustibles chippings cardboard woodchips',
 };
 
 /** Small words that may stand between the words of a phrase and carry nothing. */
@@ -50,6 +50,7 @@ export const NEGATION_CARRIES: ReadonlySet<string> = new Set([
   ...'or nor any more single sign signs trace problem problems trouble issue issues with from seen see want need happen'.split(
     ' ',
   ),
+  ...'use used using put add added try tried need'.split(' '),
   ...'one ones more another actual actually get getting about at in on for ware pot pots piece pieces glaze kiln'.split(
     ' ',
   ),

@@ -161,6 +161,7 @@ const QUESTIONS: readonly (readonly [question: string, expected: Expected])[] = 
   [
     'vase blew up at 250 degrees',
     {
+      form: 'pot',
       trouble: ['crack-in-firing'],
       tempC: 250,
       toleranceC: 20,
@@ -197,7 +198,7 @@ const QUESTIONS: readonly (readonly [question: string, expected: Expected])[] = 
     'lid stuck after firing to 1000',
     { trouble: ['stuck-to-shelf'], tempC: 1000, toleranceC: 20, tempUnit: 'guessed' },
   ],
-  ['dropped a hot bowl', { trouble: ['broken-in-handling'] }],
+  ['dropped a hot bowl', { trouble: ['broken-in-handling'], form: 'bowl' }],
   ['knob broke off lid', { trouble: ['broken-in-handling'] }],
   ['market stall', {}],
   ['stall at the craft fair', {}],
