@@ -69,11 +69,12 @@ export async function troubleCounts(
 
 /** When anything that figures read last changed, as a short text; equal texts mean equal figures. */
 export async function figuresVersion(db: Knex): Promise<string> {
-  const row = await db('published_firings')
+  // One by one each is read from a small index; together they would read every row.
+  const row = await db
     .select<{ n: number; latest: number | null; last: Date | null }[]>(
-      db.raw('COUNT(*) AS n'),
-      db.raw('SUM(published_firings.revision_id) AS latest'),
-      db.raw('MAX(published_firings.published_at) AS last'),
+      db.raw('(SELECT COUNT(*) FROM published_firings) AS n'),
+      db.raw('(SELECT SUM(published_firings.revision_id) FROM published_firings) AS latest'),
+      db.raw('(SELECT MAX(published_firings.published_at) FROM published_firings) AS last'),
     )
     .first();
   // Disputes keep their rows, and each change raises a version: their sum never repeats.
