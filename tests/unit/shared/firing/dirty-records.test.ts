@@ -313,10 +313,11 @@ describe('speed', () => {
     }
     return best;
   };
-  it('500 readings take at most 3 ms, 50,000 at most 150 ms, 200,000 at most 5 times that', () => {
-    expect(milliseconds(long(500), 60)).toBeLessThan(3);
-    const fifty = milliseconds(long(50_000), 5);
-    expect(fifty).toBeLessThan(150);
-    expect(milliseconds(long(200_000), 3)).toBeLessThan(Math.max(150, 6 * fifty));
+  // How long it takes is for the bench to say; here, that it does not grow faster than the record.
+  it('four times as many readings take at most six times as long', () => {
+    milliseconds(long(500), 40);
+    const fifty = milliseconds(long(50_000), 6);
+    expect(milliseconds(long(200_000), 4)).toBeLessThan(6 * fifty);
+    expect(fifty).toBeLessThan(100 * milliseconds(long(500), 20));
   });
 });
