@@ -1,7 +1,7 @@
 import type { MultiSearchQuery } from 'meilisearch';
 import { bothFilters, filterText } from '../../search/filters.ts';
 import { NOTES_INDEX, type NoteDocument } from '../../search/note-document.ts';
-import type { FindFacet, FindQuery } from '#shared/api/search.ts';
+import type { FindFacet, FindQuery, Histogram } from '#shared/api/search.ts';
 import { FIND_FACETS } from '#shared/api/search.ts';
 import type { OrderableHit } from '#shared/question/order-hits.ts';
 import type { QuestionReading } from '#shared/question/reading-types.ts';
@@ -12,6 +12,15 @@ import {
   type TierRequest,
 } from '#shared/question/search-request.ts';
 import type { Config } from '../config.ts';
+import {
+  bothTexts,
+  histogramsOf,
+  MEASURED_FIELDS,
+  MOST_MEASURED,
+  rangesText,
+  type ChosenRanges,
+  type Measured,
+} from './measured-ranges.ts';
 import { searchingClient } from './search-client.ts';
 
 /** Hits asked for per query: pages are made from the joined list. */
@@ -39,6 +48,7 @@ export interface EngineHit extends OrderableHit {
 export interface EngineAnswer {
   readonly hits: EngineHit[];
   readonly facets: Record<string, { value: string; count: number }[]>;
+  readonly histograms: Histogram[];
 }
 
 export type ChosenFacets = Partial<Record<FindFacet, string[]>>;
@@ -53,7 +63,7 @@ export function chosenFacets(query: FindQuery): ChosenFacets {
   return chosen;
 }
 
-function facetFilter(chosen: ChosenFacets, without?: FindFacet): Filter | null {
+export function facetFilter(chosen: ChosenFacets, without?: FindFacet): Filter | null {
   const of = FIND_FACETS.flatMap((facet): Filter[] => {
     const values = chosen[facet];
     return values && facet !== without ? [{ kind: 'in', field: facet, values }] : [];
@@ -76,10 +86,13 @@ interface Asked extends Pick<EngineHit, 'tier' | 'q' | 'strategy'> {
   readonly query: MultiSearchQuery;
 }
 
-function queriesOf(request: TierRequest | null, ticked: Filter | null): Asked[] {
+function queriesOf(request: TierRequest | null, narrowed: string): Asked[] {
   if (!request) return [];
   const { tier, strategy } = request;
-  return request.texts.map((q, foundBy) => ({
+  const { first } = request;
+  const filters = [...(first ? [bothFilters(request.filter, first)] : []), request.filter];
+  const steps = filters.flatMap((filter) => request.texts.map((q) => ({ filter, q })));
+  return steps.map(({ filter, q }, foundBy) => ({
     tier,
     q,
     strategy,
@@ -87,7 +100,7 @@ function queriesOf(request: TierRequest | null, ticked: Filter | null): Asked[] 
     query: {
       indexUid: NOTES_INDEX,
       q,
-      filter: filterText(bothFilters(request.filter, ticked)),
+      filter: bothTexts(filterText(filter), narrowed),
       matchingStrategy: strategy,
       limit: MOST_PER_QUERY,
       attributesToRetrieve: [...FIELDS_TO_ORDER_BY],
@@ -112,21 +125,32 @@ export async function searchEngine(
   config: Config,
   reading: QuestionReading,
   chosen: ChosenFacets,
+  ranges: ChosenRanges,
 ): Promise<EngineAnswer> {
   const client = await searchingClient(config);
-  const ticked = facetFilter(chosen);
+  const inRanges = rangesText(ranges);
   const requests = tierRequests(reading);
-  const asked = requests.flatMap((request) => queriesOf(request, ticked));
+  const narrowed = bothTexts(filterText(facetFilter(chosen)), inRanges);
+  const asked = requests.flatMap((request) => queriesOf(request, narrowed));
   // Counts are over everything with the trouble asked about, else over what the widest tier finds.
   const counted = requests.find((request) => request.tier === 'same-trouble') ?? requests.at(-1);
-  const countQuery = (facets: readonly FindFacet[], without?: FindFacet): MultiSearchQuery => ({
+  const countedOver = (narrowedBy: string) => ({
     indexUid: NOTES_INDEX,
     q: counted?.filter ? '' : (counted?.texts[0] ?? ''),
-    filter: filterText(bothFilters(counted?.filter ?? null, facetFilter(chosen, without))),
+    filter: bothTexts(filterText(counted?.filter ?? null), narrowedBy),
     matchingStrategy: counted?.strategy ?? 'last',
+  });
+  const countQuery = (facets: readonly FindFacet[], without?: FindFacet): MultiSearchQuery => ({
+    ...countedOver(bothTexts(filterText(facetFilter(chosen, without)), inRanges)),
     limit: 0,
     facets: [...facets],
   });
+  // Without the ranges: each measure is then counted within the ranges of the others.
+  const measureQuery: MultiSearchQuery = {
+    ...countedOver(filterText(facetFilter(chosen))),
+    limit: MOST_MEASURED,
+    attributesToRetrieve: [...MEASURED_FIELDS],
+  };
   const unticked = FIND_FACETS.filter((facet) => !chosen[facet]);
   const counts = [
     { facets: unticked, query: countQuery(unticked) },
@@ -135,9 +159,15 @@ export async function searchEngine(
       query: countQuery([facet], facet),
     })),
   ];
-  const { results } = await client.multiSearch<{ queries: MultiSearchQuery[] }, Ordered>({
-    queries: [...asked.map((each) => each.query), ...counts.map((each) => each.query)],
-  });
+  const { results } = await client.multiSearch<{ queries: MultiSearchQuery[] }, Ordered & Measured>(
+    {
+      queries: [
+        ...asked.map((each) => each.query),
+        ...counts.map((each) => each.query),
+        measureQuery,
+      ],
+    },
+  );
   const hits = asked.flatMap(({ tier, foundBy, q, strategy }, index) =>
     (results[index]?.hits ?? []).map((document): EngineHit => ({
       tier,
@@ -159,7 +189,8 @@ export async function searchEngine(
         .sort((a, b) => b.count - a.count || a.value.localeCompare(b.value));
     }
   });
-  return { hits, facets };
+  const measured = results[asked.length + counts.length]?.hits ?? [];
+  return { hits, facets, histograms: histogramsOf(measured, ranges) };
 }
 
 /** How many notes each question would find closely: for "loosen this". */

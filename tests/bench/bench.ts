@@ -7,6 +7,7 @@ import type { Deps } from '../../server/deps.ts';
 import { encodePicture } from '../../server/pictures/encode-picture.ts';
 import { reindex } from '../../server/search/reindex.ts';
 import { benchEngine } from './bench-engine.ts';
+import { benchJudgedSearch } from './bench-judged-search.ts';
 import { benchManyNotes } from './bench-many-notes.ts';
 import { benchReader } from './bench-reader.ts';
 import { benchSearch } from './bench-search.ts';
@@ -119,6 +120,7 @@ if (options.documents !== undefined) {
     const port = await serve();
     await benchNotePage(deps, port, databaseUrl);
     await benchSearch(deps, port);
+    await benchJudgedSearch(deps);
     await benchReader();
     await benchLookAlikes();
     await benchPictures();

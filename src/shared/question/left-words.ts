@@ -6,7 +6,7 @@ const EMPTY: ReadonlySet<string> = new Set([...EMPTY_WORDS, ...QUESTION_WORDS, .
 const EVERYWHERE: ReadonlySet<string> = new Set(
   (
     'kiln raku firing firings fire fired temperature temp temps heat degrees pot pots piece pieces ' +
-    'ware glaze glazes glazed reach climb come go peak make take look turn use'
+    'ware glaze glazes glazed reach climb come go peak make take look turn use across'
   ).split(' '),
 );
 

@@ -9,6 +9,8 @@ export type FilterField =
   | 'forms'
   | 'glazes'
   | 'causes'
+  | 'changes'
+  | 'nextChanges'
   | 'fuel'
   | 'kilnSize'
   | 'wind'
@@ -45,6 +47,8 @@ export interface TierRequest {
   readonly tier: Tier;
   /** Null filters nothing. */
   readonly filter: Filter | null;
+  /** Notes that also pass this come first within the tier. */
+  readonly first?: Filter;
   /**
    * Searched one after the other under the same filter, results joined without repeats. The engine
    * insists on the first word of a text, so a last empty text lists what the filter alone allows.
@@ -171,13 +175,58 @@ function inField(field: FilterField, values: readonly (string | null)[]): Filter
   return known.length === 0 ? null : { kind: 'in', field, values: known };
 }
 
-/** First with the words, then without them. */
-function textsOf(words: string): string[] {
-  return words === '' ? [''] : [words, ''];
+/** First with what was typed, then with the words alone, then without any. */
+function textsOf(words: string, typed = ''): string[] {
+  const both = [typed, words].filter((text) => text !== '').join(' ');
+  return [...new Set([both, words, ''])];
 }
 
 function causeWords(causes: readonly Cause[]): string {
   return causes.map((cause) => CAUSES[cause].toLowerCase()).join(' ');
+}
+
+/** Heated so differently from gas that their notes stand apart. */
+const SET_APART: ReadonlySet<string | null> = new Set(['electric', 'wood']);
+/** Troubles whose temperature is measured, so that nearness says more than the same number. */
+const MEASURED_LEVELS: readonly Trouble[] = ['stall', 'sag', 'overshoot'];
+
+/**
+ * What authors may have put into the same words: the cone, the material of the smoke, and the number
+ * of a temperature that no record tells of ("cracked between 540 and 600").
+ */
+function typedTexts({ q, parts, trouble }: QuestionReading): string {
+  const measured = trouble.some((kind) => MEASURED_LEVELS.includes(kind));
+  const texts = parts.flatMap((part) => {
+    const typed = q.slice(...part.span).toLowerCase();
+    if (part.kind === 'cone') return [`cone ${part.value}`];
+    if (part.kind === 'cause' && part.value === 'smoke-material') {
+      return typed.match(/\p{L}{3,}/gu) ?? [];
+    }
+    return part.kind === 'temperature' && !measured ? (typed.match(/\d{2,}/g) ?? []) : [];
+  });
+  return texts.join(' ');
+}
+
+/**
+ * What makes a note the better answer beyond its filter: with a trouble, that the change asked about
+ * was made there or next; without one, that the firing went well. A glaze that stayed dull because
+ * the firing stalled is a matter of the stall.
+ */
+function firstFilter({ trouble, changes, causes }: QuestionReading): Filter | null {
+  if (trouble.length === 0) {
+    return causes.length === 0 ? { kind: 'empty', field: 'troubles' } : null;
+  }
+  if (changes.length > 0) {
+    const of = (['changes', 'nextChanges'] as const).map((field): Filter => ({
+      kind: 'in',
+      field,
+      values: changes,
+    }));
+    return { kind: 'any', of };
+  }
+  return trouble.includes('dull-glaze') && !trouble.includes('stall')
+    ? { kind: 'not-in', field: 'troubles', values: ['stall'] }
+    : null;
 }
 
 /**
@@ -203,7 +252,12 @@ export function tiersFor(reading: QuestionReading): Tiers {
           min: Math.round(sizeCm * (1 - SIZE_SHARE) * 10) / 10,
           max: Math.round(sizeCm * (1 + SIZE_SHARE) * 10) / 10,
         };
+  const { changes } = reading;
+  // How something is done, and not what went wrong: the change itself is what is sought.
+  const onlyChanges = trouble.length === 0 && changes.length > 0;
   const closely = all([
+    onlyChanges ? inField('changes', changes) : null,
+    SET_APART.has(reading.fuel) ? inField('fuel', [reading.fuel]) : null,
     inField('troubles', trouble),
     without,
     temperature,
@@ -215,21 +269,37 @@ export function tiersFor(reading: QuestionReading): Tiers {
     temperature === null ? causesFilter(causes) : null,
   ]);
   const wantsFaster = trouble.length === 0 && reading.minutesOp === '<';
+  const typed = typedTexts(reading);
+  const first = firstFilter(reading);
   const sameTrouble = wantsFaster ? (['slow-climb'] as const) : trouble;
   const broadly =
     sameTrouble.length === 0
-      ? null
+      ? onlyChanges
+        ? inField('nextChanges', changes)
+        : null
       : all([inField('troubles', sameTrouble), without, inField('forms', [form])]);
   const broadWords = [reading.words, causeWords(causes)].filter((text) => text !== '').join(' ');
   return {
     close:
       closely === null
         ? null
-        : { tier: 'close', filter: closely, texts: textsOf(reading.words), strategy: 'last' },
+        : {
+            tier: 'close',
+            filter: closely,
+            ...(first === null ? {} : { first }),
+            texts: textsOf(reading.words, typed),
+            strategy: 'last',
+          },
     sameTrouble:
       broadly === null
         ? null
-        : { tier: 'same-trouble', filter: broadly, texts: textsOf(broadWords), strategy: 'last' },
+        : {
+            tier: 'same-trouble',
+            filter: broadly,
+            ...(first === null || onlyChanges ? {} : { first }),
+            texts: textsOf(broadWords, typed),
+            strategy: 'last',
+          },
     byWords:
       reading.allWords === ''
         ? null

@@ -36,6 +36,7 @@ export const NOT_MEANT: readonly VocabularyEntry[] = [
       'clear jet|burner|port|flue|space|ground|area|view|up',
       'make clear',
       'hang on',
+      'door|lid|gap|wall crack',
       '(horsehair|hair|feather|feathers) @cannot stick|melt|take',
       'open|uncover|lift @bin too early|soon',
       'stuck for ideas',

@@ -138,7 +138,10 @@ export function chooseTemperature(
   let least = farness(items, first, matches);
   for (const other of placed.slice(1)) {
     const far = farness(items, other, matches);
-    if (far < least) [chosen, least] = [other, far];
+    // Of two as near, a stall is at the lower: the higher is where it was to go.
+    const isLevel =
+      far === least && troubles.includes('stall') && other.heat.celsius < chosen.heat.celsius;
+    if (far < least || isLevel) [chosen, least] = [other, far];
   }
   const { heat, index } = chosen;
   const until = heat.directionItem !== null && UNTIL.has(textOf(items, heat.directionItem));
