@@ -254,6 +254,15 @@ CREATE TABLE `published_climbs` (
   CONSTRAINT `published_climbs_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `notes` (`id`) ON DELETE CASCADE
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
+CREATE TABLE `published_figures` (
+  `note_id` bigint(20) unsigned NOT NULL,
+  `version` smallint(5) unsigned NOT NULL,
+  `numbers` longtext CHARACTER SET utf8mb4 COLLATE utf8mb4_bin NOT NULL CHECK (json_valid(`numbers`)),
+  PRIMARY KEY (`note_id`),
+  KEY `published_figures_version_index` (`version`,`note_id`),
+  CONSTRAINT `published_figures_note_foreign` FOREIGN KEY (`note_id`) REFERENCES `published_firings` (`note_id`) ON DELETE CASCADE
+) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
+
 CREATE TABLE `published_firings` (
   `note_id` bigint(20) unsigned NOT NULL,
   `revision_id` bigint(20) unsigned NOT NULL,

@@ -1,5 +1,6 @@
 import { setTimeout as sleep } from 'node:timers/promises';
 import type { Deps } from './deps.ts';
+import { catchUpFigures } from './figures/catch-up-figures.ts';
 import { startHousekeeping } from './housekeeping.ts';
 import { catchUpClimbs } from './look-alikes/catch-up-climbs.ts';
 import { createHandlers } from './outbox/handlers.ts';
@@ -24,7 +25,8 @@ export function startWorkers(deps: Deps): Workers {
   const stopping = new AbortController();
   const catchingUp = Promise.all([
     catchUp(deps, stopping.signal),
-    keepMissingClimbs(deps, stopping.signal),
+    keepMissing(deps, stopping.signal, 'climbs', catchUpClimbs),
+    keepMissing(deps, stopping.signal, 'figures', catchUpFigures),
   ]);
   return {
     async stop() {
@@ -49,14 +51,19 @@ async function catchUp(deps: Deps, signal: AbortSignal): Promise<void> {
   }
 }
 
-/** Once at the start: climbs of notes published before climbs were kept, or kept another way. */
-async function keepMissingClimbs(deps: Deps, signal: AbortSignal): Promise<void> {
+/** Once at the start: what is kept of notes published before it was kept, or kept another way. */
+async function keepMissing(
+  deps: Deps,
+  signal: AbortSignal,
+  what: string,
+  catchUpAll: (db: Deps['db'], signal: AbortSignal) => Promise<number>,
+): Promise<void> {
   while (!signal.aborted) {
     try {
-      await catchUpClimbs(deps.db, signal);
+      await catchUpAll(deps.db, signal);
       return;
     } catch (error) {
-      deps.log.warn({ err: error }, 'the climbs are not caught up yet');
+      deps.log.warn({ err: error, what }, 'what is kept of notes is not caught up yet');
       await sleep(TRY_AGAIN_MILLISECONDS, undefined, { signal }).catch(() => undefined);
     }
   }

@@ -100,11 +100,14 @@ async function readFirings(
 }
 
 /** A kiln's published firings, each told of the next one, as rows of the tables. */
-function rowsOf(firings: readonly Drawn[]): { notes: Rows; firings: Rows; troubles: Rows } {
-  const rows: { notes: Rows; firings: Rows; troubles: Rows } = {
+function rowsOf(
+  firings: readonly Drawn[],
+): Record<'notes' | 'firings' | 'troubles' | 'figures', Rows> {
+  const rows: Record<'notes' | 'firings' | 'troubles' | 'figures', Rows> = {
     notes: [],
     firings: [],
     troubles: [],
+    figures: [],
   };
   for (const [at, drawn] of firings.entries()) {
     const { noteId, revisionId, fields, facts, kilnId, authorId, publishedAt } = drawn;
@@ -126,6 +129,7 @@ function rowsOf(firings: readonly Drawn[]): { notes: Rows; firings: Rows; troubl
     );
     rows.firings.push(projected.firing);
     rows.troubles.push(...projected.troubles);
+    rows.figures.push(projected.figures);
     rows.notes.push({
       id: noteId,
       author_id: authorId,
@@ -174,6 +178,7 @@ export async function loadManyNotes(
       note_revisions: [],
       published_firings: [],
       firing_troubles: [],
+      published_figures: [],
     };
     const add = (table: string, more: Rows): void => {
       rows[table]?.push(...more);
@@ -227,6 +232,7 @@ export async function loadManyNotes(
       );
       add('published_firings', made.firings);
       add('firing_troubles', made.troubles);
+      add('published_figures', made.figures);
       published.push(...firings.map((each) => ({ note: each.noteId, revision: each.revisionId })));
       done += drawn.length;
     }

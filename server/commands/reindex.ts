@@ -1,6 +1,7 @@
 import { readConfig } from '../config.ts';
 import { openDatabase } from '../database/open-database.ts';
 import { createLog } from '../log.ts';
+import { rebuildFigures } from '../figures/catch-up-figures.ts';
 import { rebuildClimbs } from '../look-alikes/catch-up-climbs.ts';
 import { reindex } from '../search/reindex.ts';
 import { withLocalSettings } from '../start/local-settings.ts';
@@ -9,7 +10,7 @@ import { runCommand, say } from './run-command.ts';
 
 /**
  * `npm run reindex` rebuilds what is made from the notes: the search index, without a gap in
- * searching, and the climbs that look-alikes are found by.
+ * searching, the climbs that look-alikes are found by, and the numbers that figures are drawn from.
  */
 await runCommand(async () => {
   const config = readConfig(withLocalSettings(process.env));
@@ -22,6 +23,8 @@ await runCommand(async () => {
     say(`The index holds ${String(indexed)} notes.`);
     const climbs = await rebuildClimbs(db);
     say(`The climbs of ${String(climbs)} notes are read anew, for look-alikes.`);
+    const figures = await rebuildFigures(db);
+    say(`The numbers of ${String(figures)} notes are read anew, for figures.`);
   } finally {
     await db.destroy();
   }

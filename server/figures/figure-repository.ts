@@ -6,7 +6,7 @@ import { readJson } from '../database/read-json.ts';
 import type { PublishedFiring } from './pairs.ts';
 
 /** A firing whose author's account is gone still counts, as one unknown member of its own. */
-const unknownMember = (noteId: number): number => -noteId;
+export const unknownMember = (noteId: number): number => -noteId;
 
 interface RawFiring {
   note_id: number;

@@ -5,6 +5,7 @@ import type { CountedFacts } from '#shared/note/counted-facts.ts';
 import { storyTexts } from '#shared/note/story.ts';
 import type { Trouble } from '#shared/vocabulary/troubles.ts';
 import { countedRevision, type CountedRevision } from '../disputes/counted-revision.ts';
+import { figureRow } from '../figures/catch-up-figures.ts';
 import { outcomesBetween } from '../figures/outcomes-between.ts';
 import { keepClimb } from '../look-alikes/keep-climb.ts';
 import { enqueue } from '../outbox/outbox.ts';
@@ -13,7 +14,7 @@ import { findRevision } from './revision-repository.ts';
 import { slugOf } from './slug.ts';
 
 /**
- * Keeps `published_firings` and `firing_troubles` in step with what is published, inside the
+ * Keeps `published_firings`, `firing_troubles` and `published_figures` in step with what is published, inside the
  * transaction that publishes, corrects, disputes or takes down, and promises the index its change.
  * What is written is what counts: the facts without what the author disputes.
  */
@@ -65,12 +66,18 @@ async function insertFiring(
   authorId: number | null,
   publishedAt: Date,
 ): Promise<void> {
-  const { firing, troubles } = projectedRows(revision, storedRow(revision), authorId, publishedAt);
+  const { firing, troubles, figures } = projectedRows(
+    revision,
+    storedRow(revision),
+    authorId,
+    publishedAt,
+  );
   await trx('published_firings').insert(firing);
   if (troubles.length > 0) await trx('firing_troubles').insert(troubles);
+  await trx('published_figures').insert(figures);
 }
 
-/** The rows of `published_firings` and `firing_troubles` that a published revision stands for. */
+/** The rows of the published firing, its troubles and its figures that a revision stands for. */
 export function projectedRows(
   revision: Pick<CountedRevision, 'id' | 'noteId' | 'kilnId' | 'fields' | 'facts'>,
   row: StoredRow,
@@ -106,6 +113,7 @@ export function projectedRows(
       named: named.has(trouble),
       disputed: disputed.has(trouble),
     })),
+    figures: figureRow(noteId, fields, facts),
   };
 }
 

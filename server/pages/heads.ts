@@ -47,6 +47,11 @@ const FIXED: Readonly<Partial<Record<PagePattern, PageHead>>> = {
     'For each trouble of a raku firing: what was changed next, and how often the trouble was then gone.',
     '/what-helped',
   ),
+  '/figures': page(
+    'Figures',
+    'Cracks, reduction, time to temperature, stalls and gas of published raku firings, in plots with every point and its count.',
+    '/figures',
+  ),
   '/cautions': page('Cautions', 'What to know before firing with gas outdoors.', '/cautions'),
   '/sign-in': page('Sign in'),
   '/join': page('Join'),

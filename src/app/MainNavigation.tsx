@@ -18,6 +18,7 @@ export function MainNavigation() {
   const ways: Way[] = [
     { to: paths.find(), label: 'Find' },
     { to: paths.whatHelped, label: 'What helped' },
+    { to: paths.figures, label: 'Figures' },
     ...(abilities.write
       ? [
           { to: paths.notebook, label: 'Notebook' },

@@ -29,6 +29,7 @@ const PAGES: Readonly<Record<Exclude<PagePattern, '/workbench'>, Page>> = {
   '/what-helped': async () => (await import('../figures/WhatHelpedPage.tsx')).WhatHelpedPage,
   '/what-helped/:trouble': async () =>
     (await import('../figures/WhatHelpedTroublePage.tsx')).WhatHelpedTroublePage,
+  '/figures': async () => (await import('../figures/FiguresPage.tsx')).FiguresPage,
   '/members/:id': async () => (await import('../accounts/MemberPage.tsx')).MemberPage,
   '/cautions': async () => (await import('./CautionsPage.tsx')).CautionsPage,
   '/sign-in': async () => (await import('../accounts/SignInPage.tsx')).SignInPage,

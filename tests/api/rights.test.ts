@@ -82,6 +82,8 @@ const RIGHTS: Readonly<Record<string, Access>> = {
   'get /api/front': 'anyone',
   'get /api/what-helped': 'anyone',
   'get /api/what-helped/:trouble': 'anyone',
+  'get /api/figures/:topic': 'anyone',
+  'get /api/figures/:topic/rows.csv': 'anyone',
   'get /api/admin/members': 'admin',
   'put /api/admin/members/:id/role': 'admin',
   'put /api/admin/members/:id/suspended': 'admin',
