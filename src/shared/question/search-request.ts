@@ -2,6 +2,7 @@ import type { Cause, Trouble } from '../vocabulary/troubles.ts';
 import { CAUSES } from '../vocabulary/troubles.ts';
 import { CONE_TOLERANCE, coneTargetCelsius } from './cone-targets.ts';
 import type { QuestionReading } from './reading-types.ts';
+import { typedTexts } from './typed-texts.ts';
 
 /** Fields of an indexed note that a request may filter by. */
 export type FilterField =
@@ -187,26 +188,6 @@ function causeWords(causes: readonly Cause[]): string {
 
 /** Heated so differently from gas that their notes stand apart. */
 const SET_APART: ReadonlySet<string | null> = new Set(['electric', 'wood']);
-/** Troubles whose temperature is measured, so that nearness says more than the same number. */
-const MEASURED_LEVELS: readonly Trouble[] = ['stall', 'sag', 'overshoot'];
-
-/**
- * What authors may have put into the same words: the cone, the material of the smoke, and the number
- * of a temperature that no record tells of ("cracked between 540 and 600").
- */
-function typedTexts({ q, parts, trouble }: QuestionReading): string {
-  const measured = trouble.some((kind) => MEASURED_LEVELS.includes(kind));
-  const texts = parts.flatMap((part) => {
-    const typed = q.slice(...part.span).toLowerCase();
-    if (part.kind === 'cone') return [`cone ${part.value}`];
-    if (part.kind === 'cause' && part.value === 'smoke-material') {
-      return typed.match(/\p{L}{3,}/gu) ?? [];
-    }
-    return part.kind === 'temperature' && !measured ? (typed.match(/\d{2,}/g) ?? []) : [];
-  });
-  return texts.join(' ');
-}
-
 /**
  * What makes a note the better answer beyond its filter: with a trouble, that the change asked about
  * was made there or next; without one, that the firing went well. A glaze that stayed dull because
@@ -254,7 +235,8 @@ export function tiersFor(reading: QuestionReading): Tiers {
         };
   const { changes } = reading;
   // How something is done, and not what went wrong: the change itself is what is sought.
-  const onlyChanges = trouble.length === 0 && changes.length > 0;
+  const wantsFaster = trouble.length === 0 && reading.minutesOp === '<';
+  const onlyChanges = trouble.length === 0 && changes.length > 0 && !wantsFaster;
   const closely = all([
     onlyChanges ? inField('changes', changes) : null,
     SET_APART.has(reading.fuel) ? inField('fuel', [reading.fuel]) : null,
@@ -268,7 +250,6 @@ export function tiersFor(reading: QuestionReading): Tiers {
     minutesFilter(reading),
     temperature === null ? causesFilter(causes) : null,
   ]);
-  const wantsFaster = trouble.length === 0 && reading.minutesOp === '<';
   const typed = typedTexts(reading);
   const first = firstFilter(reading);
   const sameTrouble = wantsFaster ? (['slow-climb'] as const) : trouble;

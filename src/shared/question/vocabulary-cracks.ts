@@ -16,6 +16,8 @@ export const CRACK_VOCABULARY: readonly VocabularyEntry[] = [
       'ping',
       'go ping',
       '@ware break',
+      '@ware lose',
+      'lose @ware',
       'break @ware',
       '@ware break in|into|apart|across two|half|pieces|bits?',
       'break in|into|apart|across two|half|pieces|bits',

@@ -33,6 +33,7 @@ export const WARE_CHANGE_VOCABULARY: readonly VocabularyEntry[] = [
     means: ['change:ware-off-the-shelf'],
     says: [
       'on stilts|points|props|wads',
+      'on three|3 points|stilts|props|wads',
       'stilt|stilts',
       'raise|lift ware|plate|pot off shelf',
       'off shelf',

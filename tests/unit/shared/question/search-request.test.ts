@@ -110,6 +110,39 @@ describe('tiersFor', () => {
     });
   });
 
+  test('a change asked about without a trouble is sought itself, where it was made and where it came next', () => {
+    const { close, sameTrouble } = tiers('put up a windbreak');
+    expect(close?.filter).toEqual({ kind: 'in', field: 'changes', values: ['wind-shelter'] });
+    expect(sameTrouble?.filter).toEqual({
+      kind: 'in',
+      field: 'nextChanges',
+      values: ['wind-shelter'],
+    });
+  });
+
+  test('beside a trouble, notes with the change asked about come first, and the others stay', () => {
+    const { close } = tiers('stalled at 700, more gas');
+    expect(JSON.stringify(close?.first)).toContain('"nextChanges","values":["gas-more"]');
+    expect(JSON.stringify(close?.filter)).not.toContain('hanges');
+  });
+
+  test('without a trouble firings that went well come first; dull glaze is not a stall’s first', () => {
+    expect(tiers('naked raku').close?.first).toEqual({ kind: 'empty', field: 'troubles' });
+    expect(tiers('raku in the rain').close?.first).toBeUndefined();
+    expect(tiers('dull glaze').close?.first).toEqual({
+      kind: 'not-in',
+      field: 'troubles',
+      values: ['stall'],
+    });
+    expect(tiers('stalled, glaze dull').close?.first).toBeUndefined();
+  });
+
+  test('numbers are sought as typed where no record tells of them, never beside a measured level', () => {
+    expect(tiers('plate cracked between 540 and 600').close?.texts[0]).toBe('540 600');
+    expect(tiers('stalled at 700').close?.texts).toEqual(['']);
+    expect(tiers('cone 06 stalled').close?.texts[0]).toBe('06 cone');
+  });
+
   test('an empty question asks for nothing', () => {
     expect(tiers('')).toEqual({ close: null, sameTrouble: null, byWords: null });
   });
