@@ -366,6 +366,20 @@ CREATE TABLE `revision_pictures` (
   CONSTRAINT `revision_pictures_revision_foreign` FOREIGN KEY (`revision_id`) REFERENCES `note_revisions` (`id`) ON DELETE CASCADE
 ) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
 
+CREATE TABLE `saved_searches` (
+  `id` bigint(20) unsigned NOT NULL AUTO_INCREMENT,
+  `member_id` bigint(20) unsigned NOT NULL,
+  `name` varchar(80) NOT NULL,
+  `search` varchar(5000) NOT NULL,
+  `mails` tinyint(1) NOT NULL DEFAULT 1,
+  `saved_at` datetime(3) NOT NULL DEFAULT current_timestamp(3),
+  `looked_until` datetime(3) NOT NULL DEFAULT current_timestamp(3),
+  `mailed_at` datetime(3) DEFAULT NULL,
+  PRIMARY KEY (`id`),
+  KEY `saved_searches_member_index` (`member_id`,`id`),
+  CONSTRAINT `saved_searches_member_foreign` FOREIGN KEY (`member_id`) REFERENCES `members` (`id`) ON DELETE CASCADE
+) ENGINE=InnoDB DEFAULT CHARSET=utf8mb4 COLLATE=utf8mb4_unicode_ci;
+
 CREATE TABLE `sessions` (
   `id_hash` char(64) CHARACTER SET ascii COLLATE ascii_bin NOT NULL,
   `member_id` bigint(20) unsigned DEFAULT NULL,

@@ -4,6 +4,7 @@ import { purgeAccounts } from './accounts/purge-accounts.ts';
 import type { Deps } from './deps.ts';
 import { purgeRemovedNotes } from './notes/purge-notes.ts';
 import { purgeOutbox } from './outbox/job-repository.ts';
+import { watchSearches } from './saved-searches/watch-searches.ts';
 import { sweepUploads } from './storage/sweep-uploads.ts';
 
 const EVERY_MILLISECONDS = 10 * 60_000;
@@ -25,7 +26,7 @@ export async function tidyUp(db: Knex): Promise<void> {
 }
 
 /** Tidies up every ten minutes until it is stopped. */
-export function startHousekeeping(deps: Pick<Deps, 'db' | 'log' | 'store'>): {
+export function startHousekeeping(deps: Pick<Deps, 'db' | 'log' | 'store' | 'config'>): {
   stop: () => Promise<void>;
 } {
   const stopping = new AbortController();
@@ -36,6 +37,12 @@ export function startHousekeeping(deps: Pick<Deps, 'db' | 'log' | 'store'>): {
         await sweepUploads(deps);
       } catch (error) {
         deps.log.error({ event: 'housekeeping', err: error }, 'could not tidy up');
+      }
+      try {
+        await watchSearches(deps);
+      } catch (error) {
+        // The engine is away, most likely: nothing is marked as looked at, so nothing is missed.
+        deps.log.warn({ event: 'saved-searches', err: error }, 'could not look for news');
       }
       await sleep(EVERY_MILLISECONDS, undefined, { signal: stopping.signal }).catch(
         () => undefined,

@@ -14,6 +14,7 @@ import { noteRoutes } from './notes/note-routes.ts';
 import { pictureRoutes } from './pictures/picture-routes.ts';
 import { questionRoutes } from './questions/question-routes.ts';
 import { recordRoutes } from './records/record-routes.ts';
+import { savedSearchRoutes } from './saved-searches/saved-search-routes.ts';
 import { searchRoutes } from './search/search-routes.ts';
 
 /** Every route of the API, feature by feature; a test compares this with the table of rights. */
@@ -31,6 +32,7 @@ export const ROUTES: readonly Route[] = [
   ...deskRoutes,
   ...disputeRoutes,
   ...searchRoutes,
+  ...savedSearchRoutes,
   ...lookAlikeRoutes,
   ...figureRoutes,
   ...adminRoutes,

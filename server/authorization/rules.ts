@@ -21,6 +21,9 @@ export interface KilnSubject {
 export interface QuestionSubject {
   readonly askerId: number | null;
 }
+export interface SavedSearchSubject {
+  readonly ownerId: number;
+}
 export type NoteAction =
   | 'read'
   | 'read-draft'
@@ -148,6 +151,11 @@ export function canOnKiln(actor: Actor, action: KilnAction, kiln: KilnSubject): 
     case 'fire':
       return (keeper || lent) && !kiln.removed;
   }
+}
+
+/** A saved search is its member's alone: to see, to change, to remove. */
+export function canOnSavedSearch(actor: Actor, search: SavedSearchSubject): boolean {
+  return isMember(actor) && actor.id === search.ownerId;
 }
 
 /** All answers about one note, for the presenter. */

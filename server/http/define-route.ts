@@ -60,6 +60,11 @@ export interface RouteSpec<
   readonly body?: Body;
   /** A create: the same Idempotency-Key gives the first answer again (members only). */
   readonly idempotent?: boolean;
+  /**
+   * A change that programs make which are no page of ours: neither own origin nor token is asked for,
+   * and a form will do. What is in its address must then be the whole right.
+   */
+  readonly fromAnywhere?: boolean;
   /** How often one member, or one client address of visitors, may ask. */
   readonly rate?: ThrottleRule;
   /** Handlers between the access check and the parsing, e.g. an upload. */
@@ -144,7 +149,8 @@ export function defineRoute<
   const mount = (router: Router, deps: Deps): void => {
     const admit: RequestHandler = async (request, _response, next) => {
       requireAccess(request.actor, spec.access);
-      if (isUnsafe(spec.method)) checkOwnOrigin(request, deps.config.publicUrl);
+      if (isUnsafe(spec.method) && !spec.fromAnywhere)
+        checkOwnOrigin(request, deps.config.publicUrl);
       // A create is counted when it is one: its repeats only ask for the first answer again.
       if (spec.rate && !spec.idempotent) await takeTry(deps.db, spec.rate, whoAsks(request));
       next();
@@ -185,7 +191,11 @@ export function defineRoute<
     };
     const before =
       spec.before?.(deps) ??
-      (spec.body ? [requireJson, jsonBody] : isUnsafe(spec.method) ? [requireJson] : []);
+      (spec.body
+        ? [requireJson, jsonBody]
+        : isUnsafe(spec.method) && !spec.fromAnywhere
+          ? [requireJson]
+          : []);
     router[spec.method](spec.path, admit, ...before, run);
   };
   return { method: spec.method, path: spec.path, access: spec.access, mount };

@@ -12,6 +12,8 @@ export const RATES = {
   searches: { name: 'search', limit: 60, windowSeconds: MINUTE },
   disputes: { name: 'dispute', limit: 30, windowSeconds: 60 * MINUTE },
   questions: { name: 'question', limit: 10, windowSeconds: 60 * MINUTE },
+  savedSearches: { name: 'saved-search', limit: 60, windowSeconds: 60 * MINUTE },
+  unsubscribes: { name: 'unsubscribe', limit: 60, windowSeconds: MINUTE },
   answers: { name: 'answer', limit: 60, windowSeconds: 60 * MINUTE },
   exports: { name: 'export', limit: 10, windowSeconds: 60 * MINUTE },
 } as const satisfies Record<string, ThrottleRule>;

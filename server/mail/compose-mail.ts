@@ -8,6 +8,7 @@ import {
 import { makeMailToken } from '../accounts/mail-tokens.ts';
 import type { Deps } from '../deps.ts';
 import type { MailJob } from '../outbox/outbox.ts';
+import { wantsNews } from '../saved-searches/wants-news.ts';
 import { disputeLetter } from './dispute-letter.ts';
 import type { Letter } from './letter.ts';
 import type { Mail } from './mailer.ts';
@@ -23,6 +24,7 @@ import { noteTriedMail } from './messages/note-tried.ts';
 import { passwordChangedMail } from './messages/password-changed.ts';
 import { resetPasswordMail } from './messages/reset-password.ts';
 import { verifyEmailMail } from './messages/verify-email.ts';
+import { newsLetter } from './news-letter.ts';
 import { questionLetter } from './question-letter.ts';
 import { findNoteTitle } from './note-title.ts';
 
@@ -39,7 +41,10 @@ export async function composeMail(
   const member = await findAccountById(db, job.memberId);
   if (!member || !wants(member, job)) return null;
   const link = (path: string): string => `${config.publicUrl}${path}`;
-  const written = await writeLetter(db, job, member, link);
+  const written =
+    job.kind === 'news-of-searches'
+      ? await newsLetter(db, config, job, member, link)
+      : await writeLetter(db, job, member, link);
   return written && { to: addressFor(job, member), ...written };
 }
 
@@ -64,6 +69,8 @@ function wants(member: Account, job: MailJob): boolean {
       return mails.questions && !member.suspended && member.emailVerified;
     case 'note-tried':
       return mails.triedIt && !member.suspended && member.emailVerified;
+    case 'news-of-searches':
+      return wantsNews(member);
     case 'note-handed-in':
       return mails.desk && !member.suspended && member.emailVerified && member.role !== 'member';
     case 'verify-email':
@@ -79,7 +86,7 @@ function wants(member: Account, job: MailJob): boolean {
 
 async function writeLetter(
   db: Knex,
-  job: MailJob,
+  job: Exclude<MailJob, { kind: 'news-of-searches' }>,
   member: Account,
   link: (path: string) => string,
 ): Promise<Letter | null> {

@@ -2,6 +2,8 @@
 export interface Letter {
   readonly subject: string;
   readonly text: string;
+  /** Header fields of our own making: name → value without line ends. */
+  readonly headers?: Readonly<Record<string, string>>;
 }
 
 /**

@@ -7,6 +7,8 @@ export interface Mail {
   readonly subject: string;
   /** Plain text is all that is sent: nothing in it can run, load or hide. */
   readonly text: string;
+  /** Header fields beside the usual ones: name → value. */
+  readonly headers?: Readonly<Record<string, string>>;
 }
 
 export interface SendOptions {
@@ -72,7 +74,7 @@ export function createMailer({ smtpUrl, from }: { smtpUrl: string; from: string 
     next();
   });
   return {
-    send: async ({ to, subject, text }, { messageId, onHandingOver }) => {
+    send: async ({ to, subject, text, headers }, { messageId, onHandingOver }) => {
       const sent = { handedOver: false };
       try {
         await transport.sendMail({
@@ -81,7 +83,12 @@ export function createMailer({ smtpUrl, from }: { smtpUrl: string; from: string 
           text,
           messageId,
           textEncoding: 'quoted-printable',
-          headers: { 'Auto-Submitted': 'auto-generated' },
+          headers: {
+            ...Object.fromEntries(
+              Object.entries(headers ?? {}).map(([name, value]) => [name, oneLine(value)]),
+            ),
+            'Auto-Submitted': 'auto-generated',
+          },
           onLastByte: async () => {
             await onHandingOver();
             sent.handedOver = true;

@@ -34,6 +34,11 @@ export type MailJob =
       byMemberId: number;
     }
   | { kind: 'note-tried'; memberId: number; noteId: number; byNoteId: number }
+  | {
+      kind: 'news-of-searches';
+      memberId: number;
+      finds: { searchId: number; noteIds: number[] }[];
+    }
   | { kind: 'note-handed-in'; memberId: number; noteId: number };
 export type OutboxTopic = keyof OutboxJobs;
 

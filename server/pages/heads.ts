@@ -59,6 +59,8 @@ const FIXED: Readonly<Partial<Record<PagePattern, PageHead>>> = {
   '/new-password': page('New password'),
   '/confirm-address': page('Confirm your address'),
   '/settings': page('Settings'),
+  '/saved-searches': page('Saved searches'),
+  '/unsubscribe': page('End mails about saved searches'),
   '/write': page('Write'),
   '/write/:id': page('Write'),
   '/write/:id/preview': page('Preview'),

@@ -12,6 +12,8 @@ import type { Deps } from '../deps.ts';
 import { readWhatHelped } from '../figures/figure-service.ts';
 import { publishedRows } from '../notes/published-repository.ts';
 import { chosenFacets, countClose, searchEngine, type EngineHit } from './engine-search.ts';
+import { improvementsOf } from './improvements.ts';
+import { chosenRanges } from './measured-ranges.ts';
 import { hitWords, passageOf } from './passage.ts';
 import { plainSearch } from './plain-search.ts';
 import { readShownHits, type ShownHit } from './shown-hits.ts';
@@ -50,6 +52,23 @@ function inOrder(hits: readonly EngineHit[], asked: QuestionReading, sort: FindQ
   return sort === 'nearest' && centre !== null ? orderByNearness(joined, centre) : joined;
 }
 
+/** What the next firing brought, best first; notes without one keep their order at the end. */
+async function mostImproved(db: Knex, hits: readonly EngineHit[]): Promise<EngineHit[]> {
+  const gains = await improvementsOf(
+    db,
+    hits.map(({ document }) => document.noteId),
+  );
+  const rank = ({ document, outcome }: EngineHit): readonly [number, number] => [
+    outcome,
+    gains.get(document.noteId) ?? -Infinity,
+  ];
+  return [...hits].sort((a, b) => {
+    const [outcomeA, gainA] = rank(a);
+    const [outcomeB, gainB] = rank(b);
+    return outcomeB - outcomeA || (gainA === gainB ? 0 : gainB - gainA);
+  });
+}
+
 /** Answers a question: from the engine, or, when it is away, from MariaDB's full text. */
 export async function find(
   db: Knex,
@@ -68,7 +87,7 @@ export async function find(
   const chosen = chosenFacets(query);
   const [pooled, answer] = await Promise.all([
     pooledAnswer(db, asked),
-    searchEngine(deps.config, asked, chosen).catch((error: unknown) => {
+    searchEngine(deps.config, asked, chosen, chosenRanges(query)).catch((error: unknown) => {
       deps.log.warn({ err: error }, 'the engine is away: plain search');
       return null;
     }),
@@ -76,7 +95,8 @@ export async function find(
   if (answer === null) {
     return { ...(await findPlainly(db, query, asked)), parts, pooled };
   }
-  const ordered = inOrder(answer.hits, asked, query.sort);
+  const joined = inOrder(answer.hits, asked, query.sort);
+  const ordered = query.sort === 'improvement' ? await mostImproved(db, joined) : joined;
   const shown = ordered.slice((query.page - 1) * A_PAGE, query.page * A_PAGE);
   // Only what is published now is shown, whatever the index still holds.
   const [published, details] = await Promise.all([
@@ -109,6 +129,7 @@ export async function find(
     page: query.page,
     pages: Math.max(1, Math.ceil(ordered.length / A_PAGE)),
     facets: answer.facets,
+    histograms: answer.histograms,
     pooled,
     loosen: ordered.length === 0 ? await looser(deps, question, units).catch(() => []) : [],
     plain: false,
@@ -128,6 +149,7 @@ async function findPlainly(
     page: query.page,
     pages: Math.max(1, Math.ceil(ids.length / A_PAGE)),
     facets: {},
+    histograms: [],
     loosen: [],
     plain: true,
   };

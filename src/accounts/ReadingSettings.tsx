@@ -1,6 +1,8 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
+import { Link } from 'react-router-dom';
 import type { Me } from '#shared/api/accounts.ts';
+import { paths } from '#shared/paths.ts';
 import { Button } from '../ui/Button.tsx';
 import { CheckField } from '../ui/CheckField.tsx';
 import { SelectField } from '../ui/SelectField.tsx';
@@ -95,6 +97,11 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
           checked={mails.questions}
           onChecked={(questions) => setMails({ questions })}
         />
+        <CheckField
+          label="a new note fits one of my saved searches, at most once a day"
+          checked={mails.savedSearches}
+          onChecked={(savedSearches) => setMails({ savedSearches })}
+        />
         {me.role !== 'member' && (
           <CheckField
             label="a note was handed in and waits on the desk"
@@ -103,7 +110,10 @@ export function ReadingSettings({ me }: { readonly me: Me }) {
           />
         )}
         <p className="text-note text-soot-2">
-          Mails about your password and your address always come.
+          Mails about your password and your address always come.{' '}
+          <Link to={paths.savedSearches} className="link">
+            Your saved searches
+          </Link>
         </p>
       </Aside>
       <FormFoot>

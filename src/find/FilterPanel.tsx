@@ -1,18 +1,28 @@
 import { useState } from 'react';
-import { FIND_FACETS, type FindAnswer, type FindFacet } from '#shared/api/search.ts';
+import {
+  FIND_FACETS,
+  FIND_RANGES,
+  type FindAnswer,
+  type FindFacet,
+  type FindRange,
+} from '#shared/api/search.ts';
 import type { Units } from '#shared/units/units.ts';
 import { Button } from '../ui/Button.tsx';
 import { CrossedBox } from '../ui/ChoiceCell.tsx';
 import { FACET_LABELS, facetWords } from './facet-words.ts';
-import { tickedCount, type FindAddress } from './find-address.ts';
+import { tickedCount, type FindAddress, type RangeEnds } from './find-address.ts';
+import { RangeFilter } from './RangeFilter.tsx';
 
 /** As many values of a filter are shown before one asks for the rest. */
 const FIRST_FEW = 6;
+const NO_ENDS: RangeEnds = { min: null, max: null };
 
 interface Props {
   readonly address: FindAddress;
   readonly facets: FindAnswer['facets'];
+  readonly histograms: FindAnswer['histograms'];
   readonly units: Units;
+  readonly onRange: (range: FindRange, ends: RangeEnds) => void;
   readonly onToggle: (facet: FindFacet, value: string) => void;
   readonly onClear: () => void;
 }
@@ -30,13 +40,26 @@ function shownValues(counted: readonly Value[], ticked: readonly string[]): Valu
 }
 
 /** What the results can be narrowed to, each with the number of notes it would leave. */
-export function FilterPanel({ address, facets, units, onToggle, onClear }: Props) {
+export function FilterPanel({
+  address,
+  facets,
+  histograms,
+  units,
+  onRange,
+  onToggle,
+  onClear,
+}: Props) {
   const groups = FIND_FACETS.map((facet) => ({
     facet,
     ticked: address.facets[facet] ?? [],
     values: shownValues(facets[facet] ?? [], address.facets[facet] ?? []),
   })).filter(({ values }) => values.length > 0);
-  if (groups.length === 0) return null;
+  const measures = FIND_RANGES.map((range) => ({
+    range,
+    ends: address.ranges[range] ?? NO_ENDS,
+    histogram: histograms.find((one) => one.range === range),
+  })).filter(({ range, histogram }) => histogram || address.ranges[range]);
+  if (groups.length === 0 && measures.length === 0) return null;
   return (
     <div className="space-y-5">
       {tickedCount(address) > 0 && (
@@ -46,6 +69,14 @@ export function FilterPanel({ address, facets, units, onToggle, onClear }: Props
       )}
       {groups.map((group) => (
         <FilterGroup key={group.facet} {...group} units={units} onToggle={onToggle} />
+      ))}
+      {measures.map((measure) => (
+        <RangeFilter
+          key={measure.range}
+          {...measure}
+          units={units}
+          onRange={(ends) => onRange(measure.range, ends)}
+        />
       ))}
     </div>
   );

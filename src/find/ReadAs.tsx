@@ -1,15 +1,25 @@
-import { useEffect, useRef } from 'react';
+import { useEffect, useRef, useState } from 'react';
+import type { Units } from '#shared/units/units.ts';
 import { Chip } from '../ui/Chip.tsx';
 import { Icon } from '../ui/Icon.tsx';
+import { partOf } from './edit-question.ts';
+import { EditPart } from './EditPart.tsx';
 import { chipWords, type ReadAsPart } from './read-as.ts';
 
 interface Props {
+  readonly q: string;
+  readonly units: Units;
   readonly parts: readonly ReadAsPart[];
+  /** The question put otherwise. */
+  readonly onChanged: (q: string) => void;
   readonly onToggle: (key: string) => void;
 }
 
 /** How the question was understood, in parts; each can be left out and taken in again. */
-export function ReadAs({ parts, onToggle }: Props) {
+export function ReadAs({ q, units, parts, onChanged, onToggle }: Props) {
+  const [edited, setEdited] = useState<{ readonly q: string; readonly key: string } | null>(null);
+  // The question has changed by other means: what was being edited is no part of it any more.
+  const part = edited?.q === q ? partOf(q, edited.key, units) : null;
   const list = useRef<HTMLUListElement>(null);
   const pressed = useRef<string | null>(null);
   // The pressed button turns into its opposite: the focus stays on it.
@@ -20,7 +30,7 @@ export function ReadAs({ parts, onToggle }: Props) {
     );
     item?.querySelector('button')?.focus();
     pressed.current = null;
-  }, [parts]);
+  }, [parts, edited]);
   const toggle = (key: string): void => {
     pressed.current = key;
     onToggle(key);
@@ -33,9 +43,28 @@ export function ReadAs({ parts, onToggle }: Props) {
       ) : (
         <ul ref={list} className="flex flex-wrap gap-2">
           {parts.map((part) => (
-            <Part key={part.key} part={part} onToggle={() => toggle(part.key)} />
+            <Part
+              key={part.key}
+              part={part}
+              onEdit={() => setEdited({ q, key: part.key })}
+              onToggle={() => toggle(part.key)}
+            />
           ))}
         </ul>
+      )}
+      {part && (
+        <EditPart
+          key={part.key}
+          {...{ q, part, units }}
+          onChanged={(next) => {
+            setEdited(null);
+            onChanged(next);
+          }}
+          onClose={() => {
+            pressed.current = part.key;
+            setEdited(null);
+          }}
+        />
       )}
     </div>
   );
@@ -43,10 +72,11 @@ export function ReadAs({ parts, onToggle }: Props) {
 
 interface PartProps {
   readonly part: ReadAsPart;
+  readonly onEdit: () => void;
   readonly onToggle: () => void;
 }
 
-function Part({ part, onToggle }: PartProps) {
+function Part({ part, onEdit, onToggle }: PartProps) {
   const words = chipWords(part);
   return (
     <li data-part={part.key}>
@@ -61,7 +91,7 @@ function Part({ part, onToggle }: PartProps) {
           <s>{words}</s>
         </button>
       ) : (
-        <Chip onRemove={onToggle} removeLabel={`Leave ${words} out`}>
+        <Chip onEdit={onEdit} onRemove={onToggle} removeLabel={`Leave ${words} out`}>
           {words}
         </Chip>
       )}

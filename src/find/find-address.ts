@@ -1,8 +1,10 @@
 import {
   FIND_FACETS,
+  FIND_RANGES,
   FIND_SORTS,
   MAX_QUESTION,
   type FindFacet,
+  type FindRange,
   type FindSort,
 } from '#shared/api/search.ts';
 
@@ -17,7 +19,26 @@ export interface FindAddress {
   readonly sort: FindSort;
   readonly page: number;
   readonly facets: Readonly<Partial<Record<FindFacet, readonly string[]>>>;
+  readonly ranges: Readonly<Partial<Record<FindRange, RangeEnds>>>;
 }
+
+/** In stored units, both ends included; null leaves an end open. Never both null. */
+export interface RangeEnds {
+  readonly min: number | null;
+  readonly max: number | null;
+}
+
+const MOST_OF_A_RANGE = 99_999;
+const RANGE = /^(\d{1,5}(?:\.\d{1,2})?)?\.\.(\d{1,5}(?:\.\d{1,2})?)?$/;
+
+function readRange(text: string | null): RangeEnds | null {
+  const [, min, max] = RANGE.exec(text ?? '') ?? [];
+  const ends = { min: min ? Number(min) : null, max: max ? Number(max) : null };
+  return ends.min === null && ends.max === null ? null : ends;
+}
+
+const writeEnd = (end: number | null): string =>
+  end === null ? '' : String(Math.round(Math.min(MOST_OF_A_RANGE, Math.max(0, end)) * 100) / 100);
 
 const listOf = (text: string | null): string[] => [
   ...new Set((text ?? '').split(',').filter((value) => value !== '')),
@@ -34,12 +55,18 @@ export function readFindAddress(params: URLSearchParams): FindAddress {
     const values = listOf(params.get(facet));
     if (values.length > 0) facets[facet] = values;
   }
+  const ranges: Partial<Record<FindRange, RangeEnds>> = {};
+  for (const range of FIND_RANGES) {
+    const ends = readRange(params.get(range));
+    if (ends) ranges[range] = ends;
+  }
   return {
     q: (params.get('q') ?? '').slice(0, MAX_QUESTION).trim(),
     off: listOf(params.get('off')),
     sort: isSort(sort) ? sort : 'best',
     page: page >= 1 && page <= MOST_PAGES ? page : 1,
     facets,
+    ranges,
   };
 }
 
@@ -51,6 +78,10 @@ export function writeFindAddress(address: FindAddress): string {
   for (const facet of FIND_FACETS) {
     const values = address.facets[facet] ?? [];
     if (values.length > 0) params.set(facet, values.join(','));
+  }
+  for (const range of FIND_RANGES) {
+    const ends = address.ranges[range];
+    if (ends) params.set(range, `${writeEnd(ends.min)}..${writeEnd(ends.max)}`);
   }
   if (address.sort !== 'best') params.set('sort', address.sort);
   if (address.page > 1) params.set('page', String(address.page));
@@ -80,11 +111,23 @@ export function withFacetToggled(
   return { ...address, facets: { ...address.facets, [facet]: values }, page: 1 };
 }
 
-export function withoutFacets(address: FindAddress): FindAddress {
-  return { ...address, facets: {}, page: 1 };
+/** Sets a range, or takes it away where both ends are open; ends the wrong way round are turned. */
+export function withRange(address: FindAddress, range: FindRange, ends: RangeEnds): FindAddress {
+  const { [range]: _before, ...others } = address.ranges;
+  const { min, max } = ends;
+  if (min === null && max === null) return { ...address, ranges: others, page: 1 };
+  const isTurned = min !== null && max !== null && min > max;
+  const ordered = isTurned ? { min: max, max: min } : ends;
+  return { ...address, ranges: { ...others, [range]: ordered }, page: 1 };
 }
 
-/** How many filters are ticked. */
-export function tickedCount({ facets }: FindAddress): number {
-  return Object.values(facets).reduce((sum, values) => sum + values.length, 0);
+/** Without ticks and ranges. */
+export function withoutFacets(address: FindAddress): FindAddress {
+  return { ...address, facets: {}, ranges: {}, page: 1 };
+}
+
+/** How many filters are ticked or set. */
+export function tickedCount({ facets, ranges }: FindAddress): number {
+  const ticks = Object.values(facets).reduce((sum, values) => sum + values.length, 0);
+  return ticks + Object.keys(ranges).length;
 }

@@ -19,6 +19,7 @@ export function Chip({ children, onEdit, onRemove, removeLabel }: Props) {
         <button
           type="button"
           onClick={onEdit}
+          title="Change"
           className={`${words} underline decoration-dotted underline-offset-4 hover:decoration-solid`}
         >
           {children}

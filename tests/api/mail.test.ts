@@ -232,7 +232,13 @@ describe('mails about notes', () => {
   }) => {
     const author = await aMember(api.db);
     const noteId = await aNote(api, author.id);
-    const silent = { decisions: false, triedIt: false, questions: false, desk: false };
+    const silent = {
+      decisions: false,
+      triedIt: false,
+      questions: false,
+      savedSearches: false,
+      desk: false,
+    };
     const nobody = [
       await aMember(api.db, { settings: { mails: silent } }),
       await aMember(api.db, { suspended: true }),
@@ -244,7 +250,9 @@ describe('mails about notes', () => {
       await promise(api, { kind: 'note-tried', memberId, noteId, byNoteId: noteId }, `t${key}`);
     }
     // For the desk: only moderators, and only those who asked for it.
-    const wish = { mails: { decisions: true, triedIt: true, questions: true, desk: true } };
+    const wish = {
+      mails: { decisions: true, triedIt: true, questions: true, savedSearches: true, desk: true },
+    };
     const staff = [
       await aMember(api.db, { role: 'moderator' }),
       await aMember(api.db, { role: 'member', settings: wish }),

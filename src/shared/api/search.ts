@@ -8,6 +8,7 @@ export const FIND_SORTS = {
   best: 'Best first',
   newest: 'Newest first',
   nearest: 'Nearest temperature',
+  improvement: 'Largest improvement',
 } as const;
 export type FindSort = keyof typeof FIND_SORTS;
 
@@ -24,11 +25,23 @@ export const FIND_FACETS = [
 export type FindFacet = (typeof FIND_FACETS)[number];
 const commaList = z.string().max(400).optional();
 
+/**
+ * Measures a reader may narrow the notes by: levels of stalls and peak in °C, time to temperature and
+ * hold in minutes, the mean rate through 550 to 600 °C in °C a minute. Stored units, whatever is shown.
+ */
+export const FIND_RANGES = ['stall', 'peak', 'climb', 'hold', 'crossing'] as const;
+export type FindRange = (typeof FIND_RANGES)[number];
+/** "690..740", both ends included; one of them may be left out. */
+const range = z
+  .string()
+  .regex(/^(\d{1,5}(\.\d{1,2})?\.\.(\d{1,5}(\.\d{1,2})?)?|\.\.\d{1,5}(\.\d{1,2})?)$/)
+  .optional();
+
 export const findQuerySchema = z.strictObject({
   q: z.string().max(MAX_QUESTION).default(''),
   /** Keys of read-as parts that are switched off. */
   off: commaList,
-  sort: z.enum(['best', 'newest', 'nearest']).default('best'),
+  sort: z.enum(['best', 'newest', 'nearest', 'improvement']).default('best'),
   page: z.coerce.number().int().min(1).max(50).default(1),
   troubles: commaList,
   forms: commaList,
@@ -37,6 +50,11 @@ export const findQuerySchema = z.strictObject({
   kilnSize: commaList,
   causes: commaList,
   weather: commaList,
+  stall: range,
+  peak: range,
+  climb: range,
+  hold: range,
+  crossing: range,
 });
 export type FindQuery = z.output<typeof findQuerySchema>;
 
@@ -76,6 +94,15 @@ export const pooledAnswerSchema = z.object({
   ),
 });
 
+/** How many of the notes asked about lie where: `counts[i]` from `from + i * step`, as wide as a step. */
+export const histogramSchema = z.object({
+  range: z.enum(FIND_RANGES),
+  from: z.number(),
+  step: z.number(),
+  counts: z.array(z.number()),
+});
+export type Histogram = z.infer<typeof histogramSchema>;
+
 export const findAnswerSchema = z.object({
   parts: z.array(partSchema),
   hits: z.array(hitSchema),
@@ -83,6 +110,8 @@ export const findAnswerSchema = z.object({
   page: z.number(),
   pages: z.number(),
   facets: z.record(z.string(), z.array(z.object({ value: z.string(), count: z.number() }))),
+  /** One for every measure that the notes have; the range set on a measure does not narrow its own. */
+  histograms: z.array(histogramSchema).default([]),
   pooled: pooledAnswerSchema.nullable(),
   /** Nothing found: which part to loosen, and how many notes that would give. */
   loosen: z.array(z.object({ key: z.string(), label: z.string(), count: z.number() })),

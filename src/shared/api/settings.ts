@@ -14,6 +14,8 @@ export const memberSettingsSchema = z.strictObject({
       triedIt: z.boolean().default(true),
       /** Somebody asked about one of my notes, or answered a question of mine. */
       questions: z.boolean().default(true),
+      /** New notes that fit a search of mine. */
+      savedSearches: z.boolean().default(true),
       /** For moderators: a note was handed in. */
       desk: z.boolean().default(false),
     })

@@ -202,6 +202,60 @@ describe('FindPage', () => {
   });
 });
 
+describe('a part of the question', () => {
+  it('is changed by its numbers, in the words and the address of the question', async () => {
+    const changed = '/api/search?q=stalled+at+700+to+740+%C2%B0C';
+    answerFetch({
+      ...VISITOR,
+      [`GET ${QUESTION}`]: ok(anAnswer()),
+      [`GET ${changed}`]: ok(anAnswer({ total: 4 })),
+    });
+    const { router } = renderPages(ROUTES, '/find?q=stalled+at+700');
+    await userEvent.click(await screen.findByRole('button', { name: /^near 700/ }));
+    const near = screen.getByRole('textbox', { name: /Near/ });
+    expect(near).toHaveFocus();
+    await userEvent.clear(near);
+    await userEvent.type(near, '720');
+    await userEvent.click(screen.getByRole('button', { name: 'Ask it so' }));
+    expect(await screen.findByText('4 notes found', { selector: 'h2' })).toBeVisible();
+    const q = new URLSearchParams(router.state.location.search).get('q');
+    expect(q).toBe('stalled at 700 to 740 °C');
+    expect(screen.queryByRole('button', { name: 'Ask it so' })).toBeNull();
+  });
+});
+
+describe('a range', () => {
+  const histograms = [{ range: 'peak', from: 600, step: 50, counts: [1, 4, 0, 2] }];
+  const RANGED = `${QUESTION}&peak=650..`;
+
+  it('is set by its fields, stands in the address, and is taken off again', async () => {
+    answerFetch({
+      ...VISITOR,
+      [`GET ${QUESTION}`]: ok(anAnswer({ histograms })),
+      [`GET ${RANGED}`]: ok(anAnswer({ histograms, total: 6 })),
+    });
+    const { router } = renderPages(ROUTES, '/find?q=stalled+at+700');
+    expect(
+      await screen.findByRole('img', {
+        name: /Peak of these notes: 600 to 800.*650 to 700.*\(4\)/,
+      }),
+    ).toBeVisible();
+    await userEvent.type(screen.getByRole('textbox', { name: 'from Peak' }), '650{Enter}');
+    expect(await screen.findByText('6 notes found', { selector: 'h2' })).toBeVisible();
+    expect(router.state.location.search).toBe('?q=stalled+at+700&peak=650..');
+    await userEvent.click(screen.getByRole('button', { name: 'Any peak' }));
+    expect(await screen.findByText('1 note found', { selector: 'h2' })).toBeVisible();
+  });
+
+  it('keeps what cannot be read and says so', async () => {
+    answerFetch({ ...VISITOR, [`GET ${QUESTION}`]: ok(anAnswer({ histograms })) });
+    const { router } = renderPages(ROUTES, '/find?q=stalled+at+700');
+    await userEvent.type(await screen.findByRole('textbox', { name: 'to Peak' }), 'hot{Enter}');
+    expect(screen.getByRole('alert')).toHaveTextContent('Numbers only.');
+    expect(router.state.location.search).toBe('?q=stalled+at+700');
+  });
+});
+
 describe('the "/" key', () => {
   const press = (target: Element) => fireEvent.keyDown(target, { key: '/' });
 
@@ -222,6 +276,7 @@ describe('the "/" key', () => {
     const me = aMe({ settings: { ...defaultSettings(), singleKeys: false } });
     answerFetch({
       'GET /api/session': ok(aSession(me)),
+      'GET /api/saved-searches': ok({ searches: [] }),
       [`GET ${QUESTION}`]: ok(anAnswer()),
     });
     const { client } = renderPages(ROUTES, '/find?q=stalled+at+700');

@@ -4,6 +4,7 @@ import {
   readFindAddress,
   searchOf,
   tickedCount,
+  withRange,
   withFacetToggled,
   withPartToggled,
   writeFindAddress,
@@ -19,7 +20,14 @@ describe('the address of a search', () => {
 
   it('takes what makes no sense as if it were not there', () => {
     const address = read('q=+stall+&sort=prettiest&page=-2&colour=red&off=,,a,a');
-    expect(address).toEqual({ q: 'stall', off: ['a'], sort: 'best', page: 1, facets: {} });
+    expect(address).toEqual({
+      q: 'stall',
+      off: ['a'],
+      sort: 'best',
+      page: 1,
+      facets: {},
+      ranges: {},
+    });
   });
 
   it.each(['0', '51', '1.5e9', 'NaN', ''])('reads page "%s" as the first', (page) => {
@@ -42,6 +50,21 @@ describe('the address of a search', () => {
     const off = withPartToggled(read('q=stall&page=4'), 'trouble:stall');
     expect(off).toMatchObject({ off: ['trouble:stall'], page: 1 });
     expect(withPartToggled(off, 'trouble:stall').off).toEqual([]);
+  });
+
+  it('keeps ranges with one end or two, and drops what is none', () => {
+    const text = 'q=stall&stall=690..740&peak=..1000&hold=5..';
+    expect(writeFindAddress(read(text))).toBe(text);
+    expect(read('peak=..&hold=a..b&climb=5&crossing=-1..2').ranges).toEqual({});
+    expect(tickedCount(read(text))).toBe(3);
+  });
+
+  it('turns a range that is the wrong way round, and takes an open one away', () => {
+    const set = withRange(read('q=stall&page=3'), 'peak', { min: 1000, max: 900.5 });
+    expect(writeFindAddress(set)).toBe('q=stall&peak=900.5..1000');
+    expect(writeFindAddress(withRange(set, 'peak', { min: null, max: null }))).toBe('q=stall');
+    const asked = findQuerySchema.parse(Object.fromEntries(new URLSearchParams(searchOf(set))));
+    expect(asked.peak).toBe('900.5..1000');
   });
 
   it('ticks filters, counts them, and takes a tick away', () => {
