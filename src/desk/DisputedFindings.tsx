@@ -8,6 +8,7 @@ import { paths } from '#shared/paths.ts';
 import type { Units } from '#shared/units/units.ts';
 import { DisputeWords } from '../notes/FindingList.tsx';
 import { momentWords } from '../notes/note-words.ts';
+import { FACT_SEPARATOR } from '../ui/fact-separator.ts';
 import { Button } from '../ui/Button.tsx';
 import { Disclosure } from '../ui/Disclosure.tsx';
 import { Notice } from '../ui/Notice.tsx';
@@ -85,7 +86,7 @@ function DisputeRow({ row, units }: RowProps) {
           </Link>
         </h3>
         <p className="text-small text-soot-2">
-          {author?.name ?? 'A former member'} · {momentWords(dispute.at)}
+          {[author?.name ?? 'A former member', momentWords(dispute.at)].join(FACT_SEPARATOR)}
         </p>
         <p className="max-w-measure text-small font-[600]">{findingText(finding, units)}</p>
         <div className="max-w-measure text-small">

@@ -1,10 +1,11 @@
 import type { NotePageData } from '#shared/api/notes.ts';
+import { QUARTZ_FROM, QUARTZ_TO } from '#shared/firing/constants.ts';
 import type { Finding } from '#shared/firing/findings.ts';
 import { formatDuration, formatSeconds } from '#shared/units/duration.ts';
 import { formatLength } from '#shared/units/length.ts';
 import { formatMass } from '#shared/units/mass.ts';
 import { formatPressure } from '#shared/units/pressure.ts';
-import { formatRate, formatTemperature } from '#shared/units/temperature.ts';
+import { formatRate, formatTemperature, fromCelsius } from '#shared/units/temperature.ts';
 import type { Units } from '#shared/units/units.ts';
 import { formatChamber, formatVolume } from '#shared/units/volume.ts';
 import * as kilnWords from '#shared/vocabulary/kiln.ts';
@@ -37,6 +38,12 @@ function peak(plan: Fields['plan'], units: Units): string | null {
   if (plan.peakBy === 'cone') return plan.peakCone ? `cone ${plan.peakCone}` : null;
   if (plan.peakBy === 'eye') return 'by eye';
   return shown(plan.peakCelsius, (value) => formatTemperature(value, units.temperature));
+}
+
+/** The span across the quartz inversion, in the reader’s degrees. */
+function crossedSpan({ temperature }: Units): string {
+  const from = String(Math.round(fromCelsius(QUARTZ_FROM, temperature)));
+  return `${from} to ${formatTemperature(QUARTZ_TO, temperature)}`;
 }
 
 function crossing(findings: readonly Finding[], units: Units): string | null {
@@ -73,7 +80,7 @@ function climbGroup(
       figure('Peak', peak(plan, units)),
       figure('To temperature', shown(plan.timeToTemperatureMinutes, formatDuration)),
       figure('Hold', plan.noHold ? 'None' : shown(plan.holdKeptMinutes, formatDuration)),
-      figure('550 to 600 °C', crossing(findings, units)),
+      figure(crossedSpan(units), crossing(findings, units)),
       figure('Stall', stalls(findings, units)),
     ],
   };
