@@ -18,7 +18,7 @@ const OF_THE_SAME = 2;
 export function discountedGain(grades: readonly Grade[], places = PLACES): number {
   return grades
     .slice(0, places)
-    .reduce((sum, grade, index) => sum + (2 ** grade - 1) / Math.log2(index + 2), 0);
+    .reduce<number>((sum, grade, index) => sum + (2 ** grade - 1) / Math.log2(index + 2), 0);
 }
 
 /**
