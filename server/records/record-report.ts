@@ -34,7 +34,7 @@ export function recordReport(
 ): RecordReport | ReportError {
   try {
     const { unit, ...firing } = options;
-    const proposed = readAnyRecord(bytes);
+    const proposed = readAnyRecord(bytes, options.targetCelsius ?? null);
     const choice = { ...proposed.choice, unit: unit ?? proposed.choice.unit };
     const { readings, secondProbe, assumed } =
       choice.unit === proposed.unit ? proposed : readTable(decodeRecordBytes(bytes), choice);

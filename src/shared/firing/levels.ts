@@ -170,9 +170,16 @@ function readingsIn(course: Course, from: number, to: number): number[] {
 /** The first name that fits. */
 function kindOf(course: Course, run: Run, median: number, aim: number): LevelKind {
   const { steady: fine } = course;
-  const end = fine.celsius[run.to] ?? 0;
+  const edge = Math.round(EDGE_MINUTES / fine.stepMinutes);
+  // The last half minute may hold the corner into what came after.
+  const end = fine.celsius
+    .subarray(Math.max(run.from, run.to - edge), run.to + 1)
+    .reduce((most, value) => Math.max(most, value), -Infinity);
   const endMinute = fine.minutes[run.to] ?? 0;
-  const reachedLater = firstAtOrAbove(fine, aim - REACHED_BELOW_AIM, endMinute);
+  const reachedLater =
+    end >= aim - REACHED_BELOW_AIM
+      ? endMinute
+      : firstAtOrAbove(fine, aim - REACHED_BELOW_AIM, endMinute);
   if (reachedLater !== null && reachedLater <= endMinute + APPROACH_MINUTES) {
     return median >= aim - JUST_SHORT ? 'hold' : 'approach';
   }

@@ -95,7 +95,10 @@ function aimOf(input: FiringInput, target: number | null, peakCelsius: number): 
   return target === null ? peakCelsius : Math.min(target, peakCelsius);
 }
 
-/** Highest point of the curve from the start on, cooling included. */
+/**
+ * Highest point of the curve from the start on, cooling included. Lines drawn on through a gap may
+ * meet above every reading: no peak is higher than what was read.
+ */
 function peakOf(course: Course): { celsius: number; minute: number } {
   let celsius = -Infinity;
   let minute = 0;
@@ -109,7 +112,8 @@ function peakOf(course: Course): { celsius: number; minute: number } {
       }
     }
   }
-  return { celsius, minute };
+  const highest = course.record.celsius.reduce((most, value) => Math.max(most, value), -Infinity);
+  return { celsius: Math.min(celsius, highest), minute };
 }
 
 function reachedAt(course: Course, level: number): number | null {

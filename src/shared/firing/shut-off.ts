@@ -81,10 +81,26 @@ function kneeOf(
     if (minutes < 1) break;
     const drop = (v[i] ?? 0) - (v[to] ?? 0);
     if (drop < Math.max(STAYS_BELOW, STEEP_RATE * minutes)) continue;
-    const knee = lastNearTop(v, i, to, near);
+    const knee = kneeBetween(fine, i, to, near);
     if ((highestAfter[to] ?? 0) <= (v[knee] ?? 0) - STAYS_BELOW) return fine.minutes[knee] ?? null;
   }
   return slowFall(fine, Math.max(peak, climbsAgain), near, targetCelsius);
+}
+
+/**
+ * Where a span bends from level into its fall: the step farthest above a line that falls half as fast
+ * as the span does, so that a hold that itself sinks a little is not cut at its top. Never before the
+ * last step near the top.
+ */
+function kneeBetween(fine: Curve, from: number, to: number, near: number): number {
+  const v = fine.celsius;
+  const top = highest(v, from, to + 1);
+  const slope = ((v[top] ?? 0) - (v[to] ?? 0)) / Math.max(1, to - top) / 2;
+  let knee = top;
+  for (let i = top; i <= to; i += 1) {
+    if ((v[i] ?? 0) + slope * i > (v[knee] ?? 0) + slope * knee) knee = i;
+  }
+  return Math.max(knee, lastNearTop(v, from, to, near));
 }
 
 /** The last step near the highest of a span: where a level ends and the fall begins. */

@@ -17,7 +17,7 @@ const POINTS = {
   quantity: -3,
   /** Evenly rising without a name: rather another way of writing the time. */
   ramp: -4,
-  /** Times the share of cells in which nothing is connected. */
+  /** Times the share of cells in which nothing is connected, beyond what a loose plug costs. */
   unconnected: -8,
 } as const;
 
@@ -26,6 +26,9 @@ export const UNCONNECTED_SHARE = 0.8;
 /** No sensor for a kiln gives more or less, in any unit. */
 const LEAST_VALUE = -460;
 const MOST_VALUE = 4000;
+
+/** So much of a column lost now and then says nothing against its probe: the first named stays first. */
+const LOOSE_SHARE = 0.1;
 
 export interface RankedProbe {
   readonly column: TableColumn;
@@ -52,7 +55,7 @@ export function rankProbes(columns: readonly TableColumn[], isNamed: boolean): R
       if (meanings.has('average')) score += POINTS.average;
       if (meanings.has('quantity')) score += POINTS.quantity;
       if (!isTemperatureByName(column) && isRamp(column)) score += POINTS.ramp;
-      score += POINTS.unconnected * column.faultShare;
+      score += POINTS.unconnected * Math.max(0, column.faultShare - LOOSE_SHARE);
       const isOddOne = ['reference', 'statistic', 'average', 'quantity'] as const;
       const isSecond =
         (isTemperatureByName(column) || !isNamed) &&

@@ -20,12 +20,14 @@ const SURE = 20;
 
 /**
  * The unit of a probe's numbers: the cells' own, the name's, that of the other temperatures, what the
- * lines above the table say; failing these by the air's temperature beside it, or by range.
+ * lines above the table say; failing these by the air's temperature beside it, or by range and the
+ * firing's target, where one is known.
  */
 export function chooseUnit(
   probe: TableColumn,
   columns: readonly TableColumn[],
   preamble: readonly TableRow[],
+  targetCelsius: number | null = null,
 ): ChosenUnit {
   const own = probe.cellUnit ?? namedUnit(probe);
   const name = columnWords(probe);
@@ -62,7 +64,7 @@ export function chooseUnit(
     const unit = other.index === probe.index ? null : (other.cellUnit ?? namedUnit(other));
     if (unit !== null) return take(unit, `as ${columnWords(other)} is`);
   }
-  const above = unitAbove(preamble);
+  const above = unitAbove(preamble, probe);
   if (above !== null) return take(above.unit, `as line ${above.line} says`);
   const { connected, high } = probe;
   const start = Math.min(connected[0] ?? 0, probe.low);
@@ -76,7 +78,7 @@ export function chooseUnit(
       `because its numbers, ${start} to ${high}, are near the air's temperature in it`,
     );
   }
-  const guess = guessUnit(start, probe.low, high);
+  const guess = guessUnit(start, probe.low, high, targetCelsius);
   const doubt = guess.odds < SURE ? ` It could also be ${WORDS[guess.next]}: please look.` : '';
   const taken = take(
     guess.unit,
@@ -103,15 +105,24 @@ function namedUnit(column: TableColumn): TemperatureUnit | null {
   return column.name.isUnitALetter && unit === 'C' && column.high > HOTTEST_CELSIUS ? null : unit;
 }
 
-/** The one unit that the lines above a table name, alone in a cell or behind "unit". */
-function unitAbove(preamble: readonly TableRow[]): { unit: TemperatureUnit; line: number } | null {
+/**
+ * The one unit that the lines above a table name, alone in a cell or behind "unit". A bare K is kelvin
+ * only there, and only if the numbers allow it: else it is the thermocouple's type.
+ */
+function unitAbove(
+  preamble: readonly TableRow[],
+  probe: TableColumn,
+): { unit: TemperatureUnit; line: number } | null {
+  const mayBeKelvin = probe.connected.length > 0 && probe.low >= COLDEST_KELVIN;
   let found: { unit: TemperatureUnit; line: number } | null = null;
   for (const { line, cells } of preamble) {
     const text = cells.join(' ').toLowerCase();
     const isAboutUnits = /unit|scale|einheit|unité|temp/.test(text);
+    const saysUnit = /unit|scale|einheit|unité/.test(text) && !/typ/.test(text);
     for (const word of text.split(/[\s,;:=()[\]"'#]+/)) {
       const unit = word.length > 1 || isAboutUnits ? temperatureUnit(word) : null;
-      if (unit === null || (unit === 'K' && word.length < 4)) continue;
+      if (unit === null) continue;
+      if (unit === 'K' && word.length < 4 && !(saysUnit && mayBeKelvin)) continue;
       if (found !== null && found.unit !== unit) return null;
       found = { unit, line };
     }

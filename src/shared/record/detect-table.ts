@@ -37,10 +37,11 @@ const SAMPLE = 5;
 
 /**
  * Finds out how a logger's table is written: delimiter, decimal sign and header from its first lines;
- * the time, the probes and their unit from rows spread over the whole of it.
+ * the time, the probes and their unit from rows spread over the whole of it. A known target helps to
+ * tell a unit that nothing names.
  * @throws RecordError when no table, no time or no temperature is found
  */
-export function detectTable(text: string): DetectedTable {
+export function detectTable(text: string, targetCelsius: number | null = null): DetectedTable {
   const layout = detectLayout(text);
   const firstLine = layout.data[0]?.line ?? 1;
   const rows = sampleRows(text, layout.delimiter, firstLine - 1);
@@ -53,7 +54,7 @@ export function detectTable(text: string): DetectedTable {
     (column) => {
       const probe = rankProbes(others(column, null), isNamed)[0]?.column;
       if (probe === undefined) return null;
-      const { unit } = chooseUnit(probe, others(column, null), layout.preamble);
+      const { unit } = chooseUnit(probe, others(column, null), layout.preamble, targetCelsius);
       return probe.values.map((value) => (value === null ? null : celsiusIn(value, unit)));
     },
     layout.decimal,
@@ -65,7 +66,7 @@ export function detectTable(text: string): DetectedTable {
   if (probe === undefined) {
     throw new RecordError('No column of this table can be read as a temperature.', firstLine);
   }
-  const { unit, assumed: unitAssumed } = chooseUnit(probe, left, layout.preamble);
+  const { unit, assumed: unitAssumed } = chooseUnit(probe, left, layout.preamble, targetCelsius);
   const second = ranked.slice(1).find((one) => one.isSecond)?.column ?? null;
   const choice: RecordChoice = {
     delimiter: layout.delimiter,

@@ -23,13 +23,16 @@ export interface ProposedRecord {
 }
 
 /**
- * Reads a logger's file that nobody has said anything about.
+ * Reads a logger's file that nobody has said anything about, but perhaps what the firing was to reach.
  * @throws RecordError with the line, where there is one, for what cannot be read
  */
-export function readAnyRecord(bytes: Uint8Array): ProposedRecord {
+export function readAnyRecord(
+  bytes: Uint8Array,
+  targetCelsius: number | null = null,
+): ProposedRecord {
   const { text, assumed } = decodeRecord(bytes);
   if (text.trim() === '') throw new RecordError('This file is empty.');
-  const table = detectTable(text);
+  const table = detectTable(text, targetCelsius);
   const read = readTable(text, table.choice);
   return {
     readings: read.readings,

@@ -45,6 +45,26 @@ describe('start and end of a firing', () => {
     expect(reading.assumed.some((sentence) => sentence.includes('shut off'))).toBe(true);
   });
 
+  it('a hold that sinks a little is not cut at its top: the end is where the steep fall begins', () => {
+    const reading = read([
+      [0, 10],
+      [40, 1012],
+      [46, 1005],
+      [66, 505],
+    ]);
+    expect(reading.shutOff.inferred).toBe(true);
+    expect(reading.shutOff.minute).toBeCloseTo(46, 0);
+    expect(reading.hold?.minutes).toBeGreaterThan(5.5);
+  });
+
+  it('no peak is higher than what was read, though the lines on both sides of a gap meet above it', () => {
+    const readings = straightLines(PLAIN).filter(({ minute }) => minute < 37 || minute > 48);
+    const highest = Math.max(...readings.map(({ celsius }) => celsius));
+    const reading = readFiring({ readings, targetCelsius: 930 });
+    expect(reading?.peak.celsius).toBeLessThanOrEqual(highest);
+    expect(reading?.overshootCelsius).toBeNull();
+  });
+
   it('a slow fall to the record’s end is cooling too, and no sag', () => {
     const reading = read([
       [0, 10],

@@ -32,6 +32,18 @@ describe('detectTable', () => {
     ]);
   });
 
+  it('takes the first of two like probes, though its plug was loose now and then', () => {
+    const rows = Array.from(
+      { length: 100 },
+      (_, i) => `${i},${i === 40 ? 'OPEN' : 20 + 9 * i},${15 + 9 * i}`,
+    );
+    const loose = detectTable(['Minutes,Probe 1 (°C),Probe 2 (°C)', ...rows].join('\n'));
+    expect([loose.choice.temperatureColumn, loose.choice.secondColumn]).toEqual([1, 2]);
+    const dead = rows.map((row, i) => (i % 2 === 0 ? row : `${i},OPEN,${15 + 9 * i}`));
+    const off = detectTable(['Minutes,Probe 1 (°C),Probe 2 (°C)', ...dead].join('\n'));
+    expect(off.choice.temperatureColumn).toBe(2);
+  });
+
   it('finds the header below a preamble and comments, and a line of units', () => {
     const { table, pairs } = taken(
       '# kiln logger\nSerial: 12\nNote, with comma\n\nTime,Load,Kiln\n[s],[kg],[K]\n0,5,293.15\n30,5,303.15\n60,5,313.15\n',

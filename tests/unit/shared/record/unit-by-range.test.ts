@@ -57,4 +57,45 @@ describe('the unit of temperatures that name none', () => {
     expect(guessUnit(18, 18, 400).unit).toBe('C');
     expect(guessUnit(-5, -5, 900).unit).toBe('C');
   });
+
+  it('is told by a known target where the range leaves two: a warm kiln’s 905 is no 485 °C then', () => {
+    expect(guessUnit(59, 59, 905).unit).toBe('F');
+    expect(guessUnit(59, 59, 905, 905).unit).toBe('C');
+    expect(guessUnit(383, 383, 885, 885).unit).toBe('C');
+    const { text } = loggerFile({ head: ['Minutes,Temp'], startCelsius: 60, peakCelsius: 905 });
+    expect(readAnyRecord(new TextEncoder().encode(text), 905).unit).toBe('C');
+  });
+
+  it('is found, °C from °F, beside a target that was not reached: every stall from 60 % of it up', () => {
+    const wrong: string[] = [];
+    for (const unit of ['C', 'F'] as const) {
+      for (const target of [900, 960, 1010]) {
+        for (const start of [12, 20, 30, 38]) {
+          for (let peak = 0.6 * target; peak <= target + 15; peak += 5) {
+            const low = writtenIn(start, unit);
+            const guess = guessUnit(low, low, writtenIn(peak, unit), target);
+            if (guess.unit !== unit) wrong.push(`${start} to ${peak} of ${target} in ${unit}`);
+          }
+        }
+      }
+    }
+    expect(wrong).toEqual([]);
+  });
+});
+
+describe('a bare K above the table', () => {
+  const unitOf = (line: string, unit: 'C' | 'K', startCelsius = 180) => {
+    const { text } = loggerFile({ head: [line, 'Minutes,Temp'], unit, startCelsius });
+    return readAnyRecord(new TextEncoder().encode(text)).unit;
+  };
+
+  it('is kelvin behind the word unit, if the numbers allow it', () => {
+    expect(unitOf('Unit,K', 'K')).toBe('K');
+    expect(unitOf('Unit: K', 'K', 420)).toBe('K');
+    expect(unitOf('Unit: K', 'C', 20)).toBe('C');
+  });
+
+  it('is the thermocouple’s type behind the word type', () => {
+    expect(unitOf('Unit type,K', 'C', 210)).toBe('C');
+  });
 });
