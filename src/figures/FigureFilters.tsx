@@ -9,7 +9,6 @@ import { FORM_FAMILIES } from '#shared/vocabulary/ware.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { optionsOf } from '../ui/options.ts';
 import { SelectField } from '../ui/SelectField.tsx';
-import { FieldRow } from '../ui/FieldRow.tsx';
 import { groupWords } from './figure-words.ts';
 import { readFiguresAddress, type FiguresAddress } from './figures-address.ts';
 
@@ -57,7 +56,7 @@ export function FigureFilters({ address, figures, onAddress }: Props) {
       className="not-in-print"
       onSubmit={(event) => event.preventDefault()}
     >
-      <FieldRow>
+      <div className="grid grid-cols-[repeat(auto-fill,minmax(min(17rem,100%),1fr))] gap-x-5">
         <SelectField
           label="Figure"
           value={topic}
@@ -116,7 +115,7 @@ export function FigureFilters({ address, figures, onAddress }: Props) {
             onValue={(b) => change({ b })}
           />
         )}
-      </FieldRow>
+      </div>
     </form>
   );
 }

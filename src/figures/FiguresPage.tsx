@@ -90,7 +90,7 @@ function Shown({ figures, address }: ShownProps) {
             </dl>
           </Disclosure>
         )}
-        <HowFiguresComputed topic={figures.topic} />
+        <HowFiguresComputed topic={figures.topic} units={units} />
         {figures.tables.length > 0 && (
           <p className="mt-4 text-small">
             <a href={topicRowsUrl(address.topic, address.query)} download className="link">

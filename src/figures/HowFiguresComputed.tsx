@@ -1,9 +1,11 @@
+import { formatTemperature } from '#shared/units/temperature.ts';
+import type { Units } from '#shared/units/units.ts';
 import type { FigureTopic } from '#shared/vocabulary/figures.ts';
 import { Disclosure } from '../ui/Disclosure.tsx';
 
 const TOPIC_RULES: Readonly<Record<FigureTopic, string>> = {
   cracks:
-    'A piece counts as cracked or not as its author says, whenever the crack was noticed; pieces of which that is not said are left out. Rates are read off the record by the pyrometer.',
+    'A piece counts as cracked or not as its author says, whenever the crack was noticed; pieces of which that is not said are left out.',
   colour:
     'A piece counts where its author says how the colour came out; “partly” counts as not as hoped. Litres of combustible are loose, as poured.',
   'bare-clay':
@@ -17,11 +19,22 @@ const TOPIC_RULES: Readonly<Record<FigureTopic, string>> = {
 };
 
 /** The rules behind the plot, in plain words, with their sources. */
-export function HowFiguresComputed({ topic }: { readonly topic: FigureTopic }) {
+export function HowFiguresComputed({
+  topic,
+  units,
+}: {
+  readonly topic: FigureTopic;
+  readonly units: Units;
+}) {
+  const say = (celsius: number): string => formatTemperature(celsius, units.temperature);
   return (
     <Disclosure summary="How this is computed">
       <div className="max-w-measure space-y-3">
-        <p>{TOPIC_RULES[topic]}</p>
+        <p>
+          {TOPIC_RULES[topic]}
+          {topic === 'cracks' &&
+            ` Rates are read off the record, by the pyrometer: that of the crossing from ${say(550)} to ${say(600)}, on both sides of quartz’s ${say(573)}; the mean rate of the climb from ${say(400)} to ${say(700)}.`}
+        </p>
         <p>
           <strong className="font-[650]">What counts.</strong> Published notes only, without what
           their authors dispute. Cold and hot starts are never pooled. Each piece or firing is in

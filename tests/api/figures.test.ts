@@ -35,7 +35,8 @@ describe('figures', () => {
           groups.filter(({ enough }) => enough).map(({ id }) => id),
         );
         const pairs = a !== undefined && b !== undefined && a !== b ? [{ a, b }] : [];
-        for (const filter of [{}, { ware: 'plate' as const }, { kiln }, ...pairs]) {
+        const filters: Omit<TopicQuery, 'by'>[] = [{}, { ware: 'plate' }, { kiln }, ...pairs];
+        for (const filter of filters) {
           const query = { by, ...filter };
           const got = await figures(visitor, topic, query);
           const where = `${topic} by ${by} ${JSON.stringify(filter)}`;

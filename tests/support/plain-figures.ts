@@ -145,7 +145,7 @@ function listCases(
   topic: FigureTopic,
   by: FigureDimension,
   firings: readonly PlainFiring[],
-  filter: { kiln?: number; ware?: string },
+  filter: { kiln?: number | undefined; ware?: string | undefined },
 ): PlainCase[] {
   const cases: PlainCase[] = [];
   for (const firing of firings) {
@@ -238,7 +238,7 @@ export function plainFigures(
   topic: FigureTopic,
   by: FigureDimension,
   firings: readonly PlainFiring[],
-  filter: { kiln?: number; ware?: string },
+  filter: { kiln?: number | undefined; ware?: string | undefined },
   pair: { readonly a: string; readonly b: string } | null,
 ) {
   let all = listCases(topic, by, firings, filter);
