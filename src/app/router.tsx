@@ -42,7 +42,8 @@ const PAGES: Readonly<Record<Exclude<PagePattern, '/workbench'>, Page>> = {
   '/settings': async () => (await import('../accounts/SettingsPage.tsx')).SettingsPage,
   '/saved-searches': async () =>
     (await import('../saved-searches/SavedSearchesPage.tsx')).SavedSearchesPage,
-  '/unsubscribe': async () => (await import('../saved-searches/UnsubscribePage.tsx')).UnsubscribePage,
+  '/unsubscribe': async () =>
+    (await import('../saved-searches/UnsubscribePage.tsx')).UnsubscribePage,
   '/admin/members': async () => (await import('../admin/AdminMembersPage.tsx')).AdminMembersPage,
   '/admin/state': async () => (await import('../admin/AdminStatePage.tsx')).AdminStatePage,
   '/admin/mail': async () => (await import('../admin/AdminMailPage.tsx')).AdminMailPage,

@@ -28,7 +28,8 @@ export function RangeFilter({ range, ends, histogram, units, onRange }: Props) {
         {RANGE_LABELS[range]} <span className="font-[450] text-soot-2">({unit})</span>
       </legend>
       <div className="clear-both space-y-2 pt-1">
-        {histogram && (
+        {/* One bar says nothing. */}
+        {histogram && histogram.counts.length > 1 && (
           <RangeHistogram histogram={histogram} ends={ends} units={units} onRange={onRange} />
         )}
         <div className="flex items-end gap-2">

@@ -53,18 +53,20 @@ export function ReadAs({ q, units, parts, onChanged, onToggle }: Props) {
         </ul>
       )}
       {part && (
-        <EditPart
-          key={part.key}
-          {...{ q, part, units }}
-          onChanged={(next) => {
-            setEdited(null);
-            onChanged(next);
-          }}
-          onClose={() => {
-            pressed.current = part.key;
-            setEdited(null);
-          }}
-        />
+        <div className="basis-full">
+          <EditPart
+            key={part.key}
+            {...{ q, part, units }}
+            onChanged={(next) => {
+              setEdited(null);
+              onChanged(next);
+            }}
+            onClose={() => {
+              pressed.current = part.key;
+              setEdited(null);
+            }}
+          />
+        </div>
       )}
     </div>
   );

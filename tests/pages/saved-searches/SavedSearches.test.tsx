@@ -1,16 +1,17 @@
 import { screen, waitFor } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
-import { afterEach, describe, expect, it, vi } from 'vitest';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { SavedSearch } from '#shared/api/saved-searches.ts';
 import { defaultSettings } from '#shared/api/settings.ts';
 import { readFindAddress } from '../../../src/find/find-address.ts';
 import { SavedSearchesPage } from '../../../src/saved-searches/SavedSearchesPage.tsx';
 import { SaveSearch } from '../../../src/saved-searches/SaveSearch.tsx';
 import { UnsubscribePage } from '../../../src/saved-searches/UnsubscribePage.tsx';
-import '../../support/dialogs.ts';
+import { giveDialogs } from '../../support/dialogs.ts';
 import { answerFetch, ok } from '../../support/page-fetch.ts';
 import { aMe, aSession, renderPages } from '../../support/render-pages.tsx';
 
+beforeEach(() => giveDialogs());
 afterEach(() => vi.unstubAllGlobals());
 
 const SEARCH = { q: 'stalled at 700', fuel: 'propane', peak: '650..750' };
