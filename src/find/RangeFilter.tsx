@@ -78,8 +78,7 @@ function EndsForm({ range, ends, units, onRange }: Omit<Props, 'histogram'>) {
   };
   const field = (label: string, text: string, setText: (text: string) => void) => (
     <label className="min-w-0 grow text-note text-soot-2">
-      {label}
-      <span className="sr-only"> {RANGE_LABELS[range]}</span>
+      {label} <span className="sr-only">{RANGE_LABELS[range]}</span>
       <input
         className="field-corner reading block w-full min-w-0 text-small text-soot"
         inputMode="decimal"
