@@ -2,11 +2,11 @@ import { Button } from '../ui/Button.tsx';
 import { Notice } from '../ui/Notice.tsx';
 import { SelectField } from '../ui/SelectField.tsx';
 import { dayWords } from './note-words.ts';
-import type { Compared } from './useComparedRecord.ts';
+import { kindOf, type Compared } from './useComparedRecord.ts';
 
-const WORDS = { earlier: 'Earlier', next: 'Next' } as const;
+const WORDS = { earlier: 'Earlier', next: 'Next', alike: 'Climbed like it' } as const;
 
-/** Which other firing of the kiln is drawn over this one, and from where both are counted. */
+/** Which other firing is drawn over this one, and from where both are counted. */
 export function CompareMenu({ compared }: { readonly compared: Compared }) {
   const { choices, choice, choose, alignment, align, litKnown, error } = compared;
   if (choices.length === 0) return null;
@@ -17,9 +17,9 @@ export function CompareMenu({ compared }: { readonly compared: Compared }) {
         value={choice}
         onValue={choose}
         blank="no other firing"
-        options={choices.map(({ value, neighbour }) => ({
+        options={choices.map(({ value, other }) => ({
           value,
-          label: `${WORDS[value]}: ${neighbour.title || 'Untitled'}, ${dayWords(neighbour.firedOn)}`,
+          label: `${WORDS[kindOf(value)]}: ${other.title || 'Untitled'}, ${dayWords(other.firedOn)}`,
         }))}
       />
       {choice !== null && litKnown && (

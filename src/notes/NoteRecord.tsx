@@ -3,6 +3,7 @@ import { useMemo } from 'react';
 import type { NotePageData } from '#shared/api/notes.ts';
 import type { Units } from '#shared/units/units.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
+import { lookAlikeQueries } from '../look-alikes/look-alike-queries.ts';
 import { HeatLegend } from '../ui/HeatLegend.tsx';
 import { RecordChart } from '../ui/RecordChart.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
@@ -12,6 +13,9 @@ import { NoteFindings } from './NoteFindings.tsx';
 import { useComparedRecord } from './useComparedRecord.ts';
 import { useDrawnFindings } from './useDrawnFindings.ts';
 import { useRecordDetail } from './useRecordDetail.ts';
+
+/** Look-alikes offered to be laid over the record; the panel below tells of more. */
+const OFFERED_ALIKE = 3;
 
 interface Props {
   readonly page: NotePageData;
@@ -30,7 +34,15 @@ export function NoteRecord({ page, units, of }: Props) {
   const { findings, marks } = page;
   const drawn = useDrawnFindings(findings, marks, units);
   const own = useMemo(() => ({ points: points ?? [], marks: drawn.marks }), [points, drawn.marks]);
-  const compared = useComparedRecord(page, own);
+  const alike = useQuery({
+    ...lookAlikeQueries.ofNote(page.id, page.revision),
+    enabled: of === 'published' && (points?.length ?? 0) > 1,
+  });
+  const others = (alike.data?.hits ?? [])
+    .slice(0, OFFERED_ALIKE)
+    .map(({ note }) => ({ noteId: note.id, title: note.title, firedOn: note.firedOn }));
+  const { earlier, next } = page;
+  const compared = useComparedRecord({ earlier, next, alike: others }, own);
   const csvHref = `/api/notes/${String(page.id)}/record.csv?of=${of}`;
   return (
     <section aria-labelledby="record" className="space-y-4">

@@ -6,16 +6,22 @@ import { canAlignAtLit, shiftMinutes, type Alignment, type TimedRecord } from '.
 import { drawnMarks } from './drawn-findings.ts';
 import { noteQueries } from './note-queries.ts';
 
-export type Comparison = 'earlier' | 'next';
+/** The firing before or after in the same kiln, or a published look-alike by its note. */
+export type Comparison = 'earlier' | 'next' | `alike-${number}`;
 
-interface Neighbours {
+/** What is needed of another firing to offer and to fetch it. */
+export type OtherFiring = Pick<Neighbour, 'noteId' | 'title' | 'firedOn' | 'status'>;
+
+interface Others {
   readonly earlier: Neighbour | null;
   readonly next: Neighbour | null;
+  /** Published firings that climbed alike, the most alike first. */
+  readonly alike?: readonly Pick<OtherFiring, 'noteId' | 'title' | 'firedOn'>[];
 }
 
 export interface Compared {
-  /** What can be chosen: firings of the same kiln that have a record. */
-  readonly choices: readonly { readonly value: Comparison; readonly neighbour: Neighbour }[];
+  /** What can be chosen: firings that have a record. */
+  readonly choices: readonly { readonly value: Comparison; readonly other: OtherFiring }[];
   readonly choice: Comparison | null;
   readonly choose: (choice: Comparison | null) => void;
   readonly alignment: Alignment;
@@ -28,21 +34,36 @@ export interface Compared {
   readonly retry: () => void;
 }
 
+/** As a word before “firing”. */
+export const COMPARED_WORDS = { earlier: 'earlier', next: 'next', alike: 'similar' } as const;
+export const kindOf = (value: Comparison): keyof typeof COMPARED_WORDS =>
+  value === 'earlier' || value === 'next' ? value : 'alike';
+
 const hasStrip = (neighbour: Neighbour | null): neighbour is Neighbour =>
   (neighbour?.strip?.length ?? 0) > 1;
 
-/** The record of the firing before or after, fetched when it is chosen and laid over this one. */
-export function useComparedRecord({ earlier, next }: Neighbours, own: TimedRecord): Compared {
+/** The record of another firing, fetched when it is chosen and laid over this one. */
+export function useComparedRecord(
+  { earlier, next, alike = [] }: Others,
+  own: TimedRecord,
+): Compared {
   const [wanted, choose] = useState<Comparison | null>(null);
   const [asked, align] = useState<Alignment | null>(null);
-  const choices = [
-    ...(hasStrip(earlier) ? [{ value: 'earlier' as const, neighbour: earlier }] : []),
-    ...(hasStrip(next) ? [{ value: 'next' as const, neighbour: next }] : []),
+  const beside = [earlier?.noteId, next?.noteId];
+  const choices: Compared['choices'] = [
+    ...(hasStrip(earlier) ? [{ value: 'earlier' as const, other: earlier }] : []),
+    ...(hasStrip(next) ? [{ value: 'next' as const, other: next }] : []),
+    ...alike
+      .filter(({ noteId }) => !beside.includes(noteId))
+      .map((other) => ({
+        value: `alike-${other.noteId}` as const,
+        other: { ...other, status: 'published' as const },
+      })),
   ];
   const chosen = choices.find(({ value }) => value === wanted);
-  const id = chosen?.neighbour.noteId ?? 0;
+  const id = chosen?.other.noteId ?? 0;
   // One's own unpublished firing is there as its author would see it.
-  const published = chosen?.neighbour.status === 'published';
+  const published = chosen?.other.status === 'published';
   const page = useQuery({
     ...(published ? noteQueries.page(id) : noteQueries.preview(id)),
     enabled: chosen !== undefined,
@@ -66,7 +87,7 @@ export function useComparedRecord({ earlier, next }: Neighbours, own: TimedRecor
     if (value === null || other === null) return null;
     return {
       points: other.points,
-      label: `${value} firing, “${title || 'Untitled'}”`,
+      label: `${COMPARED_WORDS[kindOf(value)]} firing, “${title || 'Untitled'}”`,
       shiftMinutes: shiftMinutes(own, other, alignment),
     };
   }, [value, other, own, alignment, title]);

@@ -97,6 +97,45 @@ describe('NoteRecord', () => {
     expect(screen.queryByText('The other record could not be fetched.')).not.toBeInTheDocument();
   });
 
+  it('offers firings that climbed alike, but none twice', async () => {
+    const traits = {
+      minutes: 50,
+      peakCelsius: 700,
+      peakMinute: 50,
+      aimCelsius: null,
+      reachedMinute: null,
+      shape: null,
+      rate400To700: null,
+      levels: [],
+      sags: [],
+      hold: null,
+    };
+    const hit = (id: number, title: string) => ({
+      celsius: [15, 35],
+      traits,
+      note: { ...aPage().row, id, title },
+      apartCelsius: 9,
+      sameKiln: false,
+    });
+    answerFetch({
+      'GET /api/notes/31/record?of=published': record(60),
+      'GET /api/notes/31/look-alikes': ok({
+        climb: { celsius: [15, 35], traits },
+        compared: 3,
+        hits: [hit(30, 'Before the fibre'), hit(77, 'Much the same')],
+      }),
+      'GET /api/notes/77': ok(
+        aPage({ id: 77, row: { ...aPage().row, title: 'Much the same' }, marks: [lit(10)] }),
+      ),
+      'GET /api/notes/77/record?of=published': record(50),
+    });
+    show(aPage());
+    const alike = await screen.findByRole('option', { name: /^Climbed like it: Much the same/ });
+    expect(within(await menu()).getAllByRole('option')).toHaveLength(3);
+    await userEvent.selectOptions(await menu(), alike);
+    await screen.findAllByText('similar firing, “Much the same”');
+  });
+
   it('offers only firings with a record, one’s own unpublished one as its author sees it', async () => {
     const sent = answerFetch({
       'GET /api/notes/31/record?of=published': record(60),
