@@ -70,7 +70,7 @@ export async function benchEngine(count: number): Promise<void> {
     const config = testConfig({ search: { url: engine.url, key: engine.key } });
     const pick = <T>(list: readonly T[], round: number): T | undefined => list[round % list.length];
     const ask = async (question: string, ticked: Parameters<typeof searchEngine>[2]) => {
-      const { hits } = await searchEngine(config, readQuestion(question), ticked);
+      const { hits } = await searchEngine(config, readQuestion(question), ticked, {});
       await readShownHits(config, hits.slice(0, 20));
     };
     for (const question of QUESTIONS) {

@@ -53,7 +53,7 @@ export function RecordSection() {
     setRefused(null);
     dismiss();
     try {
-      setCandidate({ source: await sourceOfFile(file), again: null });
+      setCandidate({ source: await sourceOfFile(file, fields.plan.targetCelsius), again: null });
     } catch (error) {
       setCandidate(null);
       setRefused(error instanceof RecordError ? error.message : 'This file could not be opened.');

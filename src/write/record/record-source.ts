@@ -42,10 +42,11 @@ export function sourceOf(
   fileName: string,
   source: RecordSource['source'],
   file: Blob | null = null,
+  targetCelsius: number | null = null,
 ): RecordSource {
   const shared = { text, file, fileName, source, leftOut: [] };
   try {
-    const { choice, assumed } = detectTable(text);
+    const { choice, assumed } = detectTable(text, targetCelsius);
     return { ...shared, choice, assumed, undetected: null };
   } catch (error) {
     if (!(error instanceof RecordError)) throw error;
@@ -55,15 +56,19 @@ export function sourceOf(
 
 /**
  * Reads a chosen file in this browser.
+ * @param targetCelsius tells a unit that the file does not name, where it is known
  * @throws RecordError for what is no table of text at all
  */
-export async function sourceOfFile(file: File): Promise<RecordSource> {
+export async function sourceOfFile(
+  file: File,
+  targetCelsius: number | null = null,
+): Promise<RecordSource> {
   if (file.size === 0) throw new RecordError('This file is empty.');
   const tooLarge = whyTooLarge('record', file.size);
   if (tooLarge !== null) throw new RecordError(tooLarge);
   const bytes = new Uint8Array(await file.arrayBuffer());
   const { text, assumed } = decodeRecord(bytes);
-  const source = sourceOf(text, file.name || 'record.csv', 'file', file);
+  const source = sourceOf(text, file.name || 'record.csv', 'file', file, targetCelsius);
   return { ...source, assumed: [...assumed, ...source.assumed] };
 }
 

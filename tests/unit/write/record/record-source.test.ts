@@ -31,6 +31,14 @@ describe('a table before it is sent', () => {
     expect(source.choice.timeColumn).toBe(0);
   });
 
+  it('is read in the unit that fits the target, where the file names none', async () => {
+    // From a warm kiln at 59: to 905 in °C, or, from a cool day, to 485 °C in °F.
+    const rows = Array.from({ length: 48 }, (_, i) => `${String(i)},${String(59 + 18 * i)}`);
+    const file = new File([['minute,probe', ...rows].join('\n')], 'warm.csv');
+    expect((await sourceOfFile(file, 900)).choice.unit).toBe('C');
+    expect((await sourceOfFile(file, 485)).choice.unit).toBe('F');
+  });
+
   it('can be read once the line that cannot be read is left out', () => {
     const source = sourceOf(table, 'firing.csv', 'file', new Blob([table]));
     expect(() => readTable(source.text, source.choice)).toThrow(/Line 3/);
