@@ -5,6 +5,9 @@ export interface ExponentialApproach {
   readonly timeConstant: number;
   readonly residualSumOfSquares: number;
   readonly count: number;
+  /** Standard deviations of `end` and of the rate 1 ÷ τ, from the curvature at the least squares. */
+  readonly endSd: number;
+  readonly rateSd: number;
 }
 export interface ApproachOptions {
   readonly shortestTimeConstant: number;
@@ -52,7 +55,45 @@ export function fitExponentialApproach(
     timeConstant: 1 / finalK,
     residualSumOfSquares: rss,
     count: x.length,
+    ...deviations(x, rise, finalK, rss, isFixed),
   };
+}
+
+/**
+ * Residual variance × the inverse of JᵀJ, written out: with the start fixed its columns are those of
+ * `end` and k; with a free start that column is projected out of both first.
+ */
+function deviations(
+  x: readonly number[],
+  rise: number,
+  k: number,
+  rss: number,
+  isFixed: boolean,
+): { endSd: number; rateSd: number } {
+  const ofEnd = x.map((value) => -Math.expm1(-k * value));
+  const ofRate = x.map((value) => rise * value * Math.exp(-k * value));
+  const ofStart = isFixed ? null : x.map((value) => Math.exp(-k * value));
+  const [a, b] =
+    ofStart === null ? [ofEnd, ofRate] : [ofEnd, ofRate].map((one) => without(one, ofStart));
+  const aa = product(a, a);
+  const ab = product(a, b);
+  const bb = product(b, b);
+  const variance = rss / (x.length - (isFixed ? 2 : 3));
+  const size = aa * bb - ab * ab;
+  return {
+    endSd: Math.sqrt((variance * bb) / size),
+    rateSd: Math.sqrt((variance * aa) / size),
+  };
+}
+
+function product(a: readonly number[] = [], b: readonly number[] = []): number {
+  return a.reduce((sum, value, i) => sum + value * (b[i] ?? 0), 0);
+}
+
+/** What is left of a column when it is made square to another. */
+function without(column: readonly number[], other: readonly number[]): number[] {
+  const share = product(column, other) / product(other, other);
+  return column.map((value, i) => value - share * (other[i] ?? 0));
 }
 
 interface LinearPart {

@@ -11,6 +11,8 @@ const LONGEST_APPROACH = 45;
 const SHORTEST_APPROACH = 2;
 /** The fit sees so much of the level it settles to, minutes. */
 const LEVEL_SEEN = 20;
+/** A level known no better than this, °C, is none that was settled to. */
+const UNKNOWN_END = 15;
 const MOST_POINTS = 60;
 const FEWEST_POINTS = 8;
 /** The approach must describe the readings about as well as the course itself does. */
@@ -47,7 +49,7 @@ export function settledMinute(
     shortestTimeConstant: 0.5,
     longestTimeConstant: 2 * LONGEST_APPROACH,
   });
-  if (fit === null || fit.end <= fit.start) return null;
+  if (fit === null || fit.end <= fit.start || !(fit.endSd < UNKNOWN_END)) return null;
   const perMean = count / x.length;
   const expected = Math.max(left, (course.scatter.noiseCelsius ** 2 * x.length) / perMean);
   if (fit.residualSumOfSquares > AS_GOOD * expected) return null;

@@ -34,6 +34,13 @@ function gas(random: Random, more: Partial<Kiln> = {}): Kiln {
     ...more,
   };
 }
+/** A kiln whose fire cannot bring it over a level. */
+function settling(random: Random, levelCelsius: number): Kiln {
+  const airCelsius = between(random, 2, 28);
+  const power = between(random, 38, 60);
+  const loss = lossFor(power, levelCelsius, airCelsius);
+  return { power, loss, airCelsius, startCelsius: airCelsius };
+}
 const target = (random: Random): number => 10 * Math.round(between(random, 85, 104));
 const cooling = (random: Random): Step => ({
   kind: 'off',
@@ -157,16 +164,8 @@ export const JUDGED_KINDS = {
   },
   'just-short': (random: Random): JudgedPlan => {
     const targetCelsius = target(random);
-    const airCelsius = between(random, 2, 28);
-    const power = between(random, 38, 55);
-    const level = targetCelsius - between(random, 8, 12);
     return {
-      kiln: {
-        power,
-        loss: lossFor(power, level, airCelsius),
-        airCelsius,
-        startCelsius: airCelsius,
-      },
+      kiln: settling(random, targetCelsius - between(random, 8, 12)),
       plan: [
         { kind: 'burn', toCelsius: 2000, atMostMinutes: between(random, 75, 110) },
         cooling(random),
@@ -177,16 +176,8 @@ export const JUDGED_KINDS = {
   },
   'stalled-then-off': (random: Random): JudgedPlan => {
     const targetCelsius = target(random);
-    const airCelsius = between(random, 2, 28);
-    const power = between(random, 38, 60);
-    const level = between(random, 620, targetCelsius - 50);
     return {
-      kiln: {
-        power,
-        loss: lossFor(power, level, airCelsius),
-        airCelsius,
-        startCelsius: airCelsius,
-      },
+      kiln: settling(random, between(random, 620, targetCelsius - 50)),
       plan: [
         { kind: 'burn', toCelsius: 2000, atMostMinutes: between(random, 60, 110) },
         cooling(random),
@@ -198,16 +189,8 @@ export const JUDGED_KINDS = {
   },
   'stalled-then-mended': (random: Random): JudgedPlan => {
     const targetCelsius = target(random);
-    const airCelsius = between(random, 2, 28);
-    const power = between(random, 38, 60);
-    const level = between(random, 620, targetCelsius - 70);
     return {
-      kiln: {
-        power,
-        loss: lossFor(power, level, airCelsius),
-        airCelsius,
-        startCelsius: airCelsius,
-      },
+      kiln: settling(random, between(random, 620, targetCelsius - 70)),
       plan: [
         { kind: 'burn', toCelsius: 2000, atMostMinutes: between(random, 55, 90) },
         { kind: 'losses', share: between(random, 0.3, 0.5) },

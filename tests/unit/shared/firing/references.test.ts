@@ -4,6 +4,7 @@ import { gasUse, PROPANE_MEGAJOULES_PER_KG } from '#shared/firing/gas.ts';
 import { QUARTZ_FROM, QUARTZ_INVERSION, QUARTZ_TO } from '#shared/firing/constants.ts';
 import { probeTolerance } from '#shared/firing/probe-tolerance.ts';
 import { combustiblePerLitre } from '#shared/firing/reduction.ts';
+import { normalNumber, seededRandom } from '../../../../seeds/simulation/seeded-random.ts';
 import { straightLine } from '#shared/firing/straight-line.ts';
 import type { Probe } from '#shared/vocabulary/kiln.ts';
 import misra from '../../../reference/strd-misra1a.json';
@@ -18,7 +19,7 @@ const digits = (actual: number, certified: number) =>
 
 describe('fits against certified values', () => {
   // Source: NIST Statistical Reference Datasets, Misra1a (tests/reference/strd-misra1a.json).
-  it('the exponential approach finds the certified parameters of Misra1a to 8 digits', () => {
+  it('the exponential approach finds the certified parameters of Misra1a to 8 digits, their deviations to 6', () => {
     const fit = fitExponentialApproach(
       misra.rows.map((row) => row.x),
       misra.rows.map((row) => row.y),
@@ -29,6 +30,8 @@ describe('fits against certified values', () => {
     expect(
       digits(fit.residualSumOfSquares, misra.certified.residual_sum_of_squares),
     ).toBeGreaterThan(8);
+    expect(digits(fit.endSd, misra.certified.b1_sd)).toBeGreaterThan(6);
+    expect(digits(fit.rateSd, misra.certified.b2_sd)).toBeGreaterThan(6);
   });
 
   it('the exponential approach with a free start finds the numbers it was made from', () => {
@@ -38,6 +41,22 @@ describe('fits against certified values', () => {
     expect(fit.end).toBeCloseTo(730, 6);
     expect(fit.start).toBeCloseTo(530, 6);
     expect(fit.timeConstant).toBeCloseTo(9, 6);
+  });
+
+  it('with a free start the deviations are those that many noisy samples show', () => {
+    const x = Array.from({ length: 60 }, (_, i) => i * 0.5);
+    const fits = Array.from({ length: 400 }, (_, seed) => {
+      const random = seededRandom(seed + 1);
+      const y = x.map((t) => 730 - 200 * Math.exp(-t / 9) + normalNumber(random));
+      return fitExponentialApproach(x, y, { shortestTimeConstant: 1, longestTimeConstant: 90 })!;
+    });
+    const mean = fits.reduce((sum, fit) => sum + fit.end, 0) / fits.length;
+    const spread = Math.sqrt(
+      fits.reduce((sum, fit) => sum + (fit.end - mean) ** 2, 0) / fits.length,
+    );
+    const said = fits.reduce((sum, fit) => sum + fit.endSd, 0) / fits.length;
+    expect(said / spread).toBeGreaterThan(0.85);
+    expect(said / spread).toBeLessThan(1.15);
   });
 
   // Source: NIST Statistical Reference Datasets, Norris (tests/reference/strd-norris.json).
