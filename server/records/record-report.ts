@@ -81,6 +81,7 @@ function reportOf(
       to_min: rounded(one.toMinute),
       minutes: rounded(one.minutes),
       rate_c_per_min: rounded(one.ratePerMinute),
+      confidence: one.confidence,
     })),
     levels,
     stalls: levels.filter((level) => level.kind === 'stall'),
@@ -88,6 +89,7 @@ function reportOf(
       from_min: rounded(sag.fromMinute),
       to_min: rounded(sag.toMinute),
       drop_c: rounded(sag.dropCelsius),
+      confidence: sag.confidence,
     })),
     hold: hold && {
       from_min: rounded(hold.fromMinute),
@@ -96,6 +98,7 @@ function reportOf(
       level_c: rounded(hold.levelCelsius),
       off_aim_c: maybe(hold.offAimCelsius),
       sd_c: rounded(hold.sdCelsius),
+      confidence: hold.confidence,
     },
     levelling_off: levellingOff && {
       c: rounded(levellingOff.celsius),
@@ -116,6 +119,7 @@ function levelOf(level: LevelStretch) {
     to_min: rounded(level.toMinute),
     minutes: rounded(level.minutes),
     level_c: rounded(level.levelCelsius),
+    confidence: level.confidence,
   };
 }
 

@@ -102,6 +102,7 @@ describe('every page is sound in both themes, on a phone and on a wide screen', 
       paths.find('zzzz qqqq'),
       paths.find(),
       paths.newest,
+      paths.lookAlikes,
       paths.note(found.id, found.slug),
       paths.kiln(found.kiln.id),
       paths.member(found.author.id),
@@ -115,6 +116,7 @@ describe('every page is sound in both themes, on a phone and on a wide screen', 
       paths.forgottenPassword,
       `${paths.newPassword}#token=none`,
       `${paths.confirmAddress}#token=none`,
+      `${paths.unsubscribe}#token`,
       '/nowhere',
     ]);
     expect(await examineAll(visiting, {}, addresses)).toEqual([]);
@@ -142,6 +144,7 @@ describe('every page is sound in both themes, on a phone and on a wide screen', 
       paths.kiln(kiln.id),
       paths.editKiln(kiln.id),
       paths.settings,
+      paths.savedSearches,
     ]);
     expect(await examineAll(visiting, { as: account }, addresses)).toEqual([]);
   });

@@ -113,7 +113,7 @@ async function writeFirst(page: Page): Promise<void> {
     { minute: 0, what: 'Lit' },
     { minute: STALLED.shutOffMinute, what: 'Shut off' },
   ]);
-  const stall = page.getByText(/^Levelled off at 700\s°C for 16\smin/);
+  const stall = page.getByText(/^Levelled off at 700\s°C for 15\smin/);
   await stall.first().waitFor();
 
   // Said otherwise than measured: the server asks, and takes a sentence for an answer.

@@ -96,6 +96,12 @@ export const UNEVEN_ABOVE = 600;
 /** Scatter above this, °C, is more than the reading of a steady probe: the smallest class 2 tolerance of type K is ±2.5 °C (IEC 60584-2). */
 export const WAVERING_CELSIUS = 2.5;
 
+/** A stretch is well shown where readings stand within a sixth of it, badly where over half of it lies between two (our definition). */
+export const CLOSE_READINGS = 1 / 6;
+export const FAR_READINGS = 1 / 2;
+/** Scatter of half the size of what is told makes it less sure (our definition). */
+export const MUCH_SCATTER = 1 / 2;
+
 /** Forecast of the levelling-off: 30-s means of the last 20 min, none under 15 min (our definition). */
 export const FORECAST_MEAN_MINUTES = 0.5;
 export const FORECAST_MINUTES = 20;

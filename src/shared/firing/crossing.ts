@@ -1,4 +1,6 @@
 import { PACE_BAND, PACE_FROM, QUARTZ_FROM, QUARTZ_TO } from './constants.ts';
+import { confidenceOf } from './confidence.ts';
+import type { Course } from './course.ts';
 import type { Curve } from './curve.ts';
 import { firstAtOrAbove, valueAt } from './curve.ts';
 import { quantile } from '../statistics/quantile.ts';
@@ -8,7 +10,8 @@ import type { QuartzCrossing } from './types.ts';
  * Every climb through the quartz inversion by the pyrometer: from the last upward crossing of
  * 550 °C before 600 °C to 600 °C. A record that begins above 550 °C shows none.
  */
-export function quartzCrossings(fine: Curve): QuartzCrossing[] {
+export function quartzCrossings(course: Course): QuartzCrossing[] {
+  const { fine } = course;
   const crossings: QuartzCrossing[] = [];
   let from: number | null = null;
   for (let i = 1; i < fine.minutes.length; i += 1) {
@@ -24,6 +27,7 @@ export function quartzCrossings(fine: Curve): QuartzCrossing[] {
           toMinute: to,
           minutes,
           ratePerMinute: (QUARTZ_TO - QUARTZ_FROM) / minutes,
+          confidence: confidenceOf(course, from, to, QUARTZ_TO - QUARTZ_FROM),
         });
       }
       from = null;

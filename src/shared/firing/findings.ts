@@ -4,6 +4,7 @@ import { formatDifference, formatRate, formatTemperature } from '../units/temper
 import type { Units } from '../units/units.ts';
 import { MEASURED_TROUBLES, TROUBLE_IDS } from '../vocabulary/troubles.ts';
 import type { MeasuredTrouble, Trouble } from '../vocabulary/troubles.ts';
+import { CONFIDENCES, type Confidence } from './confidence.ts';
 import type { FiringReading, LevelStretch } from './types.ts';
 
 export const FINDING_CODES = [
@@ -36,6 +37,8 @@ export const findingSchema = z.object({
   numbers: z.record(z.string(), z.number()),
   /** What came after a stall or a sag. */
   then: z.enum(['climbed', 'fell', 'shut-off', 'regained', 'held', 'drawn']).nullable(),
+  /** How well the readings show it; told of stretches only, and not by notes read before it was. */
+  confidence: z.enum(CONFIDENCES).optional(),
 });
 export type Finding = z.infer<typeof findingSchema>;
 
@@ -49,18 +52,24 @@ export function findingsOf(reading: FiringReading): Finding[] {
     numbers: Record<string, number>,
     trouble: Trouble | null = null,
     then: Finding['then'] = null,
-  ) => found.push({ code, trouble, fromMinute, toMinute, numbers, then });
+    confidence?: Confidence,
+  ) =>
+    found.push({
+      ...{ code, trouble, fromMinute, toMinute, numbers, then },
+      ...(confidence === undefined ? {} : { confidence }),
+    });
 
   for (const level of reading.levels) addLevel(level, reading, add);
   for (const sag of reading.sags) {
     const { topCelsius, bottomCelsius, dropCelsius } = sag;
     const minutes = sag.toMinute - sag.fromMinute;
     const numbers = { topCelsius, bottomCelsius, dropCelsius, minutes };
-    add('sag', sag.fromMinute, sag.toMinute, numbers, 'sag', sag.then);
+    add('sag', sag.fromMinute, sag.toMinute, numbers, 'sag', sag.then, sag.confidence);
   }
   for (const crossing of reading.quartzCrossings) {
-    const { fromMinute, toMinute, minutes, ratePerMinute } = crossing;
-    add('quartz-crossing', fromMinute, toMinute, { minutes, ratePerMinute });
+    const { fromMinute, toMinute, minutes, ratePerMinute, confidence } = crossing;
+    const numbers = { minutes, ratePerMinute };
+    add('quartz-crossing', fromMinute, toMinute, numbers, null, null, confidence);
   }
   const { aimCelsius, reachedMinute, timeToTemperatureMinutes, peak, hold, start } = reading;
   if (aimCelsius !== null && reachedMinute !== null && timeToTemperatureMinutes !== null) {
@@ -75,12 +84,13 @@ export function findingsOf(reading: FiringReading): Finding[] {
     add('not-reached', peak.minute, peak.minute, numbers);
   }
   if (hold !== null) {
-    add('hold', hold.fromMinute, hold.toMinute, {
+    const numbers = {
       minutes: hold.minutes,
       levelCelsius: hold.levelCelsius,
       sdCelsius: hold.sdCelsius,
       ...(hold.offAimCelsius === null ? {} : { offAimCelsius: hold.offAimCelsius }),
-    });
+    };
+    add('hold', hold.fromMinute, hold.toMinute, numbers, null, null, hold.confidence);
   }
   if (reading.climb.averagePerMinute !== null && reading.climb.steepestPerMinute !== null) {
     const { averagePerMinute, steepestPerMinute } = reading.climb;
@@ -126,6 +136,7 @@ type Add = (
   numbers: Record<string, number>,
   trouble?: Trouble | null,
   then?: Finding['then'],
+  confidence?: Confidence,
 ) => void;
 
 function addLevel(level: LevelStretch, reading: FiringReading, add: Add): void {
@@ -140,7 +151,8 @@ function addLevel(level: LevelStretch, reading: FiringReading, add: Add): void {
     }
   }
   const trouble = level.kind === 'stall' ? 'stall' : null;
-  add(level.kind, level.fromMinute, level.toMinute, numbers, trouble, level.then);
+  const { kind, fromMinute, toMinute, then, confidence } = level;
+  add(kind, fromMinute, toMinute, numbers, trouble, then, confidence);
 }
 
 /** The troubles that the record itself shows, each once, in the order of the list. */
@@ -158,8 +170,15 @@ const THEN_WORDS = {
   drawn: 'then drawn',
 } as const;
 
-/** The sentence of a finding, in the reader's units. */
+/** The sentence of a finding, in the reader's units; a second one where the readings hardly show it. */
 export function findingText(finding: Finding, units: Units): string {
+  const sentence = sentenceOf(finding, units);
+  return finding.confidence === 'low'
+    ? `${sentence} The readings stand too far apart, or scatter too much, to be sure of it.`
+    : sentence;
+}
+
+function sentenceOf(finding: Finding, units: Units): string {
   const n = (name: string) => finding.numbers[name] ?? Number.NaN;
   const has = (name: string) => finding.numbers[name] !== undefined;
   const degrees = (name: string) => formatTemperature(n(name), units.temperature);

@@ -5,6 +5,7 @@ import {
   HOLD_MINUTES,
   HOLD_OFF_AIM,
 } from './constants.ts';
+import { confidenceOf } from './confidence.ts';
 import type { Course } from './course.ts';
 import { indexAtOrAfter } from './course.ts';
 import { firstAtOrAbove } from './curve.ts';
@@ -54,6 +55,7 @@ export function holdOf(course: Course, aim: number, hasAim: boolean): Hold | nul
     levelCelsius: best.median,
     offAimCelsius: hasAim ? best.median - aim : null,
     sdCelsius: spreadOf(course, fromMinute, toMinute, best.median),
+    confidence: confidenceOf(course, fromMinute, toMinute, HOLD_BAND),
   };
 }
 

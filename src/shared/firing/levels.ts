@@ -17,6 +17,7 @@ import {
   WARM_UP_BELOW,
   WIDE_HALF_MINUTES,
 } from './constants.ts';
+import { confidenceOf } from './confidence.ts';
 import type { Course } from './course.ts';
 import { indexAtOrAfter } from './course.ts';
 import { firstAtOrAbove, stepAt } from './curve.ts';
@@ -81,6 +82,7 @@ export function levelStretches(
       minutes: length,
       levelCelsius: median,
       then: kind === 'stall' ? whatCameAfter(course, run, median) : null,
+      confidence: confidenceOf(course, at(run.from), at(run.to), LEVEL_GAP_CELSIUS),
     });
   }
   return stretches.map((stretch) => answered(course, stretch, stretches, answers));

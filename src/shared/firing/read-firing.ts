@@ -57,7 +57,7 @@ export function readFiring(input: FiringInput): FiringReading | null {
     paceCelsiusPerMinute: pace,
     climb: climbOf(course, topMinute, levels),
     hundreds: hundredsOf(fine, firingPeak),
-    quartzCrossings: quartzCrossings(fine),
+    quartzCrossings: quartzCrossings(course),
     rate400To700: span400To700 === null ? null : 300 / span400To700,
     levels,
     sags: sagsOf(course, nameAim),

@@ -7,6 +7,7 @@ import {
   SAG_MINUTES,
   SAG_RATE,
 } from './constants.ts';
+import { confidenceOf } from './confidence.ts';
 import type { Course } from './course.ts';
 import { firstAtOrAbove } from './curve.ts';
 import type { Sag } from './types.ts';
@@ -56,6 +57,7 @@ export function sagsOf(course: Course, aim: number): Sag[] {
       bottomCelsius,
       dropCelsius,
       then: regained ? 'regained' : isLast ? 'drawn' : 'held',
+      confidence: confidenceOf(course, fromMinute, toMinute, dropCelsius),
     });
   }
   return sags;

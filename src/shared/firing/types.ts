@@ -1,4 +1,5 @@
 import type { DrawnBecause, Fuel, Probe } from '../vocabulary/kiln.ts';
+import type { Confidence } from './confidence.ts';
 import type { MarkKind } from '../vocabulary/marks.ts';
 
 /** One reading: minutes since the record's own zero, degrees Celsius. */
@@ -44,6 +45,7 @@ export interface LevelStretch {
   readonly levelCelsius: number;
   /** What came after it, said of a stall. */
   readonly then: 'climbed' | 'fell' | 'shut-off' | null;
+  readonly confidence: Confidence;
 }
 export interface Sag {
   readonly fromMinute: number;
@@ -52,6 +54,7 @@ export interface Sag {
   readonly bottomCelsius: number;
   readonly dropCelsius: number;
   readonly then: 'regained' | 'held' | 'drawn';
+  readonly confidence: Confidence;
 }
 export interface Hold {
   readonly fromMinute: number;
@@ -61,12 +64,14 @@ export interface Hold {
   /** Level minus aim; null when there is no aim. */
   readonly offAimCelsius: number | null;
   readonly sdCelsius: number;
+  readonly confidence: Confidence;
 }
 export interface QuartzCrossing {
   readonly fromMinute: number;
   readonly toMinute: number;
   readonly minutes: number;
   readonly ratePerMinute: number;
+  readonly confidence: Confidence;
 }
 export type ClimbShape = 'steady' | 'racing-then-creeping' | 'stepped';
 export interface LevellingOff {

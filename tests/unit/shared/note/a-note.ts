@@ -90,6 +90,7 @@ export function aReading(over: Partial<FiringReading> = {}): FiringReading {
       minutes: 3,
       levelCelsius: 1002,
       offAimCelsius: 2,
+      confidence: 'high',
       sdCelsius: 1,
     },
     overshootCelsius: null,
@@ -113,6 +114,7 @@ export function aReading(over: Partial<FiringReading> = {}): FiringReading {
 /** A stall at 708 °C from minute 29 for 17 min. */
 export function aStall(over: Partial<LevelStretch> = {}): LevelStretch {
   return {
+    confidence: 'high',
     kind: 'stall',
     fromMinute: 29,
     toMinute: 46,

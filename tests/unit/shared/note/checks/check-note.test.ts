@@ -355,6 +355,7 @@ function holdOf(minutes: number) {
     minutes,
     levelCelsius: 1002,
     offAimCelsius: 2,
+    confidence: 'high' as const,
     sdCelsius: 1,
   };
 }
