@@ -5,7 +5,6 @@ import { paths } from '#shared/paths.ts';
 import { FIGURE_DIMENSIONS, FIGURE_TOPICS } from '#shared/vocabulary/figures.ts';
 import { useSession } from '../accounts/useSession.ts';
 import { ProblemPage } from '../http/ProblemPage.tsx';
-import { Disclosure } from '../ui/Disclosure.tsx';
 import { EmptyState } from '../ui/EmptyState.tsx';
 import { LiveRegion } from '../ui/LiveRegion.tsx';
 import { Skeleton } from '../ui/Skeleton.tsx';
@@ -15,6 +14,7 @@ import { FigureFilters } from './FigureFilters.tsx';
 import { readFiguresAddress, writeFiguresAddress, type FiguresAddress } from './figures-address.ts';
 import { HowFiguresComputed } from './HowFiguresComputed.tsx';
 import { StartSection } from './StartSection.tsx';
+import { LeftOut } from './LeftOut.tsx';
 
 /** What the published firings show together, as plots with their points, intervals and counts. */
 export function FiguresPage() {
@@ -62,7 +62,6 @@ interface ShownProps {
 
 function Shown({ figures, address }: ShownProps) {
   const { units } = useSession();
-  const left = figures.leftOut.reduce((sum, { count }) => sum + count, 0);
   return (
     <>
       {figures.tables.length === 0 && (
@@ -75,21 +74,7 @@ function Shown({ figures, address }: ShownProps) {
         <StartSection key={table.startClass} figures={figures} table={table} units={units} />
       ))}
       <div>
-        {left > 0 && (
-          <Disclosure summary={`Left out: ${String(left)}, and why`}>
-            <dl className="max-w-measure border-t border-line">
-              {figures.leftOut.map(({ reason, count }) => (
-                <div
-                  key={reason}
-                  className="flex items-baseline justify-between gap-6 border-b border-line py-1.5"
-                >
-                  <dt className="text-soot-2 first-letter:uppercase">{reason}</dt>
-                  <dd className="reading">{count}</dd>
-                </div>
-              ))}
-            </dl>
-          </Disclosure>
-        )}
+        <LeftOut reasons={figures.leftOut} />
         <HowFiguresComputed topic={figures.topic} units={units} />
         {figures.tables.length > 0 && (
           <p className="mt-4 text-small">

@@ -1,6 +1,5 @@
 import type { WhatHelped, WhatHelpedRow } from '#shared/api/figures.ts';
 import { TROUBLE_SHORT } from '#shared/vocabulary/troubles.ts';
-import { Disclosure } from '../ui/Disclosure.tsx';
 import { IntervalBar } from '../ui/IntervalBar.tsx';
 import { Reading } from '../ui/Reading.tsx';
 import { ShareScale } from '../ui/ShareScale.tsx';
@@ -14,6 +13,7 @@ import {
   type HelpedTable,
 } from './helped-words.ts';
 import { NotesBehind } from './NotesBehind.tsx';
+import { LeftOut } from './LeftOut.tsx';
 
 interface Props {
   readonly helped: WhatHelped;
@@ -26,7 +26,6 @@ const memberWords = (members: number): string =>
 /** One start class and one source: no change named first, then the changes by their evidence. */
 export function HelpedTableSection({ helped, table }: Props) {
   const id = `${table.startClass}-${table.source}`;
-  const left = table.leftOut.reduce((sum, { count }) => sum + count, 0);
   const reference = table.ranked.find(({ change }) => change === null);
   return (
     <section aria-labelledby={id} className="space-y-4">
@@ -55,21 +54,7 @@ export function HelpedTableSection({ helped, table }: Props) {
         </div>
       )}
       {table.tooFew.length > 0 && <TooFew helped={helped} rows={table.tooFew} />}
-      {left > 0 && (
-        <Disclosure summary={`Left out: ${String(left)}, and why`}>
-          <dl className="max-w-measure border-t border-line">
-            {table.leftOut.map(({ reason, count }) => (
-              <div
-                key={reason}
-                className="flex items-baseline justify-between gap-6 border-b border-line py-1.5"
-              >
-                <dt className="text-soot-2 first-letter:uppercase">{reason}</dt>
-                <dd className="reading">{count}</dd>
-              </div>
-            ))}
-          </dl>
-        </Disclosure>
-      )}
+      <LeftOut reasons={table.leftOut} />
     </section>
   );
 }
