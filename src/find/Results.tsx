@@ -61,13 +61,15 @@ export function Results({ found, address, isSettled, hasTemperature, go }: Resul
   return (
     <section aria-label="Notes" className="space-y-4">
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
-        {!isNothing && (
-          <h2 className="text-section">
-            {isAsked || ticked > 0 ? `${noteCount(found.total)} found` : 'Newest notes'}
-          </h2>
-        )}
-        {!isSettled && <BusyMark words="Looking again" />}
-        {(isAsked || ticked > 0) && <SaveSearch address={address} />}
+        <div className="flex flex-wrap items-baseline gap-x-6 gap-y-2">
+          {!isNothing && (
+            <h2 className="text-section">
+              {isAsked || ticked > 0 ? `${noteCount(found.total)} found` : 'Newest notes'}
+            </h2>
+          )}
+          {!isSettled && <BusyMark words="Looking again" />}
+          {(isAsked || ticked > 0) && <SaveSearch address={address} />}
+        </div>
         {isAsked && !found.plain && found.total > 1 && (
           <SelectField
             label="Order of the notes"
