@@ -110,7 +110,7 @@ export function findingsOf(reading: FiringReading): Finding[] {
     const numbers = { largestCelsius, minutes: toMinute - fromMinute };
     add('uneven-heat', fromMinute, toMinute, numbers, 'uneven-heat');
   }
-  if (reading.levellingOff !== null && reachedMinute === null) {
+  if (reading.levellingOff !== null) {
     const { celsius, lowCelsius, highCelsius, reachesAim } = reading.levellingOff;
     const end = reading.shutOff.minute;
     const isForecast = reachesAim !== null && aimCelsius !== null;

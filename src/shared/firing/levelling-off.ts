@@ -14,7 +14,7 @@ const FEWEST_MEANS = 8;
 /** The fire of an hour ago says no more of where it levels off now, minutes. */
 const LONGEST_WINDOW = 60;
 /** Time constants tried, evenly in the logarithm. */
-const TRIED = 240;
+const TRIED = 120;
 /** A meter that shows whole degrees: a reading is never trusted further than this, °C. */
 const LEAST_SD = 0.5;
 /** T∞, T0 and τ. */

@@ -65,12 +65,16 @@ export function readFiring(input: FiringInput): FiringReading | null {
     overshootCelsius: overshoot >= OVERSHOOT - 1e-6 ? overshoot : null,
     slowClimbMinutes: slowClimb(input, timeToTemperature, reachedMinute, levels),
     unevenHeat: unevenHeat(course, input.secondProbe),
-    levellingOff: levellingOff(
-      record.minutes.subarray(0, course.to),
-      record.celsius.subarray(0, course.to),
-      course.marks,
-      aim,
-    ),
+    // Where the fire is going is no question any more once it has been there.
+    levellingOff:
+      reachedMinute !== null
+        ? null
+        : levellingOff(
+            record.minutes.subarray(0, course.to),
+            record.celsius.subarray(0, course.to),
+            course.marks,
+            aim,
+          ),
     minutesAboveAimLess50: aim === null ? null : timeAbove(course, aim - 50),
     waveringCelsius: waveringOf(course),
     probeToleranceCelsius: probeTolerance(input.probe, peak.celsius),

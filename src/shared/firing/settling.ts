@@ -13,7 +13,7 @@ const SHORTEST_APPROACH = 2;
 const LEVEL_SEEN = 20;
 /** A level known no better than this, °C, is none that was settled to. */
 const UNKNOWN_END = 15;
-const MOST_POINTS = 60;
+const MOST_POINTS = 40;
 const FEWEST_POINTS = 8;
 /** The approach must describe the readings about as well as the course itself does. */
 const AS_GOOD = 1.8;

@@ -58,17 +58,16 @@ export function cornersOf(points: Points): Corners {
   return fittedCorners(points, joined(points, straightLines(points)));
 }
 
-/** Running sums, by which the line through any span of points costs a few multiplications. */
+/**
+ * Running sums, by which the line through any span of points costs a few multiplications: of weight,
+ * time, level and their products w, wt, wy, wtt, wty, wyy, six beside each other for each point.
+ */
 interface Sums {
-  readonly w: Float64Array;
-  readonly t: Float64Array;
-  readonly y: Float64Array;
-  readonly tt: Float64Array;
-  readonly ty: Float64Array;
-  readonly yy: Float64Array;
+  readonly all: Float64Array;
   readonly originMinute: number;
   readonly originCelsius: number;
 }
+const SIX = 6;
 
 function straightLines(points: Points): Line[] {
   const n = points.minutes.length;
@@ -112,45 +111,47 @@ function sumsOf({ minutes, celsius, errors }: Points): Sums {
   const n = minutes.length;
   const originMinute = at(minutes, n >> 1);
   const originCelsius = at(celsius, n >> 1);
-  const make = () => new Float64Array(n + 1);
-  const [w, t, y, tt, ty, yy] = [make(), make(), make(), make(), make(), make()];
+  const all = new Float64Array(SIX * (n + 1));
   for (let i = 0; i < n; i += 1) {
-    const x = at(minutes, i) - originMinute;
-    const v = at(celsius, i) - originCelsius;
-    const weight = 1 / at(errors, i) ** 2;
-    w[i + 1] = at(w, i) + weight;
-    t[i + 1] = at(t, i) + weight * x;
-    y[i + 1] = at(y, i) + weight * v;
-    tt[i + 1] = at(tt, i) + weight * x * x;
-    ty[i + 1] = at(ty, i) + weight * x * v;
-    yy[i + 1] = at(yy, i) + weight * v * v;
+    const t = at(minutes, i) - originMinute;
+    const y = at(celsius, i) - originCelsius;
+    const w = 1 / at(errors, i) ** 2;
+    const added = [w, w * t, w * y, w * t * t, w * t * y, w * y * y];
+    for (let k = 0; k < SIX; k += 1) {
+      all[SIX * (i + 1) + k] = at(all, SIX * i + k) + (added[k] ?? 0);
+    }
   }
-  return { w, t, y, tt, ty, yy, originMinute, originCelsius };
+  return { all, originMinute, originCelsius };
 }
 
 /** Squared distance, in standard errors, of points[from..end) from the line through them. */
-function leftOver(sums: Sums, from: number, end: number): number {
+function leftOver({ all }: Sums, from: number, end: number): number {
   if (end - from <= 2) return 0;
-  const w = at(sums.w, end) - at(sums.w, from);
-  const t = at(sums.t, end) - at(sums.t, from);
-  const y = at(sums.y, end) - at(sums.y, from);
-  const tt = at(sums.tt, end) - at(sums.tt, from) - (t * t) / w;
-  const ty = at(sums.ty, end) - at(sums.ty, from) - (t * y) / w;
-  const yy = at(sums.yy, end) - at(sums.yy, from) - (y * y) / w;
-  return Math.max(0, tt > 0 ? yy - (ty * ty) / tt : yy);
+  const a = SIX * from;
+  const b = SIX * end;
+  const w = at(all, b) - at(all, a);
+  const t = at(all, b + 1) - at(all, a + 1);
+  const y = at(all, b + 2) - at(all, a + 2);
+  const tt = at(all, b + 3) - at(all, a + 3) - (t * t) / w;
+  const ty = at(all, b + 4) - at(all, a + 4) - (t * y) / w;
+  const yy = at(all, b + 5) - at(all, a + 5) - (y * y) / w;
+  const left = tt > 0 ? yy - (ty * ty) / tt : yy;
+  return left > 0 ? left : 0;
 }
 
-function lineThrough(sums: Sums, from: number, end: number): Line {
-  const w = at(sums.w, end) - at(sums.w, from);
-  const t = (at(sums.t, end) - at(sums.t, from)) / w;
-  const y = (at(sums.y, end) - at(sums.y, from)) / w;
-  const tt = at(sums.tt, end) - at(sums.tt, from) - w * t * t;
-  const ty = at(sums.ty, end) - at(sums.ty, from) - w * t * y;
+function lineThrough({ all, originMinute, originCelsius }: Sums, from: number, end: number): Line {
+  const a = SIX * from;
+  const b = SIX * end;
+  const w = at(all, b) - at(all, a);
+  const t = (at(all, b + 1) - at(all, a + 1)) / w;
+  const y = (at(all, b + 2) - at(all, a + 2)) / w;
+  const tt = at(all, b + 3) - at(all, a + 3) - w * t * t;
+  const ty = at(all, b + 4) - at(all, a + 4) - w * t * y;
   return {
     from,
     to: end - 1,
-    level: y + sums.originCelsius,
-    originMinute: t + sums.originMinute,
+    level: y + originCelsius,
+    originMinute: t + originMinute,
     slope: end - from > 1 && tt > 0 ? ty / tt : 0,
   };
 }
