@@ -55,7 +55,7 @@ export function truthOf(course: Course, aim: number, smoothMinutes: number): Tru
     startMinute: course.litMinute,
     reachedMinute: reached === null ? null : reached * STEP_MINUTES,
     pace,
-    levels: [...levelsOf(firing, pace, 1, 1, reached).map((one) => ({ ...one, doubtful: false }))],
+    levels: levelsOf(firing, pace, 1, 1).map((one) => ({ ...one, doubtful: false })),
     sags: sagsOf(firing, course),
     hold: holdOf(firing),
     crossings: crossingsOf(raw),
@@ -71,9 +71,8 @@ export function doubtfulLevels(course: Course, aim: number, smoothMinutes: numbe
   const lines = slopes(y, smoothMinutes > 0 ? smoothMinutes : 0.25, end);
   const firing = { y: level, rate: lines, from, end, aim };
   const pace = paceOf({ ...firing, y });
-  const reached = first(y, from, end, aim - 5);
-  const strict = levelsOf(firing, pace, 0.75, 1.3, reached);
-  return levelsOf(firing, pace, 1.25, 0.8, reached)
+  const strict = levelsOf(firing, pace, 0.75, 1.3);
+  return levelsOf(firing, pace, 1.25, 0.8)
     .filter((wide) => !strict.some((sure) => sure.from < wide.to && sure.to > wide.from))
     .map((one) => ({ ...one, doubtful: true }));
 }
@@ -115,7 +114,6 @@ function levelsOf(
   pace: number | null,
   rateShare: number,
   lengthShare: number,
-  reached: number | null,
 ): Omit<TrueLevel, 'doubtful'>[] {
   const { y, rate, from, end, aim } = firing;
   const limit = rateShare * Math.min(2, pace === null ? 2 : pace / 4);
@@ -150,7 +148,6 @@ function levelsOf(
       else if (level < 350) kind = 'warm-up';
       else if (level < 600 && later(level + 50)) kind = 'pause';
       else kind = 'stall';
-      void reached;
       return { kind, from: run.from * STEP_MINUTES, to: run.to * STEP_MINUTES, level };
     });
 }
